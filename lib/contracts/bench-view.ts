@@ -1,0 +1,142 @@
+import type { StepGroup } from '../sequence/step';
+import type { LikelyCause, NoVerdictReason, RejectReason } from '../run/types';
+import type { TrimView } from '../trim/types';
+
+/** What the server sends to a bench screen: one whole view per change, with readings beside it at display rate. */
+
+/** A sentence of the bench catalogue (`code` is its key) with its parameters. Numbers are formatted by the screen. */
+export interface Say {
+  code: string;
+  params?: Record<string, string | number>;
+}
+
+/** Calibration, daily check, commissioning: one row of the station panel. */
+export interface ReadinessItem {
+  key: 'meter' | 'supply' | 'fixture' | 'daily-check' | 'commissioned' | 'training' | 'links' | 'database';
+  label: string;
+  state: 'good' | 'soon' | 'bad';
+  /** ISO times; null where it does not expire or is unknown. */
+  validFrom: string | null;
+  validUntil: string | null;
+  sentence: Say;
+}
+
+export interface RailFlag {
+  side: 'trip' | 'release';
+  volts: number;
+  /** Hollow: an earlier attempt, or stale since the screw moved. */
+  hollow: boolean;
+  note: 'too-low' | 'too-high' | 'before' | 'after-beep-1' | null;
+}
+
+/** The rails: what is printed (scale, limits) and what is measured. Volts. */
+export interface RailsView {
+  scaleMinVolts: number;
+  scaleMaxVolts: number;
+  tripLimits: { min: number; max: number } | null;
+  releaseLimits: { min: number; max: number } | null;
+  guardVolts: { tripMin: number; tripMax: number; releaseMin: number; releaseMax: number } | null;
+  targetVolts: number | null;
+  flags: RailFlag[];
+  /** How far the supply travelled with the load on (falling) and off (rising) in the current or last search. */
+  travelled: {
+    fallingOnToVolts: number | null;
+    fallingOffToVolts: number | null;
+    risingOffToVolts: number | null;
+    risingOn: boolean;
+  };
+  hysteresisVolts: number | null;
+}
+
+export type SupplyView = { state: 'off'; volts: number } | { state: 'maybe-on' } | { state: 'on'; volts: number };
+
+/** The run on the fixture, as `viewRun` makes it. */
+export interface RunView {
+  serial: string;
+  attempt: number;
+  stepGroups: { group: StepGroup; state: 'done' | 'current' | 'ahead' }[];
+  rails: RailsView;
+  supply: SupplyView;
+  startedAtMs: number;
+  screen:
+    | { kind: 'seat'; wants: 'close-lid' | 'place-board' | 'confirm-lid-and-board' | 'nothing' }
+    | { kind: 'measuring'; what: Say; done: number; of: number | null }
+    | { kind: 'trim'; trim: TrimView; clockwiseRaises: boolean }
+    | { kind: 'seal'; wants: 'supply-off' | 'open-lid' | 'seal-screw' | 'close-lid' }
+    | { kind: 'operator-check'; question: string }
+    | { kind: 'pass'; seconds: number }
+    | {
+        kind: 'reject';
+        reason: RejectReason;
+        cause: LikelyCause | null;
+        measured: { value: number; unit: string; limit: number | null } | null;
+      }
+    | {
+        kind: 'no-verdict';
+        reason: NoVerdictReason;
+        code: string | null;
+        detail: Say | null;
+        failingWhenStopped: boolean;
+        stoppedAtVolts: number | null;
+      };
+}
+
+/** One mark a board, in serial or test order: . ahead, P pass, W pass on a later attempt, R reject, N no verdict, C current. */
+export interface LotStrip {
+  lotId: string;
+  code: string;
+  boardTypeCode: string;
+  size: number;
+  marks: string;
+  tested: number;
+  passed: number;
+  rejected: number;
+  secondsEach: number | null;
+}
+
+export interface BenchView {
+  /** Rises with every change; a screen drops an older view. */
+  revision: number;
+  station: {
+    code: string;
+    name: string;
+    fixture: string;
+    simulated: boolean;
+    hasController: boolean;
+    hasWiperProbe: boolean;
+    /** Day, night, or as the system says. */
+    scheme: 'day' | 'night' | 'system';
+  };
+  operator: { accountId: string; number: string; locale: string } | null;
+  lot: LotStrip | null;
+  run: RunView | null;
+  readiness: ReadinessItem[];
+  call: { sinceIso: string; acknowledgedBy: string | null } | null;
+  label: { serial: string; state: 'waiting' | 'printed' | 'failed'; problem: string | null } | null;
+  /** The newest refusal of a scan or action, shown beside what was tried. */
+  refusal: (Say & { serial: string | null; atIso: string }) | null;
+  screen:
+    | { kind: 'badge' }
+    | { kind: 'pin'; operatorNumber: string; badgeReadIso: string; retryAtIso: string | null; problem: Say | null }
+    | { kind: 'may-not-test'; reasons: (Say & { faultCode: string })[]; otherStation: string | null }
+    | {
+        kind: 'choose-lot';
+        lots: { lotId: string; code: string; boardTypeCode: string; size: number; tested: number }[];
+      }
+    | { kind: 'idle'; last: { serial: string; verdict: 'pass' | 'reject' | 'no-verdict'; seconds: number } | null }
+    /** The fixture was not seen empty since the last run. */
+    | { kind: 'empty-fixture'; nextSerial: string | null }
+    /** `run` says what to show. */
+    | { kind: 'run' }
+    /** A reject waits for its bin scan. */
+    | { kind: 'bin'; binCode: string }
+    /** The station starts, reconnects its instruments, or its database is away. */
+    | { kind: 'starting'; what: Say };
+}
+
+/** Sent at display rate while the supply is on; never stored in the view. */
+export interface BenchReading {
+  volts: number;
+  output: 'on' | 'off' | null;
+  rail: 'falling' | 'rising' | 'off';
+}
