@@ -24,6 +24,10 @@ export const benchCommandSchema = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('call-engineer') }),
   z.object({ kind: z.literal('print-label-again') }),
   z.object({ kind: z.literal('end-shift') }),
+  /** An engineer at the bench measures the station; the reference board is on the fixture. */
+  z.object({ kind: z.literal('start-commissioning') }),
+  /** Leaves the result of a daily check or of a commissioning. */
+  z.object({ kind: z.literal('continue') }),
   z.object({ kind: z.literal('scheme'), scheme: z.enum(['day', 'night', 'system']) }),
   z.object({ kind: z.literal('locale'), locale: z.string().min(2).max(8) }),
   /** A batch of a component changed at the bench. */
@@ -84,5 +88,14 @@ export interface HandsView {
 /** Answer to a command. A refusal is expected, has a code and a sentence of the catalogue. */
 export type CommandReply = { ok: true } | { ok: false; code: string; params?: Record<string, string | number> };
 
-/** socket.io: namespace /bench, room by station. Server to client: 'view' BenchView, 'reading' BenchReading, 'hands' HandsView. Client to server: 'command' BenchCommand, 'hands' HandsCommand, both acknowledged with CommandReply. */
+/** One screen of a station leads; further ones watch, and their commands are refused. */
+export interface ScreenRole {
+  leads: boolean;
+}
+
+/**
+ * socket.io: namespace /bench, `auth: { station: code }` in the handshake, room by station. Server to client: 'role'
+ * ScreenRole, 'view' BenchView, 'reading' BenchReading, 'hands' HandsView. Client to server: 'command' BenchCommand,
+ * 'hands' HandsCommand, both acknowledged with CommandReply.
+ */
 export const benchNamespace = '/bench';

@@ -1,5 +1,5 @@
 import type { StepGroup } from '../sequence/step';
-import type { LikelyCause, NoVerdictReason, RejectReason } from '../run/types';
+import type { CommissioningValues, LikelyCause, NoVerdictReason, RejectReason } from '../run/types';
 import type { TrimView } from '../trim/types';
 
 /** What the server sends to a bench screen: one whole view per change, with readings beside it at display rate. */
@@ -94,6 +94,15 @@ export interface LotStrip {
   secondsEach: number | null;
 }
 
+/** A known point of the reference board against what the station found. Volts. */
+export interface ReferencePoint {
+  quantity: 'trip-volts' | 'release-volts';
+  knownVolts: number;
+  toleranceVolts: number;
+  measuredVolts: number | null;
+  passed: boolean;
+}
+
 export interface BenchView {
   /** Rises with every change; a screen drops an older view. */
   revision: number;
@@ -107,8 +116,10 @@ export interface BenchView {
     /** Day, night, or as the system says. */
     scheme: 'day' | 'night' | 'system';
   };
-  operator: { accountId: string; number: string; locale: string } | null;
+  operator: { accountId: string; number: string; locale: string; mayCommission: boolean } | null;
   lot: LotStrip | null;
+  /** What the next run of the lot will be: shown while idle. Null without a lot. */
+  next: { stepGroups: StepGroup[]; rails: RailsView } | null;
   run: RunView | null;
   readiness: ReadinessItem[];
   call: { sinceIso: string; acknowledgedBy: string | null } | null;
@@ -128,8 +139,19 @@ export interface BenchView {
     | { kind: 'empty-fixture'; nextSerial: string | null }
     /** `run` says what to show. */
     | { kind: 'run' }
-    /** A reject waits for its bin scan. */
+    /** A reject waits for its bin scan; `run` shows the reject. */
     | { kind: 'bin'; binCode: string }
+    /** The reference board was measured. `continue` leaves this screen. */
+    | { kind: 'daily-check'; passed: boolean; points: ReferencePoint[]; validUntilIso: string | null }
+    /** An engineer measures the station with the reference board. `stop` ends it, `continue` leaves the result. */
+    | {
+        kind: 'commissioning';
+        state: 'seat' | 'measuring' | 'done' | 'failed';
+        what: Say;
+        done: number;
+        of: number;
+        values: CommissioningValues | null;
+      }
     /** The station starts, reconnects its instruments, or its database is away. */
     | { kind: 'starting'; what: Say };
 }
