@@ -16,6 +16,7 @@ export const noVerdictReasons = [
   'lid-opened',
   'bench-lost',
   'contact-lost',
+  'board-removed',
   'overvoltage-tripped',
   'interrupted',
   'shutdown',
@@ -88,8 +89,8 @@ export interface RunPlan {
   pollMs: number;
   fastLink: boolean;
   prior: SearchPrior | null;
-  /** Relative and fixed part of the meter's standard uncertainty for a reading near the points. */
-  meter: { gain: number; offsetVolts: number };
+  /** Relative and fixed part of the meter's standard uncertainty for a reading near the points; its last digit. */
+  meter: { gain: number; offsetVolts: number; resolutionVolts: number };
   seed: number;
 }
 
@@ -112,6 +113,8 @@ export interface Measurement {
   phase: 'found' | 'trimmed' | 'verified' | 'check';
   value: number;
   standardUncertainty: number | null;
+  /** U, for a coverage of about 95 % (Welch-Satterthwaite). */
+  expandedUncertainty: number | null;
   min: number | null;
   max: number | null;
   /** Limits as judged, drawn in by the guard band. */
@@ -125,6 +128,9 @@ export interface Measurement {
 /**
  * What the engine asks of the station. Each but `record-run` is answered by exactly one event with the same `id`, or by
  * `fault`. `kind` names follow what the station does with its instruments; the station decides nothing.
+ *
+ * At most one effect is outstanding, but for one case: a run that is stopped asks `supply-off` while another effect is
+ * still being performed. The station breaks the older one off; an answer to it is ignored.
  */
 export type RunEffect =
   | { kind: 'read-fixture'; id: number }
