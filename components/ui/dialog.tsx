@@ -1,0 +1,48 @@
+'use client';
+
+import { Dialog as Radix } from 'radix-ui';
+import { useRef, type ReactNode } from 'react';
+
+interface DialogProps {
+  open: boolean;
+  onOpenChange: (open: boolean) => void;
+  /** A question. */
+  title: string;
+  /** What follows from a yes. */
+  consequence?: ReactNode;
+  children?: ReactNode;
+  /** Buttons that repeat the verb; the safe one carries `data-safe`. */
+  actions?: ReactNode;
+  /** Where the first focus goes: the safe choice, or the first field of a form. */
+  focus?: 'safe' | 'first-field';
+}
+
+/** A sheet on an 8 px sill. The title asks; focus starts on the safe choice. */
+export function Dialog({ open, onOpenChange, title, consequence, children, actions, focus = 'safe' }: DialogProps) {
+  const sheet = useRef<HTMLDivElement>(null);
+  const first = focus === 'safe' ? '[data-safe]' : 'input, textarea, select';
+  return (
+    <Radix.Root open={open} onOpenChange={onOpenChange}>
+      <Radix.Portal>
+        <Radix.Overlay className="fixed inset-0 z-20 bg-ink-3 opacity-60" />
+        <Radix.Content
+          ref={sheet}
+          onOpenAutoFocus={(event) => {
+            const target = sheet.current?.querySelector<HTMLElement>(first);
+            if (!target) return;
+            event.preventDefault();
+            target.focus();
+          }}
+          className="fixed top-1/2 left-1/2 z-20 max-h-[94dvh] w-[min(94vw,480px)] -translate-x-1/2 -translate-y-1/2 overflow-y-auto border-2 border-b-8 border-ink bg-sheet px-6 py-5"
+        >
+          <Radix.Title className="text-lead font-bold leading-tight">{title}</Radix.Title>
+          <Radix.Description asChild>
+            <div className="mt-1.5 text-body">{consequence}</div>
+          </Radix.Description>
+          {children ? <div className="mt-4 grid gap-4">{children}</div> : null}
+          {actions ? <div className="mt-5 flex flex-wrap items-center gap-4">{actions}</div> : null}
+        </Radix.Content>
+      </Radix.Portal>
+    </Radix.Root>
+  );
+}
