@@ -4,6 +4,10 @@ export interface Clock {
   now(): number;
   /** Calendar time in milliseconds since the epoch. */
   wallTimeMs(): number;
+  /** Calls `run` once after `ms`; the returned function cancels it. */
+  after(ms: number, run: () => void): Cancel;
   /** Resolves after `ms`; rejects with the signal's reason when aborted. */
   sleep(ms: number, signal?: AbortSignal): Promise<void>;
 }
+
+export type Cancel = () => void;
