@@ -22,13 +22,22 @@ export interface TrimSettings {
   fastLink: boolean;
   /** Channel 103 near the trip point, when it was read. */
   referenceVolts: number | null;
+  /** Supply at which channel 103 was read; taken as the trip point found when absent. */
+  referenceAtVolts?: number | null;
+}
+
+/** The board's points as measured before the trim. */
+export interface FoundPoints {
+  tripVolts: number;
+  tripUncertaintyVolts: number;
+  releaseVolts: number;
 }
 
 /** What the station is to do for the trim. Every command is answered by one observation. */
 export type TrimCommand =
   /** Search for both points from here; `check` asks for the end check. Answered by `searched`. */
   | { kind: 'search'; wantedUncertaintyVolts: number; prior: SearchPrior | null; check: boolean }
-  /** Bring the output into `state` and the supply to `volts` by safe waypoints (each at most the overshoot allows). Answered by `held`. */
+  /** Move through the waypoints (waypoint dwell), then to `volts`, settle and read the state. The waypoints arm the output and keep every overshoot short of the point. Answered by `held`. */
   | { kind: 'hold'; waypointsVolts: number[]; volts: number }
   /** Read the output's state at the held supply. Answered by `sensed`. */
   | { kind: 'sense' }
@@ -50,9 +59,15 @@ export type TrimObservation = { atMs: number } & (
   | { kind: 'waited' }
   /** The operator pressed "Will not turn". */
   | { kind: 'will-not-turn' }
+  /** The operator answered the finding `no-effect` with "Screw found": the prompt starts again. */
+  | { kind: 'screw-found' }
 );
 
-/** Findings end prompting; each is told to the operator, and the terminal ones reject the board. */
+/**
+ * Findings end prompting; each is told to the operator, and the terminal ones reject the board. `wrong-way` is never
+ * terminal; `no-effect` waits once for the operator's choice while watching on, and is terminal at will-not-turn, after a
+ * minute, or the second time.
+ */
 export const trimFindings = [
   'wrong-way',
   'no-effect',
@@ -90,6 +105,8 @@ export interface TrimView {
   /** Measured fact behind the finding, volts moved or seconds without effect. */
   findingVolts: number | null;
   round: number;
+  /** The pace the tolerance allows in this stage, in turns a second; null where the operator chooses. */
+  paceTurnsPerSecond?: number | null;
 }
 
 /** Whole turns and eighths above half a turn; below, degrees. */
@@ -97,11 +114,11 @@ export type TurnWords =
   { unit: 'turns'; whole: number; eighths: 0 | 1 | 2 | 3 | 4 | 5 | 6 | 7 } | { unit: 'degrees'; degrees: number };
 
 /*
- * The stepper, in lib/trim/trim.ts (one file a procedure beside it):
+ * The stepper, in lib/trim/trim.ts (one file a procedure beside it); reach in lib/trim/reach.ts:
  *
- *   beginTrim(settings, found: { tripVolts, tripUncertaintyVolts, releaseVolts }, atMs): TrimState
+ *   beginTrim(settings, found: FoundPoints, atMs): TrimState       immutable to callers, structured-cloneable
  *   nextTrimCommand(state): TrimCommand
  *   observeTrim(state, observation): TrimState
  *   viewTrim(state): TrimView
- *   canTrimReach(settings, found, limits): { reachable: true } | { reachable: false; finding; ... }   before the first prompt
+ *   canTrimReach(settings, found, limits): TrimReach               before the first prompt
  */
