@@ -12,5 +12,6 @@ export default defineConfig({
     hookTimeout: 60_000,
     include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
     exclude: ['tests/browser/**', 'node_modules/**'],
+    globalSetup: ['tests/database/global-setup.ts'],
   },
 });

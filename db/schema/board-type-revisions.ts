@@ -1,0 +1,40 @@
+import { relations, sql } from 'drizzle-orm';
+import { check, integer, jsonb, pgEnum, pgTable, unique, uuid } from 'drizzle-orm/pg-core';
+import type { BoardType } from '@/lib/contracts/board-type';
+import { boardTypeRevisionStates } from '@/lib/contracts/stored-states';
+import { accounts } from './accounts';
+import { boardTypes } from './board-types';
+import { id, moment, momentNow } from './columns';
+
+export const boardTypeRevisionStateEnum = pgEnum('board_type_revision_state', boardTypeRevisionStates);
+
+/** One revision of a board type's circuit, limits and ranges. Not changed once approved. */
+export const boardTypeRevisions = pgTable(
+  'board_type_revisions',
+  {
+    id: id(),
+    boardTypeId: uuid()
+      .notNull()
+      .references(() => boardTypes.id),
+    number: integer().notNull(),
+    /** Checked by lib/contracts/board-type.ts. */
+    specification: jsonb().$type<BoardType>().notNull(),
+    status: boardTypeRevisionStateEnum().notNull().default('draft'),
+    madeBy: uuid()
+      .notNull()
+      .references(() => accounts.id),
+    madeAt: momentNow(),
+    /** Null: nobody has approved the limits yet. Never the maker. */
+    approvedBy: uuid().references(() => accounts.id),
+    approvedAt: moment(),
+  },
+  (t) => [
+    unique().on(t.boardTypeId, t.number),
+    check('board_type_revisions_not_own', sql`${t.approvedBy} <> ${t.madeBy}`),
+    check('board_type_revisions_approved', sql`${t.status} <> 'approved' or ${t.approvedBy} is not null`),
+  ],
+);
+
+export const boardTypeRevisionRelations = relations(boardTypeRevisions, ({ one }) => ({
+  boardType: one(boardTypes, { fields: [boardTypeRevisions.boardTypeId], references: [boardTypes.id] }),
+}));

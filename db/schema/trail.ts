@@ -1,0 +1,28 @@
+import { bigint, index, jsonb, pgTable, text, uuid } from 'drizzle-orm/pg-core';
+import { accounts } from './accounts';
+import { momentNow } from './columns';
+import { stations } from './stations';
+
+/** Who changed what, when and why. Only ever appended: a trigger refuses everything else. */
+export const trail = pgTable(
+  'trail',
+  {
+    id: bigint({ mode: 'number' }).primaryKey().generatedAlwaysAsIdentity(),
+    at: momentNow(),
+    /** Null: the program itself, such as recovery at start. */
+    accountId: uuid().references(() => accounts.id),
+    /** Null: at a desk. */
+    stationId: uuid().references(() => stations.id),
+    /** What was done, such as account.disabled. */
+    action: text().notNull(),
+    /** Kind of thing it was done to, such as account. */
+    entity: text().notNull(),
+    entityId: text().notNull(),
+    /** Changed fields before and after. Null: nothing was there before, or is after. Never a secret or its hash. */
+    before: jsonb().$type<Record<string, unknown>>(),
+    after: jsonb().$type<Record<string, unknown>>(),
+    /** Null: the action asks for none. */
+    reason: text(),
+  },
+  (t) => [index().on(t.entity, t.entityId, t.at), index().on(t.at), index().on(t.accountId)],
+);

@@ -1,0 +1,64 @@
+import * as accountLinks from './schema/account-links';
+import * as accounts from './schema/accounts';
+import * as boardTypeRevisions from './schema/board-type-revisions';
+import * as boardTypes from './schema/board-types';
+import * as calibrations from './schema/calibrations';
+import * as commissionings from './schema/commissionings';
+import * as dailyChecks from './schema/daily-checks';
+import * as dispositions from './schema/dispositions';
+import * as engineerCalls from './schema/engineer-calls';
+import * as instruments from './schema/instruments';
+import * as labels from './schema/labels';
+import * as lotComponents from './schema/lot-components';
+import * as lots from './schema/lots';
+import * as measurements from './schema/measurements';
+import * as printers from './schema/printers';
+import * as referenceBoards from './schema/reference-boards';
+import * as retestOrders from './schema/retest-orders';
+import * as runEvents from './schema/run-events';
+import * as runs from './schema/runs';
+import * as sequenceRevisions from './schema/sequence-revisions';
+import * as sequences from './schema/sequences';
+import * as sessions from './schema/sessions';
+import * as signInAttempts from './schema/sign-in-attempts';
+import * as simulatedBoards from './schema/simulated-boards';
+import * as stationEnrolments from './schema/station-enrolments';
+import * as stations from './schema/stations';
+import * as traces from './schema/traces';
+import * as trail from './schema/trail';
+import * as trainings from './schema/trainings';
+import * as units from './schema/units';
+
+/** Every table, enum and relation, as the query builder takes them. */
+export const tables = {
+  ...accountLinks,
+  ...accounts,
+  ...boardTypeRevisions,
+  ...boardTypes,
+  ...calibrations,
+  ...commissionings,
+  ...dailyChecks,
+  ...dispositions,
+  ...engineerCalls,
+  ...instruments,
+  ...labels,
+  ...lotComponents,
+  ...lots,
+  ...measurements,
+  ...printers,
+  ...referenceBoards,
+  ...retestOrders,
+  ...runEvents,
+  ...runs,
+  ...sequenceRevisions,
+  ...sequences,
+  ...sessions,
+  ...signInAttempts,
+  ...simulatedBoards,
+  ...stationEnrolments,
+  ...stations,
+  ...traces,
+  ...trail,
+  ...trainings,
+  ...units,
+};
