@@ -15,7 +15,6 @@ export const benchSayings = {
   'not-now': [],
   'screen-watches': [],
   'not-permitted': [],
-  'unknown-code': ['text'],
   'badge-unknown': [],
   'badge-not-issued-here': [],
   'account-disabled': [],
@@ -54,7 +53,6 @@ export const benchSayings = {
   'needs-wiper-probe': [],
   'instruments-away': [],
   'supply-not-confirmed-off': [],
-  'reference-unknown': ['reference'],
   // Station panel and reasons why it may not test
   'meter-calibrated': [],
   'meter-calibration-soon': [],
@@ -83,7 +81,9 @@ export const benchSayings = {
   'controller-silent': [],
   'database-answers': [],
   // Commissioning
+  'commissioning-scan-reference': [],
   'commissioning-seat': [],
+  'reference-unknown': ['reference'],
   'commissioning-step': ['step'],
   'commissioning-done': [],
   'commissioning-stopped': [],
