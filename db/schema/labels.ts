@@ -25,6 +25,10 @@ export const labels = pgTable(
     /** The printer's last complaint, as a sentence. Null: none. */
     problem: text(),
     tries: integer().notNull().default(0),
+    /** The sender leaves it alone until then. Null: at once. */
+    nextTryAt: moment(),
+    /** The printer's own number of the job it took. Null: not taken yet. */
+    printerJobId: integer(),
     createdAt: momentNow(),
     printedAt: moment(),
   },
