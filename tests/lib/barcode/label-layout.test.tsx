@@ -2,7 +2,7 @@ import { renderToStaticMarkup } from 'react-dom/server';
 import sharp from 'sharp';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { LabelDrawing } from '@/components/desk/LabelDrawing';
+import { LabelDrawing } from '@/components/desk/label-drawing';
 import { encodeCode128, widthInModules } from '@/lib/barcode/code128';
 import { layoutLabel, type LabelContent } from '@/lib/barcode/label-layout';
 import { serialGroups } from '@/lib/barcode/serial-groups';
