@@ -13,7 +13,8 @@ export function takeCommand(state: BenchState, command: BenchCommand, atIso: str
     case 'stop':
       return stop(state);
     case 'will-not-turn':
-      return running ? stay(state, { kind: 'run-event', event: { kind: 'will-not-turn' } }) : notNow(state, atIso);
+    case 'screw-found':
+      return running ? stay(state, { kind: 'run-event', event: { kind: command.kind } }) : notNow(state, atIso);
     case 'answer':
       return running
         ? stay(state, { kind: 'run-event', event: { kind: 'answer', ok: command.ok } })

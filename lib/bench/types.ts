@@ -150,7 +150,10 @@ export interface BenchState {
 type Unstamped<E> = E extends unknown ? Omit<E, 'atMs'> : never;
 /** A run event that a person or the bench causes; the station stamps it. */
 export type PersonsRunEvent = Unstamped<
-  Extract<RunEvent, { kind: 'stop' | 'will-not-turn' | 'confirm' | 'answer' | 'bench-lost' | 'shutdown' }>
+  Extract<
+    RunEvent,
+    { kind: 'stop' | 'will-not-turn' | 'screw-found' | 'confirm' | 'answer' | 'bench-lost' | 'shutdown' }
+  >
 >;
 
 export type BenchEvent = { atIso: string } & (

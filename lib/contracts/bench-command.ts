@@ -19,6 +19,8 @@ export const benchCommandSchema = z.discriminatedUnion('kind', [
   }),
   z.object({ kind: z.literal('answer'), ok: z.boolean() }),
   z.object({ kind: z.literal('will-not-turn') }),
+  /** After "turning changes nothing": the operator was on the wrong screw and found the right one. */
+  z.object({ kind: z.literal('screw-found') }),
   z.object({ kind: z.literal('stop') }),
   z.object({ kind: z.literal('try-again') }),
   z.object({ kind: z.literal('call-engineer') }),

@@ -180,6 +180,8 @@ export type RunEvent = { atMs: number } & (
   /** From the operator, at any time. */
   | { kind: 'stop' }
   | { kind: 'will-not-turn' }
+  /** Answers the finding that turning changes nothing: the right screw is found, prompt again. */
+  | { kind: 'screw-found' }
   | { kind: 'confirm'; what: 'lid-and-board' | 'lid-open' | 'sealed' | 'lid-closed' }
   | { kind: 'answer'; ok: boolean }
   /** The bench screen has been gone for over 5 s, or the server shuts down. */
