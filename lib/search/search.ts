@@ -1,0 +1,176 @@
+import { type Level, type Pair, coupledWeights } from './assumptions';
+import { type Belief, weighBelief } from './belief';
+import { atBottom, atTop, decide } from './decide';
+import { freshCheck, observeCheck } from './end-check';
+import { type Probe, absorbProbe, flatPosterior, rebuildPosterior } from './grid-posterior';
+import { allowedLevel } from './level-drop';
+import { type MoveValue, valueMove } from './move-value';
+import { overshootPrior } from './overshoot-range';
+import type { SearchState, Side } from './state';
+import { beginSupplyModel, learnSupplyLevel } from './supply-level';
+import type { OutputState, PointEstimate, SearchCommand, SearchObservation, SearchSettings } from './types';
+import { betterWindow, windowAround, windowOver } from './window';
+import { levelRanges, wideWindow } from './level-ranges';
+
+export type { SearchState } from './state';
+
+/** An outcome less likely than this means that the fine window lost the threshold. */
+const surprising = 0.015;
+const mostResizings = 4;
+
+const pointNames = ['trip', 'release'] as const;
+
+const windowsOf = (sides: Pair<Side>, which: 'wide' | 'fine') => ({
+  trip: sides.trip[which],
+  release: sides.release[which],
+});
+
+function weighSides(settings: SearchSettings, level: Level, sides: Pair<Side>, which: 'wide' | 'fine'): Pair<Belief> {
+  const pair = windowsOf(sides, which);
+  const weights = coupledWeights(settings, level, pair);
+  return { trip: weighBelief(pair.trip, weights.trip), release: weighBelief(pair.release, weights.release) };
+}
+
+const pointOf = (belief: Belief, sign: number): PointEstimate => ({
+  volts: sign * belief.mean,
+  standardUncertaintyVolts: belief.sd,
+});
+
+/** Completes a state: windows that suit the beliefs, assumptions the outcomes allow, estimates and the next command. */
+function settle(state: SearchState, startOver: Pair<boolean>): SearchState {
+  const { settings, overshootWeights } = state;
+  const noise = settings.noiseVolts;
+  let { sides, assumptions } = state;
+  let lost = startOver;
+  let beliefs: Pair<Belief>;
+  for (;;) {
+    const ranges = levelRanges(settings, assumptions);
+    if (lost.trip || lost.release) {
+      const wide = weighSides(settings, assumptions, sides, 'wide');
+      sides = { ...sides };
+      for (const name of pointNames)
+        if (lost[name]) {
+          const window = windowAround(wide[name], ranges[name], noise);
+          const { history } = sides[name];
+          sides[name] = { ...sides[name], fine: rebuildPosterior(window, history, noise, overshootWeights) };
+        }
+    }
+    beliefs = weighSides(settings, assumptions, sides, 'fine');
+    for (let i = 0; i < mostResizings; i++) {
+      let changed = false;
+      for (const name of pointNames) {
+        const window = betterWindow(beliefs[name], ranges[name], noise);
+        if (!window) continue;
+        const { history } = sides[name];
+        sides = {
+          ...sides,
+          [name]: { ...sides[name], fine: rebuildPosterior(window, history, noise, overshootWeights) },
+        };
+        changed = true;
+      }
+      if (!changed) break;
+      beliefs = weighSides(settings, assumptions, sides, 'fine');
+    }
+    const allowed = allowedLevel(settings, assumptions, windowsOf(sides, 'wide'), beliefs, overshootWeights);
+    if (allowed === assumptions) break;
+    assumptions = allowed;
+    lost = { trip: true, release: true };
+  }
+  const settled = {
+    ...state,
+    sides,
+    assumptions,
+    estimates: { trip: pointOf(beliefs.trip, 1), release: pointOf(beliefs.release, -1) },
+  };
+  return { ...settled, ...decide(settled, beliefs) };
+}
+
+/**
+ * Begins a search from where the supply stands. `start.volts` is the meter's reading at the board, or the setpoint
+ * when there is none; `start.output` the output's state there.
+ */
+export function beginSearch(settings: SearchSettings, start: { volts: number; output: OutputState }): SearchState {
+  const overshootWeights = overshootPrior(settings.overshoot);
+  const wide = wideWindow(settings);
+  const ranges = levelRanges(settings, 0);
+  const side = (name: 'trip' | 'release'): Side => ({
+    wide: flatPosterior(wide[name], overshootWeights),
+    fine: flatPosterior(windowOver(ranges[name].low, ranges[name].high, settings.noiseVolts), overshootWeights),
+    history: [],
+  });
+  const nowhere = { volts: Number.NaN, standardUncertaintyVolts: Infinity };
+  const state: SearchState = {
+    settings,
+    supply: beginSupplyModel(settings.supplyMinVolts, settings.supplyMaxVolts),
+    level: start.volts,
+    output: start.output,
+    sides: { trip: side('trip'), release: side('release') },
+    assumptions: 0,
+    overshootWeights,
+    counts: { settles: 0, waypoints: 0, endCheckSettles: 0 },
+    settlesAtTop: 0,
+    settlesAtBottom: 0,
+    check: freshCheck(0),
+    estimates: { trip: nowhere, release: nowhere },
+    command: { kind: 'apply', volts: start.volts, dwell: 'settle' },
+  };
+  return settle(state, { trip: false, release: false });
+}
+
+/** The next command; the same one until its outcome is observed. */
+export const nextSearchCommand = (state: SearchState): SearchCommand => state.command;
+
+const outcome: MoveValue = { flipChance: 0, information: 0 };
+
+/** The state after the pending command was applied and `seen` was read. A finished search stays as it is. */
+export function observeSearch(state: SearchState, seen: SearchObservation): SearchState {
+  const { command, settings, sides } = state;
+  if (command.kind === 'finished') return state;
+  const armed = state.output === 'on' ? 'trip' : 'release';
+  const sign = armed === 'trip' ? 1 : -1;
+  const learnt = learnSupplyLevel(state.supply, {
+    setpoint: command.volts,
+    before: seen.voltsBefore,
+    reading: seen.volts,
+    dwell: command.dwell,
+  });
+  const flipped = seen.output !== state.output;
+  const probe: Probe = {
+    from: sign * seen.voltsBefore,
+    to: sign * learnt.level,
+    flipped,
+    extraVariance: learnt.extraVariance,
+  };
+
+  const believed = weighSides(settings, state.assumptions, sides, 'fine')[armed];
+  valueMove(believed, probe.from, probe.to, Math.hypot(settings.noiseVolts, Math.sqrt(probe.extraVariance)), outcome);
+  const predicted = flipped ? outcome.flipChance : 1 - outcome.flipChance;
+
+  const side = sides[armed];
+  const history = [...side.history, probe];
+  const updated: Side = {
+    wide: absorbProbe(side.wide, probe, settings.noiseVolts),
+    fine: absorbProbe(side.fine, probe, settings.noiseVolts),
+    history,
+  };
+  const checking = state.check.expected !== null;
+  const isSettle = command.dwell === 'settle';
+  const next: SearchState = {
+    ...state,
+    supply: learnt.model,
+    level: learnt.level,
+    output: seen.output,
+    sides: { ...sides, [armed]: updated },
+    counts: {
+      settles: state.counts.settles + (checking ? 0 : 1),
+      waypoints: state.counts.waypoints + (checking || isSettle ? 0 : 1),
+      endCheckSettles: state.counts.endCheckSettles + (checking ? 1 : 0),
+    },
+    settlesAtTop: state.settlesAtTop + (isSettle && seen.output === 'off' && atTop(state, learnt.level) ? 1 : 0),
+    settlesAtBottom:
+      state.settlesAtBottom + (isSettle && seen.output === 'on' && atBottom(state, command.volts) ? 1 : 0),
+    check: observeCheck(state.check, armed, flipped),
+  };
+  const surprised = predicted < surprising;
+  return settle(next, { trip: surprised && armed === 'trip', release: surprised && armed === 'release' });
+}

@@ -1,0 +1,32 @@
+import type { Level, Pair } from './assumptions';
+import type { GridPosterior, Probe } from './grid-posterior';
+import type { EndCheck } from './end-check';
+import type { SupplyModel } from './supply-level';
+import type { OutputState, PointEstimate, SearchCommand, SearchCounts, SearchSettings } from './types';
+
+/** All that is known of one threshold: a coarse posterior over the whole supply range, a fine one, and every probe. */
+export interface Side {
+  wide: GridPosterior;
+  fine: GridPosterior;
+  history: readonly Probe[];
+}
+
+/** Opaque to callers, never changed in place, and plain data: it survives structured cloning. */
+export interface SearchState {
+  readonly settings: SearchSettings;
+  readonly supply: SupplyModel;
+  /** Where the supply is believed to stand. */
+  readonly level: number;
+  readonly output: OutputState;
+  readonly sides: Pair<Side>;
+  readonly assumptions: Level;
+  /** Prior weight of each overshoot of the grid. */
+  readonly overshootWeights: readonly number[];
+  readonly counts: SearchCounts;
+  /** Settles at the highest level allowed with the output off, and at the lowest with it on. */
+  readonly settlesAtTop: number;
+  readonly settlesAtBottom: number;
+  readonly check: EndCheck;
+  readonly estimates: Pair<PointEstimate>;
+  readonly command: SearchCommand;
+}
