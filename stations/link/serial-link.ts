@@ -156,7 +156,9 @@ export class SerialLink {
     const { binding, path, baudRate } = this.options;
     const port = new SerialPortStream({ binding, path, baudRate, autoOpen: false });
     await new Promise<void>((resolve, reject) => {
-      port.open((error) => (error ? reject(this.error('link-lost', `cannot be reached: ${error.message}.`)) : resolve()));
+      port.open((error) =>
+        error ? reject(this.error('link-lost', `cannot be reached: ${error.message}.`)) : resolve(),
+      );
     });
     this.suspect = true;
     this.lines.clear();
