@@ -18,7 +18,8 @@ export const printProblems = [
   'printer-needs-attention',
   'printer-refused',
   'printer-gave-up',
-  'label-not-printable',
+  /** Taken, then unknown: printed or not, nobody can tell from here. */
+  'label-lost',
 ] as const;
 export type PrintProblem = (typeof printProblems)[number];
 
@@ -44,6 +45,9 @@ export function httpUrlOf(printerUri: string): URL | null {
   if (scheme.startsWith('ipp') && !hasPort) url.port = '631';
   return url;
 }
+
+/** client-error-not-found (RFC 8011, appendix B). */
+const notFound = 0x0406;
 
 let lastRequestId = 0;
 
@@ -95,6 +99,11 @@ async function post(printerUri: string, body: Buffer, timeoutMs: number): Promis
   if (message.code >= 0x0100) {
     const text = findAttribute(message, groupTags.operation, 'status-message')?.values[0];
     const status = `0x${message.code.toString(16).padStart(4, '0')}`;
+    if (message.code === notFound)
+      return refusal(
+        'label-lost',
+        'Label printer no longer knows this label. See whether it was printed before you print it again.',
+      );
     return refusal('printer-refused', `Label printer refused the label: ${text ?? 'no reason given'} (${status}).`);
   }
   return { ok: true, message };
