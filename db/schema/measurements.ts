@@ -17,6 +17,8 @@ export const measurements = pgTable(
     value: doublePrecision().notNull(),
     /** One standard deviation. Null: not stated. */
     standardUncertainty: doublePrecision(),
+    /** U, for a coverage of about 95 %. Null: not stated. */
+    expandedUncertainty: doublePrecision(),
     /** Null: no limit on this side. */
     min: doublePrecision(),
     max: doublePrecision(),

@@ -1,0 +1,1 @@
+ALTER TABLE "measurements" ADD COLUMN "expanded_uncertainty" double precision;
