@@ -24,6 +24,7 @@ export function measured(over: Partial<Measurement> & Pick<Measurement, 'quantit
   return {
     phase: 'verified',
     standardUncertainty: 0.002,
+    expandedUncertainty: 0.004,
     min: null,
     max: null,
     guardedMin: null,
