@@ -4,7 +4,7 @@
  * contains the ring of the step. Both are one linear model, estimated by recursive least squares (a Kalman filter
  * without process noise) over four unknowns:
  *
- *   reading - setpoint = offset + gain (setpoint - middle) - ring(dwell) (before - setpoint) + noise
+ *   reading - setpoint = offset + gain (setpoint - middle) - ring(dwell) (before - level) + noise
  */
 export interface SupplyModel {
   middleVolts: number;
@@ -28,13 +28,6 @@ export function beginSupplyModel(minVolts: number, maxVolts: number): SupplyMode
   const covariance = Array.from({ length: 16 }, (_, i) => (i % 5 === 0 ? priorSd[i / 5]! ** 2 : 0));
   return { middleVolts: (minVolts + maxVolts) / 2, mean: priorMean, covariance };
 }
-
-const regressors = (model: SupplyModel, setpoint: number, before: number, dwell: Dwell) => [
-  1,
-  setpoint - model.middleVolts,
-  dwell === 'settle' ? setpoint - before : 0,
-  dwell === 'waypoint' ? setpoint - before : 0,
-];
 
 function quadratic(covariance: readonly number[], a: readonly number[]): number {
   let sum = 0;
@@ -62,13 +55,14 @@ export function learnSupplyLevel(
   model: SupplyModel,
   step: { setpoint: number; before: number; reading: number; dwell: Dwell },
 ): { level: number; extraVariance: number; model: SupplyModel } {
-  const a = regressors(model, step.setpoint, step.before, step.dwell);
-  const jump = step.before - step.setpoint;
-  const scatter = (ringScatter * jump) ** 2;
   const ring = step.dwell === 'settle' ? 2 : 3;
-
   const error = supplyErrorAt(model, step.setpoint);
   const predicted = step.setpoint + error.volts;
+  const jump = step.before - predicted;
+  const scatter = (ringScatter * jump) ** 2;
+  const a = [1, step.setpoint - model.middleVolts, 0, 0];
+  a[ring] = -jump;
+
   const predictedVariance = error.sd ** 2 + resolutionSdVolts ** 2;
   const corrected = step.reading + model.mean[ring]! * jump;
   const correctedVariance = readingSdVolts ** 2 + model.covariance[5 * ring]! * jump ** 2 + scatter;
