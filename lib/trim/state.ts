@@ -1,0 +1,104 @@
+import type { SearchPrior } from '../search/types';
+import type { Advice } from './advice';
+import { estimateBoard, type BoardEstimate } from './board-estimate';
+import { paceOf, type Pace } from './pace';
+import type { BeepPhase } from './two-beeps';
+import type { FoundPoints, TrimCommand, TrimFinding, TrimOutcome, TrimSettings, TrimView } from './types';
+
+/** One trim from its first prompt to its outcome. Plain data: a copy of it replays the same way. */
+export interface TrimState {
+  settings: TrimSettings;
+  pace: Pace;
+  estimate: BoardEstimate;
+  phase: { kind: 'start' } | { kind: 'over' } | BeepPhase;
+  command: TrimCommand;
+  atMs: number;
+  stage: TrimView['stage'];
+  advice: Advice | null;
+  /** The trip point as last measured, or as the last beep or bracket tells. */
+  trip: { volts: number; standardUncertaintyVolts: number };
+  /** Hysteresis as last measured, and the trip point it belongs to. */
+  hysteresis: { volts: number; atTripVolts: number };
+  tripIsStale: boolean;
+  heldVolts: number | null;
+  liveTripVolts: number | null;
+  /** Where the last command left the supply; null after a search. */
+  supplyVolts: number | null;
+  finding: TrimFinding | null;
+  findingVolts: number | null;
+  /** Verifying searches made. */
+  rounds: number;
+  /** Times the operator was asked to turn; bounded, so that prompting ends. */
+  prompts: number;
+  turnsAdvised: number;
+  /** Turned the wrong way since the trip point last moved as asked. */
+  wrongWays: number;
+  /** The screw works against the type's direction. */
+  reversed: boolean;
+  /** The verifying search was unresolved and is repeated without assumptions. */
+  searchRepeated: boolean;
+}
+
+export function startState(settings: TrimSettings, found: FoundPoints, atMs: number): TrimState {
+  return {
+    settings,
+    pace: paceOf(settings),
+    estimate: estimateBoard(settings, found),
+    phase: { kind: 'start' },
+    command: { kind: 'wait', milliseconds: 0 },
+    atMs,
+    stage: 'measuring',
+    advice: null,
+    trip: { volts: found.tripVolts, standardUncertaintyVolts: found.tripUncertaintyVolts },
+    hysteresis: { volts: found.releaseVolts - found.tripVolts, atTripVolts: found.tripVolts },
+    tripIsStale: false,
+    heldVolts: null,
+    liveTripVolts: null,
+    supplyVolts: null,
+    finding: null,
+    findingVolts: null,
+    rounds: 0,
+    prompts: 0,
+    turnsAdvised: 0,
+    wrongWays: 0,
+    reversed: false,
+    searchRepeated: false,
+  };
+}
+
+export function finishTrimmed(state: TrimState): TrimState {
+  const { volts, standardUncertaintyVolts } = state.trip;
+  return finish(state, {
+    kind: 'trimmed',
+    tripVolts: volts,
+    standardUncertaintyVolts,
+    releaseVolts: volts + state.hysteresis.volts,
+    rounds: state.rounds,
+    turnsAdvised: state.turnsAdvised,
+  });
+}
+
+export function finishFailed(state: TrimState, finding: TrimFinding): TrimState {
+  const { rounds, turnsAdvised, trip } = state;
+  return finish({ ...state, finding }, { kind: 'failed', finding, lastTripVolts: trip.volts, rounds, turnsAdvised });
+}
+
+function finish(state: TrimState, outcome: TrimOutcome): TrimState {
+  return {
+    ...state,
+    phase: { kind: 'over' },
+    stage: 'measuring',
+    advice: null,
+    command: { kind: 'finished', outcome },
+  };
+}
+
+/** Where the trim's own searches look first: near the target, hysteresis as measured. */
+export function nearTarget(state: TrimState): SearchPrior {
+  return {
+    tripMeanVolts: state.settings.targetVolts,
+    tripSdVolts: 0.03,
+    hysteresisMeanVolts: state.hysteresis.volts,
+    hysteresisSdVolts: 0.02,
+  };
+}
