@@ -2,5 +2,6 @@
 export const sessionKinds = ['desk', 'bench'] as const;
 export type SessionKind = (typeof sessionKinds)[number];
 
-export const attemptOutcomes = ['succeeded', 'failed', 'not-evaluated'] as const;
+/** `cleared`: failed, and no longer counted since an administrator set a new password or PIN. */
+export const attemptOutcomes = ['succeeded', 'failed', 'not-evaluated', 'cleared'] as const;
 export type AttemptOutcome = (typeof attemptOutcomes)[number];

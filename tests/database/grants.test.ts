@@ -11,9 +11,11 @@ beforeAll(async () => {
 afterAll(() => owner.close());
 
 test('the application role works with the tables but cannot rewrite records or the schema', async () => {
-  await owner.pool.query('create role station_program login');
+  const password = 'only-for-this-test';
+  await owner.pool.query(`create role station_program login password '${password}'`);
   const url = new URL(owner.url);
   url.username = 'station_program';
+  url.password = password;
   await migrate(owner.url, url.toString());
   await migrate(owner.url, url.toString());
   const { pool } = openDatabase(url.toString(), 1);

@@ -1,0 +1,1 @@
+ALTER TYPE "public"."attempt_outcome" ADD VALUE 'cleared';

@@ -1,0 +1,8 @@
+import type { Surface } from '../surface';
+
+export const qualitySurface: Surface = {
+  pages: {},
+  handlers: {},
+  actions: {},
+  events: {},
+};

@@ -1,0 +1,6 @@
+export function findFreePort(): Promise<number>;
+export function startCluster(
+  folder: string,
+  options?: { fast?: boolean },
+): Promise<{ url: string; stop: () => Promise<void> }>;
+export function postgresCanUse(folder: string): boolean;
