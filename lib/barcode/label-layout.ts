@@ -51,18 +51,30 @@ function pointsLine({ tripVolts, releaseVolts }: LabelContent): string {
   return parts.join(', ');
 }
 
+/** Width of one module so that the whole barcode lies inside the label, or null where it could not be read. */
+function moduleMmFor(serial: string): number | null {
+  const code = encodeCode128(serial);
+  if (!code) return null;
+  const moduleMm = Math.min(wantedModuleMm, (widthMm - 2 * marginMm) / widthInModules(code));
+  return moduleMm < leastModuleMm ? null : moduleMm;
+}
+
+/** Whether a label of 40 × 20 mm can carry the serial as a barcode. */
+export function fitsOnLabel(serial: string): boolean {
+  return moduleMmFor(serial) !== null;
+}
+
 /** Refused when the serial has characters a barcode cannot carry, or is too long for bars that a scanner can read. */
 export function layoutLabel(content: LabelContent): LabelOutcome {
   const code = encodeCode128(content.serial);
-  const modules = code ? widthInModules(code) : Infinity;
-  const moduleMm = Math.min(wantedModuleMm, (widthMm - 2 * marginMm) / modules);
-  if (!code || moduleMm < leastModuleMm)
+  const moduleMm = moduleMmFor(content.serial);
+  if (!code || moduleMm === null)
     return {
       ok: false,
       code: 'serial-not-printable',
       sentence: `Serial ${content.serial} does not fit on a label of 40 × 20 mm. Use a shorter serial for the next lot.`,
     };
-  const barWidthMm = modules * moduleMm;
+  const barWidthMm = widthInModules(code) * moduleMm;
   return {
     ok: true,
     layout: {
