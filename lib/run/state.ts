@@ -1,0 +1,30 @@
+import type { Decision } from '../decision/decide-verdict';
+import type { RunFacts } from './facts';
+import type { RunEvent, RunPlan } from './types';
+
+/** The answers that each effect may have; `fault` besides. */
+export type AnswerKind = Extract<RunEvent, { id: number }>['kind'];
+
+export type Phase =
+  /** Going through the steps. */
+  | { kind: 'steps' }
+  /** Decided; switching the supply off for the `tries`-th time before the record is closed. */
+  | { kind: 'ending'; decision: Decision; tries: number }
+  | { kind: 'over'; decision: Decision };
+
+/** Opaque to callers, never changed in place, and structured-cloneable. */
+export interface RunState {
+  plan: RunPlan;
+  startedAtMs: number;
+  atMs: number;
+  nextId: number;
+  /** The effect whose answer is awaited. */
+  outstanding: { id: number; answer: AnswerKind } | null;
+  stepIndex: number;
+  machine: unknown;
+  facts: RunFacts;
+  phase: Phase;
+  failingWhenStopped: boolean;
+  /** Supply volts when the run was ended; null before, or with the supply off. */
+  stoppedAtVolts: number | null;
+}

@@ -1,0 +1,11 @@
+import type { Step } from '../../sequence/step';
+import { measuring, stay, type StepMachine } from '../machine';
+
+type RecordStep = Extract<Step, { kind: 'record' }>;
+
+/** Supply off with read-back. The verdict is made when it has answered, so that nothing passes before. */
+export const record: StepMachine<RecordStep, null> = {
+  begin: () => ({ machine: null, ask: { kind: 'supply-off' } }),
+  advance: (machine, event) => (event.kind === 'supply-is-off' ? { ending: { kind: 'complete' } } : stay(machine)),
+  view: () => measuring({ code: 'run.switching-off' }),
+};

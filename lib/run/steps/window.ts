@@ -1,0 +1,24 @@
+import type { Step } from '../../sequence/step';
+import type { StepContext } from '../machine';
+
+type FindStep = Extract<Step, { kind: 'find-points' }>;
+
+/** How this sequence looks for the points; a sequence that only verifies looks over the board type's whole range. */
+export function findStep({ plan }: StepContext): FindStep {
+  const step = plan.sequence.steps.find((s) => s.kind === 'find-points');
+  if (step?.kind === 'find-points') return step;
+  const { search, absoluteMaximumVolts } = plan.boardType;
+  return {
+    kind: 'find-points',
+    windowMinVolts: search.supplyMinVolts,
+    windowMaxVolts: absoluteMaximumVolts,
+    wantedUncertaintyVolts: 0.001,
+    mostSettles: 150,
+    settleMs: plan.commissioning.settleMs,
+  };
+}
+
+export function referenceStep({ plan }: StepContext): Extract<Step, { kind: 'reference' }> | null {
+  const step = plan.sequence.steps.find((s) => s.kind === 'reference');
+  return step?.kind === 'reference' ? step : null;
+}
