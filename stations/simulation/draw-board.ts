@@ -1,0 +1,124 @@
+import type { BoardDesign } from '@/lib/circuit/board-design';
+import { wiperForTrip } from '@/lib/circuit/inverse';
+import { referenceAt, softKneeThresholds } from '@/lib/circuit/soft-knee';
+import { turnsAt, wiperAt } from '@/lib/circuit/trimmer';
+import type { BoardType } from '@/lib/contracts/board-type';
+import type { DefectKind } from '@/lib/contracts/bench-command';
+import type { BoardTruth } from './board-truth';
+import { fitDefect } from './fit-defect';
+import { seededRandom, type Random } from './random';
+
+export interface DrawOptions {
+  /** What the trim aims at; the middle of the trip limits where none is given. */
+  targetVolts?: number;
+  /** The board's own comparator noise; the board type's where none is given. */
+  noiseVolts?: number;
+}
+
+const mostDraws = 400;
+/** How far off its target a board comes, least and most. */
+const offTarget = { leastVolts: 0.15, mostVolts: 0.9 };
+/** Part of a limits band kept free at either end by a sound board. */
+const clearance = 0.15;
+
+/**
+ * Draws a board of a type: parts within their tolerances, a screw off target. Parts that could not be trimmed to meet the
+ * limits are drawn again, as incoming inspection would sort them out; then the defect is fitted. Same seed, same board.
+ */
+export function drawBoard(boardType: BoardType, seed: number, defect: DefectKind, options: DrawOptions = {}): BoardTruth {
+  const random = seededRandom(seed);
+  const { tripVolts } = boardType.limits;
+  const targetVolts = options.targetVolts ?? (tripVolts.min + tripVolts.max) / 2;
+  for (let draw = 0; draw < mostDraws; draw++) {
+    const design = drawParts(boardType.design, random);
+    const targetWiper = wiperForTarget(design, targetVolts);
+    if (targetWiper === null || !meetsLimits(boardType, design, targetWiper)) continue;
+    const screwTurns = drawScrew(boardType, design, targetVolts, random);
+    if (screwTurns === null) continue;
+    const truth: BoardTruth = {
+      design,
+      trimmer: { ...boardType.trimmer, backlashTurns: boardType.trimmer.backlashTurns * random.between(0.5, 1) },
+      screwTurns,
+      stops: { minTurns: 0, maxTurns: boardType.trimmer.turns },
+      noiseVolts: options.noiseVolts ?? boardType.search.noiseVolts,
+      wiperJumpVolts: 0,
+      wiperFollows: true,
+      output: 'works',
+      zener: 'works',
+      shortOhms: null,
+      padOhms: 0,
+      defect,
+    };
+    return fitDefect(truth, defect, { targetTurns: turnsAt(boardType.trimmer, targetWiper), random });
+  }
+  throw new RangeError(`No parts of board type ${boardType.code} reach ${targetVolts} V within its limits.`);
+}
+
+/** Within `tolerance`, three standard deviations. */
+function near(value: number, tolerance: number, random: Random): number {
+  const deviation = Math.max(-1, Math.min(1, random.normal() / 3));
+  return value * (1 + tolerance * deviation);
+}
+
+function drawParts(nominal: BoardDesign, random: Random): BoardDesign {
+  const { reference } = nominal;
+  return {
+    reference: {
+      nominalVolts: near(reference.nominalVolts, 0.02, random),
+      ratedAmps: reference.ratedAmps,
+      kneeVolts: near(reference.kneeVolts, 0.1, random),
+      feedOhms: near(reference.feedOhms, 0.01, random),
+    },
+    trimmerOhms: near(nominal.trimmerOhms, 0.1, random),
+    supplyEndOhms: near(nominal.supplyEndOhms, 0.01, random),
+    groundEndOhms: near(nominal.groundEndOhms, 0.01, random),
+    feedbackOhms: near(nominal.feedbackOhms, 0.01, random),
+    outputDropVolts: near(nominal.outputDropVolts, 0.08, random),
+    outputLowVolts: near(nominal.outputLowVolts, 0.3, random),
+    loadOhms: near(nominal.loadOhms, 0.05, random),
+    quiescentAmps: near(nominal.quiescentAmps, 0.15, random),
+    reservoirFarads: near(nominal.reservoirFarads, 0.2, random),
+  };
+}
+
+function wiperForTarget(design: BoardDesign, targetVolts: number): number | null {
+  const reference = referenceAt(design.reference, targetVolts);
+  if (reference.kind !== 'found') return null;
+  const wiper = wiperForTrip(design, targetVolts, reference.x);
+  return wiper > 0.04 && wiper < 0.96 ? wiper : null;
+}
+
+function meetsLimits({ limits }: BoardType, design: BoardDesign, wiper: number): boolean {
+  const points = softKneeThresholds(design, wiper);
+  if (points.kind !== 'found') return false;
+  const inside = (value: number, { min, max }: { min: number; max: number }) => {
+    const free = (max - min) * clearance;
+    return value >= min + free && value <= max - free;
+  };
+  return (
+    inside(points.releaseVolts, limits.releaseVolts) &&
+    inside(points.releaseVolts - points.tripVolts, limits.hysteresisVolts) &&
+    inside(points.tripReferenceVolts, limits.referenceVolts) &&
+    design.outputDropVolts < limits.outputHighDropVolts.max &&
+    design.outputLowVolts < limits.outputLowVolts.max &&
+    design.quiescentAmps < limits.quiescentAmps.max
+  );
+}
+
+/** A screw position whose points lie off target, inside what the search may reach. */
+function drawScrew(boardType: BoardType, design: BoardDesign, targetVolts: number, random: Random): number | null {
+  const { trimmer, search, absoluteMaximumVolts } = boardType;
+  for (let draw = 0; draw < 20; draw++) {
+    const sign = random.uniform() < 0.5 ? -1 : 1;
+    const startVolts = targetVolts + sign * random.between(offTarget.leastVolts, offTarget.mostVolts);
+    const wiper = wiperForTarget(design, startVolts);
+    if (wiper === null) continue;
+    const turns = turnsAt(trimmer, wiper);
+    const points = softKneeThresholds(design, wiperAt(trimmer, turns));
+    if (points.kind !== 'found') continue;
+    const { tripVolts, releaseVolts } = points;
+    const within = tripVolts > search.tripVolts.min && tripVolts < search.tripVolts.max;
+    if (within && releaseVolts < absoluteMaximumVolts * 0.97) return turns;
+  }
+  return null;
+}
