@@ -24,9 +24,9 @@ export type BeepPhase =
 const pauseAfterBeepMs = 1200;
 const handsOffMs = 500;
 const peekEveryMs = 2000;
+/** Without movement: the tool is on the screw already, or it has to be fetched (first prompt, screw just found). */
 const noEffectAfterMs = 6000;
-/** After "Screw found" the screw has to be reached first. */
-const noEffectAgainAfterMs = 12_000;
+const noEffectWithFetchAfterMs = 12_000;
 /** Silence after a movement, or with the point too near the hold to peek, before the station measures again. */
 const silenceMs = 10_000;
 /** A trip point found within this of the target is turned back first, so that the last turn always rises. */
@@ -181,12 +181,16 @@ function learn(state: TrimState, watch: BeepWatch, found: PeekFinding): TrimStat
     case 'unmoved': {
       const waited = now - watch.promptedAtMs!;
       const again = { ...watch, nextPeekAtMs: now + peekEveryMs };
-      if (watch.noEffectAtMs !== null || waited < (watch.screwFound ? noEffectAgainAfterMs : noEffectAfterMs)) {
+      if (watch.noEffectAtMs !== null || waited < patienceMs(state, watch)) {
         return arm(state, again);
       }
       return noEffect(state, again);
     }
   }
+}
+
+function patienceMs(state: TrimState, watch: BeepWatch): number {
+  return state.prompts === 1 || watch.screwFound ? noEffectWithFetchAfterMs : noEffectAfterMs;
 }
 
 function noEffect(state: TrimState, watch: BeepWatch): TrimState {
