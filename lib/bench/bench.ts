@@ -26,7 +26,7 @@ export function beginBench(station: BenchView['station']): BenchState {
     next: null,
     standing: nothingKnown,
     pendingBin: null,
-    ready: { opened: false, linksDown: [], supplyOff: false, databaseAway: false },
+    ready: { opened: false, linksDown: [], strangers: [], supplyOff: false, databaseAway: false },
     fixture: { lidClosed: null, boardPresent: null, seenEmpty: false, heldSerial: null },
     last: null,
     refusal: null,
@@ -47,7 +47,7 @@ export function advanceBench(state: BenchState, event: BenchEvent): BenchStep {
     case 'database':
       return stay({ ...state, ready: { ...state.ready, databaseAway: event.away } });
     case 'instruments':
-      return stay({ ...state, ready: { ...state.ready, opened: event.opened, linksDown: event.linksDown } });
+      return takeLinks(state, event);
     case 'supply':
       return stay({ ...state, ready: { ...state.ready, supplyOff: event.confirmedOff } });
     case 'fixture':
@@ -68,6 +68,13 @@ export function advanceBench(state: BenchState, event: BenchEvent): BenchStep {
     case 'commissioning-over':
       return endCommissioning(state, event);
   }
+}
+
+function takeLinks(
+  state: BenchState,
+  { opened, linksDown, strangers }: Extract<BenchEvent, { kind: 'instruments' }>,
+): BenchStep {
+  return stay({ ...state, ready: { ...state.ready, opened, linksDown, strangers } });
 }
 
 function takeStanding(state: BenchState, standing: Standing, pendingBin?: BenchState['pendingBin']): BenchStep {

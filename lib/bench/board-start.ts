@@ -9,6 +9,8 @@ export function notReadyToEnergise(state: BenchState): Say | null {
   if (ready.databaseAway) return say('database-away');
   if (!ready.opened) return say('opening-instruments');
   if (ready.linksDown.length > 0) return say('instruments-away');
+  const [stranger] = ready.strangers;
+  if (stranger) return say('wrong-instrument', { which: stranger });
   if (!ready.supplyOff) return say('supply-not-confirmed-off');
   return null;
 }

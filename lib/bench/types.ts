@@ -139,7 +139,14 @@ export interface BenchState {
   standing: Standing;
   pendingBin: PendingBin | null;
   /** Links of the instruments answer; the supply was read back as off. Neither is needed while a run goes on. */
-  ready: { opened: boolean; linksDown: LinkName[]; supplyOff: boolean; databaseAway: boolean };
+  ready: {
+    opened: boolean;
+    linksDown: LinkName[];
+    /** Answer, but not as the instruments that the station was set up with. */
+    strangers: LinkName[];
+    supplyOff: boolean;
+    databaseAway: boolean;
+  };
   fixture: { lidClosed: boolean | null; boardPresent: boolean | null; seenEmpty: boolean; heldSerial: string | null };
   last: { serial: string; verdict: Verdict; seconds: number } | null;
   refusal: BenchView['refusal'];
@@ -161,7 +168,7 @@ export type BenchEvent = { atIso: string } & (
   | { kind: 'answered'; id: number; answer: BenchAnswer }
   | { kind: 'standing'; standing: Standing; pendingBin?: PendingBin | null }
   | { kind: 'database'; away: boolean }
-  | { kind: 'instruments'; opened: boolean; linksDown: LinkName[] }
+  | { kind: 'instruments'; opened: boolean; linksDown: LinkName[]; strangers: LinkName[] }
   | { kind: 'supply'; confirmedOff: boolean }
   | { kind: 'fixture'; lidClosed: boolean; boardPresent: boolean }
   | { kind: 'run-over'; ending: RunEnding }

@@ -67,6 +67,8 @@ function whatIsWaitedFor(state: BenchState): Say | null {
   if (ready.databaseAway) return say('database-away');
   if (!ready.opened) return say('opening-instruments');
   if (ready.linksDown.length > 0) return say('reopening-instruments');
+  const [stranger] = ready.strangers;
+  if (stranger) return say('wrong-instrument', { which: stranger });
   if (!ready.supplyOff) return say('switching-supply-off');
   return null;
 }
@@ -76,13 +78,15 @@ const silent = { supply: 'supply-silent', meter: 'meter-silent', controller: 'co
 function linkItems(state: BenchState): ReadinessItem[] {
   const { ready } = state;
   const unlimited = { validFrom: null, validUntil: null };
-  const down = ready.linksDown[0];
+  const [down] = ready.linksDown;
+  const [stranger] = ready.strangers;
+  const trouble = down ? say(silent[down]) : stranger ? say('wrong-instrument', { which: stranger }) : null;
   return [
     {
       key: 'links',
       label: '',
-      state: ready.opened && !down ? 'good' : 'bad',
-      sentence: down ? say(silent[down]) : ready.opened ? say('links-answer') : say('opening-instruments'),
+      state: ready.opened && !trouble ? 'good' : 'bad',
+      sentence: trouble ?? (ready.opened ? say('links-answer') : say('opening-instruments')),
       ...unlimited,
     },
     {

@@ -1,15 +1,15 @@
 import type { BenchEvent, BenchState } from '@/lib/bench/types';
 import type { Clock } from '../clock/clock';
-import { safeOff, type SafeOffReport } from '../instruments/safe-off';
-import type { Instruments } from './bench';
-import { checkLinks, isSafe } from './links';
+import type { Bench } from '../instruments/open-bench';
+import type { SafeOffReport } from '../instruments/safe-off';
+import { checkLinks, type ExpectedIdentities, type LinksSeen } from './links';
 
-export type OpenBench = Instruments & { close(): Promise<void> };
 type Unstamped<E> = E extends unknown ? Omit<E, 'atIso'> : never;
 export type BenchTold = Unstamped<Extract<BenchEvent, { kind: 'instruments' | 'supply' | 'fixture' }>>;
 
 export interface BenchKeeperOptions {
-  open(): Promise<OpenBench>;
+  open(): Promise<Bench>;
+  expected: ExpectedIdentities;
   clock: Clock;
   state(): BenchState;
   tell(event: BenchTold): Promise<void>;
@@ -21,32 +21,32 @@ const retryEveryMs = 1500;
 
 /** Looks after the instruments while nothing runs: sees lid and board, notices a cable pulled, makes the supply safe again. */
 export class BenchKeeper {
-  bench: OpenBench | null = null;
+  bench: Bench | null = null;
   private checkedAtMs = -Infinity;
 
   constructor(private readonly options: BenchKeeperOptions) {}
 
-  /** Opens the ports and switches the supply off with read-back. Not confirmed when a port cannot be opened. */
+  /** Opens the ports and switches the supply off with read-back. Not confirmed when the supply cannot be reached. */
   async openSafely(): Promise<SafeOffReport> {
-    const { clock, open, tell, onProblem } = this.options;
-    this.checkedAtMs = clock.now();
+    const { open, tell, expected, onProblem } = this.options;
     try {
       this.bench = await open();
     } catch (error) {
       onProblem(error);
       return { confirmed: false };
+    } finally {
+      this.checkedAtMs = this.options.clock.now();
     }
-    const off = await safeOff(this.bench, clock);
-    const { down } = await checkLinks(this.bench);
+    const off = await this.bench.safeOff();
     await tell({ kind: 'supply', confirmedOff: off.confirmed });
-    await tell({ kind: 'instruments', opened: true, linksDown: down });
+    await this.tellLinks(await checkLinks(this.bench, expected));
     return off;
   }
 
   /** One look; called again and again. */
   async look(): Promise<void> {
     const { ready } = this.options.state();
-    const troubled = !this.bench || ready.linksDown.length > 0 || !ready.supplyOff;
+    const troubled = !this.bench || ready.linksDown.length > 0 || ready.strangers.length > 0 || !ready.supplyOff;
     if (this.options.clock.now() - this.checkedAtMs >= (troubled ? retryEveryMs : checkLinksEveryMs)) {
       if (this.bench) await this.checkBench(this.bench);
       else await this.openSafely();
@@ -57,21 +57,27 @@ export class BenchKeeper {
   async close(): Promise<SafeOffReport> {
     const { bench } = this;
     if (!bench) return { confirmed: false };
-    const off = await safeOff(bench, this.options.clock);
+    const off = await bench.safeOff();
     this.bench = null;
     await bench.close();
     return off;
   }
 
-  private async checkBench(bench: OpenBench): Promise<void> {
-    const { clock, state, tell } = this.options;
-    const { down, supplyVolts } = await checkLinks(bench);
+  private async checkBench(bench: Bench): Promise<void> {
+    const { clock, state, tell, expected } = this.options;
+    if (state().ready.linksDown.length > 0) await bench.reopen();
+    const seen = await checkLinks(bench, expected);
     this.checkedAtMs = clock.now();
-    if (down.join() !== state().ready.linksDown.join())
-      await tell({ kind: 'instruments', opened: true, linksDown: down });
-    if (state().ready.supplyOff && isSafe(supplyVolts)) return;
-    const off = await safeOff(bench, clock);
+    await this.tellLinks(seen);
+    if (state().ready.supplyOff && seen.supplySafe) return;
+    const off = await bench.safeOff();
     if (off.confirmed !== state().ready.supplyOff) await tell({ kind: 'supply', confirmedOff: off.confirmed });
+  }
+
+  private async tellLinks({ down, strangers }: LinksSeen): Promise<void> {
+    const { ready } = this.options.state();
+    if (ready.opened && down.join() === ready.linksDown.join() && strangers.join() === ready.strangers.join()) return;
+    await this.options.tell({ kind: 'instruments', opened: true, linksDown: down, strangers });
   }
 
   private async lookAtFixture(): Promise<void> {

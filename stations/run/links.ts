@@ -1,21 +1,28 @@
 import type { LinkName } from '@/lib/bench/types';
 import { safeBelowVolts } from '../instruments/safe-off';
-import type { Instruments } from './bench';
+import type { Bench } from '../instruments/open-bench';
 
-/** Asks every instrument something harmless: who does not answer, and whether the supply stands above the safe voltage. */
-export async function checkLinks(bench: Instruments): Promise<{ down: LinkName[]; supplyVolts: number | null }> {
-  const [supply, meter, controller] = await Promise.allSettled([
-    bench.supply.measureVolts(),
-    bench.meter.identify(),
-    bench.controller?.identify(),
-  ]);
-  const down: LinkName[] = [];
-  if (supply.status === 'rejected') down.push('supply');
-  if (meter.status === 'rejected') down.push('meter');
-  if (controller.status === 'rejected') down.push('controller');
-  return { down, supplyVolts: supply.status === 'fulfilled' ? supply.value : null };
+/** The answer to *IDN? that each instrument must give; null or absent: any. */
+export type ExpectedIdentities = Partial<Record<LinkName, string | null>>;
+
+export interface LinksSeen {
+  /** Do not answer. */
+  down: LinkName[];
+  /** Answer, but are not the instruments that this station was set up and calibrated with. */
+  strangers: LinkName[];
+  supplySafe: boolean;
 }
 
-export function isSafe(volts: number | null): boolean {
-  return volts !== null && Math.abs(volts) < safeBelowVolts;
+/** Asks every instrument who it is, and the supply whether it stands below the safe voltage. */
+export async function checkLinks(bench: Bench, expected: ExpectedIdentities): Promise<LinksSeen> {
+  const health = await bench.health();
+  const supplyVolts = await bench.supply.measureVolts().catch(() => null);
+  const answering = health.filter((each) => each.identity !== null);
+  return {
+    down: health.filter((each) => each.identity === null).map((each) => each.instrument),
+    strangers: answering
+      .filter((each) => expected[each.instrument] && expected[each.instrument] !== each.identity)
+      .map((each) => each.instrument),
+    supplySafe: supplyVolts !== null && Math.abs(supplyVolts) < safeBelowVolts,
+  };
 }

@@ -4,12 +4,12 @@ import type { OutputState } from '@/lib/search/types';
 import type { RunEffect, RunEvent } from '@/lib/run/types';
 import type { Clock } from '../clock/clock';
 import { OutputSensor } from '../instruments/output-sensor';
-import { safeOff } from '../instruments/safe-off';
-import { stateCycles, valueCycles, type Instruments } from './bench';
+import type { Bench } from '../instruments/open-bench';
+import { stateCycles, valueCycles } from './integration';
 import { overvoltageFault, StationFault } from './fault-of';
 
 export interface Performing {
-  bench: Instruments;
+  bench: Bench;
   clock: Clock;
   sensing: OutputSensing;
   /** Aborted when a later effect takes this one's place: nothing more is sent. */
@@ -83,7 +83,7 @@ export async function performEffect(effect: Effect, performing: Performing): Pro
       await clock.sleep(effect.milliseconds, signal);
       return { kind: 'waited', id };
     case 'supply-off': {
-      const off = await safeOff(bench, clock);
+      const off = await bench.safeOff();
       onReading({ volts: off.confirmed ? off.volts : 0, output: null, rail: 'off' });
       return { kind: 'supply-is-off', id, ...off };
     }
@@ -113,7 +113,7 @@ function reading(volts: number, output: OutputState | null): BenchReading {
 }
 
 /** A terminal voltage far below the command is asked about: a tripped protection is the station's fault, not the board's. */
-async function refuseTripped({ supply }: Instruments, commandedVolts: number, volts: number): Promise<void> {
+async function refuseTripped({ supply }: Bench, commandedVolts: number, volts: number): Promise<void> {
   if (volts > commandedVolts - shortfallVolts) return;
   if (await supply.overvoltageTripped()) throw overvoltageFault(commandedVolts);
 }

@@ -1,7 +1,8 @@
-import type { BenchAnswer, BenchAsk, PendingBin, Standing } from '@/lib/bench/types';
+import type { BenchAnswer, BenchAsk, PendingBin, ReferenceCheck, Standing } from '@/lib/bench/types';
 import type { BoardType } from '@/lib/contracts/board-type';
 import type { CommissioningValues, RunEvent, RunPlan, RunResult } from '@/lib/run/types';
-import type { ReferenceCheck } from '@/lib/bench/types';
+import type { StepGroup } from '@/lib/sequence/step';
+import type { Bench } from '../instruments/open-bench';
 
 /** What a station needs of the server. A failure other than a refusal (the database is away) rejects. */
 export interface StationPorts {
@@ -26,13 +27,15 @@ export interface BenchPlace {
 
 /** Keeps a run's events as they happen and stores the run once, exactly once. Neither method fails: what cannot be stored waits. */
 export interface RunLog {
-  record(event: RunEvent): void;
+  /** `during` is the part of the step line that the event belongs to. */
+  record(event: RunEvent, during: StepGroup): void;
   /** Seconds from scan to end on the station's clock. `stored` is false while the database is away. */
   close(result: RunResult, seconds: number): Promise<{ stored: boolean; validUntilIso: string | null }>;
 }
 
 /** Measures a station with its reference board; in stations/commissioning. Rejects when it cannot, or when aborted. */
 export type CommissionBench = (job: {
+  bench: Bench;
   boardType: BoardType;
   check: ReferenceCheck;
   signal: AbortSignal;

@@ -2,8 +2,8 @@ import { compareReference } from '@/lib/bench/reference-check';
 import type { ReferenceCheck, RunEnding } from '@/lib/bench/types';
 import type { RunPlan, RunResult } from '@/lib/run/types';
 import type { Clock } from '../clock/clock';
-import { safeOff, type SafeOffReport } from '../instruments/safe-off';
-import type { Instruments } from './bench';
+import type { Bench } from '../instruments/open-bench';
+import type { SafeOffReport } from '../instruments/safe-off';
 import { faultOf } from './fault-of';
 import type { RunLog } from './ports';
 import { RunPerformer, type RunPerformerOptions } from './run-performer';
@@ -12,7 +12,7 @@ export interface RunJob {
   plan: RunPlan;
   /** Of a daily check; null for a board. */
   check: ReferenceCheck | null;
-  bench: Instruments | null;
+  bench: Bench | null;
   clock: Clock;
   watchdogMs: number;
   binCode: string;
@@ -46,14 +46,13 @@ async function resultOfRun(job: RunJob): Promise<RunResult> {
   const { plan, bench, clock, watchdogMs, log, onView, onReading, onPerformer, onProblem } = job;
   try {
     if (!bench) throw new Error('The run began before the instruments were opened.');
-    const record = (event: Parameters<RunLog['record']>[0]) => log.record(event);
-    const performer = new RunPerformer({ plan, bench, clock, watchdogMs, record, onView, onReading });
+    const performer = new RunPerformer({ plan, bench, clock, watchdogMs, log, onView, onReading });
     onView(performer.view());
     onPerformer(performer);
     return await performer.perform();
   } catch (error) {
     onProblem(error);
-    return brokenOff(error, bench ? await safeOff(bench, clock) : { confirmed: false });
+    return brokenOff(error, bench ? await bench.safeOff() : { confirmed: false });
   } finally {
     onPerformer(null);
   }

@@ -1,20 +1,24 @@
 import type { BenchReading, RunView } from '@/lib/contracts/bench-view';
 import type { PersonsRunEvent } from '@/lib/bench/types';
-import { advanceRun, beginRun, resultOf, viewRun, type RunState } from '@/lib/run/run';
+import { advanceRun, beginRun, resultOf, type RunState } from '@/lib/run/run';
 import type { RunEffect, RunEvent, RunPlan, RunResult } from '@/lib/run/types';
+import { viewRun } from '@/lib/run/view';
+import type { StepGroup } from '@/lib/sequence/step';
 import type { Clock } from '../clock/clock';
-import { valueCycles, type Instruments } from './bench';
+import type { Bench } from '../instruments/open-bench';
+import { valueCycles } from './integration';
 import { faultOf, stalledFault, type Fault } from './fault-of';
 import { FixtureWatch } from './fixture-watch';
+import type { RunLog } from './ports';
 import { ownDurationMs, performEffect, type Answer } from './perform-effect';
 
 export interface RunPerformerOptions {
   plan: RunPlan;
-  bench: Instruments;
+  bench: Bench;
   clock: Clock;
   /** How long an effect may take beyond its own duration before the watchdog calls it stalled. */
   watchdogMs: number;
-  record(event: RunEvent): void;
+  log: Pick<RunLog, 'record'>;
   onView(view: RunView): void;
   onReading(reading: BenchReading): void;
 }
@@ -29,6 +33,7 @@ const pollWhileWaitingMs = 100;
 /** Performs one run: does what the engine asks, one effect at a time, and tells it what came of it. Decides nothing. */
 export class RunPerformer {
   private state: RunState;
+  private shown: RunView;
   private next: Effect | null = null;
   private current: { effect: Effect; abort: AbortController; superseded: boolean } | null = null;
   private watching = false;
@@ -43,11 +48,12 @@ export class RunPerformer {
     this.fixture = new FixtureWatch(bench.controller, clock);
     const begun = beginRun(plan, this.startedAtMs);
     this.state = begun.state;
+    this.shown = viewRun(begun.state);
     this.take(begun.effects);
   }
 
   view(): RunView {
-    return viewRun(this.state);
+    return this.shown;
   }
 
   /** What a person or the bench did. Taken at once, whatever is being performed. */
@@ -140,11 +146,12 @@ export class RunPerformer {
 
   private feed(unstamped: Unstamped<RunEvent>): void {
     const event = { ...unstamped, atMs: this.options.clock.now() } as RunEvent;
-    this.options.record(event);
+    this.options.log.record(event, currentGroup(this.shown));
     const { state, effects } = advanceRun(this.state, event);
     this.state = state;
     this.take(effects);
-    this.options.onView(this.view());
+    this.shown = viewRun(state);
+    this.options.onView(this.shown);
   }
 
   /** An effect that comes while another is performed takes its place; it is the supply going off, which cannot wait. */
@@ -160,4 +167,8 @@ export class RunPerformer {
     }
     this.wake();
   }
+}
+
+function currentGroup({ stepGroups }: RunView): StepGroup {
+  return stepGroups.find((each) => each.state === 'current')?.group ?? 'record';
 }

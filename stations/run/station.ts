@@ -6,10 +6,11 @@ import type { BenchCommand, CommandReply } from '@/lib/contracts/bench-command';
 import type { BenchReading, BenchView, RunView } from '@/lib/contracts/bench-view';
 import type { RunPlan } from '@/lib/run/types';
 import type { Clock } from '../clock/clock';
-import { safeOff, type SafeOffReport } from '../instruments/safe-off';
-import type { Instruments } from './bench';
-import { BenchKeeper, type OpenBench } from './bench-keeper';
+import type { Bench } from '../instruments/open-bench';
+import type { SafeOffReport } from '../instruments/safe-off';
+import { BenchKeeper } from './bench-keeper';
 import { faultOf } from './fault-of';
+import type { ExpectedIdentities } from './links';
 import type { BenchPlace, CommissionBench, StationPorts } from './ports';
 import { performRun } from './run-job';
 import type { RunPerformer } from './run-performer';
@@ -18,12 +19,13 @@ export interface StationOptions {
   station: BenchView['station'];
   /** The whole text of the code on its red bin. */
   binCode: string;
-  open(): Promise<OpenBench>;
+  open(): Promise<Bench>;
+  expected: ExpectedIdentities;
   clock: Clock;
   /** See RunPerformerOptions. */
   watchdogMs: number;
   ports: StationPorts;
-  commission(bench: Instruments): CommissionBench;
+  commission: CommissionBench;
   onView(view: BenchView): void;
   onReading(reading: BenchReading): void;
   /** Something that should not happen, for the server's log. */
@@ -51,6 +53,7 @@ export class Station {
     this.state = beginBench(options.station);
     this.keeper = new BenchKeeper({
       open: options.open,
+      expected: options.expected,
       clock: options.clock,
       state: () => this.state,
       tell: (event) => this.dispatch(event),
@@ -202,18 +205,19 @@ export class Station {
   }
 
   private async commission({ reference }: Extract<BenchEffect, { kind: 'start-commissioning' }>): Promise<void> {
-    const { ports, clock, commission } = this.options;
+    const { ports, commission } = this.options;
     const abort = new AbortController();
     this.commissioning = abort;
     const { measured, off } = await this.inTurn(async () => {
       const bench = this.keeper.bench!;
-      const measured = await commission(bench)({
+      const measured = await commission({
+        bench,
         ...reference,
         signal: abort.signal,
         onProgress: (step, done, of) =>
           this.background(this.dispatch({ kind: 'commissioning-progress', step, done, of })),
       }).catch((error: unknown) => ({ error }));
-      return { measured, off: await safeOff(bench, clock) };
+      return { measured, off: await bench.safeOff() };
     });
     this.commissioning = null;
     const ended = { kind: 'commissioning-over', supplyConfirmedOff: off.confirmed } as const;
