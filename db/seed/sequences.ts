@@ -15,6 +15,7 @@ interface Recipe {
   currentLimitAmps: number;
   targetVolts: number;
   windowMaxVolts: number;
+  /** Between the points: an output that drops there stays off and can be seen. */
   rideThroughAtVolts: number;
   decisionRule: DecisionRule;
 }
@@ -26,7 +27,7 @@ function sequenceFor(recipe: Recipe): Sequence {
   return {
     decisionRule,
     steps: [
-      { kind: 'seat', contactCheck: { volts: 1.8, currentLimitAmps: 0.02, mostMilliohms: 15_000 } },
+      { kind: 'seat', contactCheck: { volts: 1.8, currentLimitAmps: 0.02, mostMilliohms: 5_000 } },
       {
         kind: 'power-up',
         volts: recipe.workingVolts,
@@ -68,7 +69,7 @@ export const sequences: SeedSequence[] = [
       currentLimitAmps: 0.3,
       targetVolts: 10.8,
       windowMaxVolts: 14.8,
-      rideThroughAtVolts: 12.6,
+      rideThroughAtVolts: 12,
       decisionRule: guardBand,
     }),
   },
@@ -82,7 +83,7 @@ export const sequences: SeedSequence[] = [
       currentLimitAmps: 0.25,
       targetVolts: 21.6,
       windowMaxVolts: 29.5,
-      rideThroughAtVolts: 25.2,
+      rideThroughAtVolts: 23.7,
       decisionRule: guardBand,
     }),
   },
@@ -96,7 +97,7 @@ export const sequences: SeedSequence[] = [
       currentLimitAmps: 0.3,
       targetVolts: 11,
       windowMaxVolts: 14.5,
-      rideThroughAtVolts: 12.6,
+      rideThroughAtVolts: 11.6,
       decisionRule: { kind: 'simple' },
     }),
   },
@@ -110,7 +111,7 @@ export const sequences: SeedSequence[] = [
       currentLimitAmps: 0.3,
       targetVolts: 11,
       windowMaxVolts: 14.5,
-      rideThroughAtVolts: 12.6,
+      rideThroughAtVolts: 11.6,
       decisionRule: { kind: 'simple' },
     }),
   },

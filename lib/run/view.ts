@@ -1,8 +1,9 @@
-import type { RunView, SupplyView } from '../contracts/bench-view';
+import type { RailsView, RunView, SupplyView } from '../contracts/bench-view';
+import type { BoardType } from '../contracts/board-type';
 import { stepGroupOf, stepGroups, type Sequence, type StepGroup } from '../sequence/step';
 import type { SupplyFact } from './facts';
 import type { StepContext } from './machine';
-import { railsOf } from './rails';
+import { printedRails, railsOf } from './rails';
 import type { RunState } from './state';
 import { machineOf } from './steps/step-machines';
 
@@ -10,6 +11,11 @@ import { machineOf } from './steps/step-machines';
 export function groupsOf(sequence: Sequence): StepGroup[] {
   const present = new Set(sequence.steps.map((step) => stepGroupOf[step.kind]));
   return stepGroups.filter((group) => present.has(group));
+}
+
+/** What the next run of a lot will be: shown while idle. */
+export function viewNextRun(boardType: BoardType, sequence: Sequence): { stepGroups: StepGroup[]; rails: RailsView } {
+  return { stepGroups: groupsOf(sequence), rails: printedRails(boardType, sequence) };
 }
 
 /** What the bench shows of a run. */

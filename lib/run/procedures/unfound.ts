@@ -43,7 +43,7 @@ export function beginUnfound(result: NotFound, { plan }: StepContext): UnfoundTu
 }
 
 /** Below this share of the board's own current, the comparator does not draw its part. */
-const lowCurrentShare = 0.6;
+const lowCurrentShare = 0.7;
 
 export function advanceUnfound(machine: Unfound, answer: Answer, context: StepContext): UnfoundTurn | null {
   if (machine.stage === 'current') {
