@@ -1,6 +1,7 @@
 import type { BoardDesign } from './board-design';
 import { dividerOhms, wiperOfFraction } from './divider';
 import { findRoot } from './find-root';
+import { referenceAt } from './soft-knee';
 import type { Thresholds } from './thresholds';
 
 /** What two measured points say about a board whose reference is known. */
@@ -13,13 +14,21 @@ export interface InferredBoard {
 export type Inference = ({ kind: 'found' } & InferredBoard) | { kind: 'impossible' };
 
 /**
- * (trip, release) to (wiper, Rf) for a known reference voltage, closed form. With h = Gf/G1 and q = G2/G1:
- * h = (release - trip)/(trip - Vd - VOL), q = (release + VOL h)/Vz - 1 - h. `impossible` when no parts give these points.
+ * (trip, release) to (wiper, Rf), closed form, for known reference voltages at the two points; they are one and the same
+ * for an ideal zener. With h = Gf/G1, q = G2/G1, VT and VR the references:
+ * h = (VT/VR release - trip) / (trip - Vd - VOL VT/VR), q = (release + VOL h)/VR - 1 - h.
+ * `impossible` when no parts give these points.
  */
-export function inferBoard(design: BoardDesign, points: Thresholds, referenceVolts: number): Inference {
-  const headroom = points.tripVolts - design.outputDropVolts - design.outputLowVolts;
-  const h = (points.releaseVolts - points.tripVolts) / headroom;
-  const q = (points.releaseVolts + design.outputLowVolts * h) / referenceVolts - 1 - h;
+export function inferBoard(
+  design: BoardDesign,
+  { tripVolts, releaseVolts }: Thresholds,
+  atTripVolts: number,
+  atReleaseVolts = atTripVolts,
+): Inference {
+  const sag = atTripVolts / atReleaseVolts;
+  const headroom = tripVolts - design.outputDropVolts - design.outputLowVolts * sag;
+  const h = (sag * releaseVolts - tripVolts) / headroom;
+  const q = (releaseVolts + design.outputLowVolts * h) / atReleaseVolts - 1 - h;
   if (!(h > 0 && q > 0 && headroom > 0)) return { kind: 'impossible' };
   const fraction = 1 / (1 + q);
   return {
@@ -27,6 +36,14 @@ export function inferBoard(design: BoardDesign, points: Thresholds, referenceVol
     wiper: wiperOfFraction(design, fraction),
     feedbackOhms: ((1 - fraction) * dividerOhms(design)) / h,
   };
+}
+
+/** The same with the design's soft-knee reference, which sags between the two points. */
+export function inferSoftKneeBoard(design: BoardDesign, points: Thresholds): Inference {
+  const atTrip = referenceAt(design.reference, points.tripVolts);
+  const atRelease = referenceAt(design.reference, points.releaseVolts);
+  if (atTrip.kind !== 'found' || atRelease.kind !== 'found') return { kind: 'impossible' };
+  return inferBoard(design, points, atTrip.x, atRelease.x);
 }
 
 /** Wiper for a wanted trip point at a known reference (the node's voltage at that supply); a root of a quadratic. */

@@ -11,7 +11,7 @@ import {
 } from '../scpi/command-set';
 import { ScpiSession, type SessionWords } from '../scpi/scpi-session';
 import { scpiSync } from '../scpi/scpi-sync';
-import { simulateBench, type SimulatedBench, type SimulatedBenchOptions } from '../simulation/simulated-bench';
+import { simulateBench, type SimulatedBench } from '../simulation/simulated-bench';
 import type { FixtureController } from './fixture-controller';
 import { InstrumentError, type InstrumentName } from './instrument-error';
 import type { Multimeter } from './multimeter';
@@ -26,8 +26,8 @@ export interface BenchConfig {
   hasWiperProbe: boolean;
   /** Names from `command-sets.json`; plain SCPI-1999 where none is given. */
   commandSets?: { supply?: string; meter?: string; controller?: string };
-  /** Another plant than the seed draws, for studies on simulated stations. */
-  simulation?: Pick<SimulatedBenchOptions, 'fixture' | 'supply' | 'meter'>;
+  /** The bench of an earlier opening on the same clock, so that its board and lid outlive the links; else a new one is made. */
+  simulation?: SimulatedBench;
 }
 
 export interface InstrumentHealth {
@@ -71,7 +71,7 @@ interface Port {
 export async function openBench(config: BenchConfig, clock: Clock): Promise<Bench> {
   const { link, hasWiperProbe, commandSets = {} } = config;
   const simulation =
-    link.kind === 'simulated' ? simulateBench({ ...config.simulation, ...link, hasWiperProbe, clock }) : null;
+    link.kind === 'simulated' ? (config.simulation ?? simulateBench({ ...link, hasWiperProbe, clock })) : null;
   const ports = simulation ? simulation.ports : await serialPorts(link);
 
   const sessions = new Map<InstrumentName, ScpiSession>();
@@ -98,8 +98,7 @@ export async function openBench(config: BenchConfig, clock: Clock): Promise<Benc
   return {
     ...instruments,
     simulation,
-    health: () =>
-      Promise.all(links.map((each) => askHealth(each.instrument, each.link, instruments[each.instrument]))),
+    health: () => Promise.all(links.map((each) => askHealth(each.instrument, each.link, instruments[each.instrument]))),
     watchLinks(watcher) {
       const stops = links.map(({ instrument, link: each }) => each.watch((state) => watcher(instrument, state)));
       return () => stops.forEach((stop) => stop());
@@ -142,7 +141,10 @@ async function serialPorts(link: StationLink): Promise<{ supply: Port; meter: Po
   };
 }
 
-function named<K extends InstrumentName>(instrument: K, name = defaultCommandSet): (typeof knownCommandSets)[K][string] {
+function named<K extends InstrumentName>(
+  instrument: K,
+  name = defaultCommandSet,
+): (typeof knownCommandSets)[K][string] {
   const set = knownCommandSets[instrument][name];
   if (!set) {
     throw new InstrumentError('instrument-error', instrument, `There is no command set ${name} for a ${instrument}.`);

@@ -1,6 +1,7 @@
 import type { BoardDesign } from '@/lib/circuit/board-design';
-import { wiperForTrip } from '@/lib/circuit/inverse';
+import { inferSoftKneeBoard, wiperForTrip } from '@/lib/circuit/inverse';
 import { referenceAt, softKneeThresholds } from '@/lib/circuit/soft-knee';
+import type { Thresholds } from '@/lib/circuit/thresholds';
 import { turnsAt, wiperAt } from '@/lib/circuit/trimmer';
 import type { BoardType } from '@/lib/contracts/board-type';
 import type { DefectKind } from '@/lib/contracts/bench-command';
@@ -25,7 +26,12 @@ const clearance = 0.15;
  * Draws a board of a type: parts within their tolerances, a screw off target. Parts that could not be trimmed to meet the
  * limits are drawn again, as incoming inspection would sort them out; then the defect is fitted. Same seed, same board.
  */
-export function drawBoard(boardType: BoardType, seed: number, defect: DefectKind, options: DrawOptions = {}): BoardTruth {
+export function drawBoard(
+  boardType: BoardType,
+  seed: number,
+  defect: DefectKind,
+  options: DrawOptions = {},
+): BoardTruth {
   const random = seededRandom(seed);
   const { tripVolts } = boardType.limits;
   const targetVolts = options.targetVolts ?? (tripVolts.min + tripVolts.max) / 2;
@@ -36,23 +42,41 @@ export function drawBoard(boardType: BoardType, seed: number, defect: DefectKind
     const screwTurns = drawScrew(boardType, design, targetVolts, random);
     if (screwTurns === null) continue;
     const truth: BoardTruth = {
+      ...sound,
       design,
       trimmer: { ...boardType.trimmer, backlashTurns: boardType.trimmer.backlashTurns * random.between(0.5, 1) },
       screwTurns,
       stops: { minTurns: 0, maxTurns: boardType.trimmer.turns },
       noiseVolts: options.noiseVolts ?? boardType.search.noiseVolts,
-      wiperJumpVolts: 0,
-      wiperFollows: true,
-      output: 'works',
-      zener: 'works',
-      shortOhms: null,
-      padOhms: 0,
-      defect,
     };
     return fitDefect(truth, defect, { targetTurns: turnsAt(boardType.trimmer, targetWiper), random });
   }
   throw new RangeError(`No parts of board type ${boardType.code} reach ${targetVolts} V within its limits.`);
 }
+
+/** A board of known points, as kept for daily checks: nominal parts, with the wiper and feedback that give the points. */
+export function makeReferenceBoard(boardType: BoardType, points: Thresholds, noiseVolts?: number): BoardTruth {
+  const parts = inferSoftKneeBoard(boardType.design, points);
+  if (parts.kind !== 'found') throw new RangeError(`No board of type ${boardType.code} has these points.`);
+  return {
+    ...sound,
+    design: { ...boardType.design, feedbackOhms: parts.feedbackOhms },
+    trimmer: boardType.trimmer,
+    screwTurns: turnsAt(boardType.trimmer, parts.wiper),
+    stops: { minTurns: 0, maxTurns: boardType.trimmer.turns },
+    noiseVolts: noiseVolts ?? boardType.search.noiseVolts,
+  };
+}
+
+const sound = {
+  wiperJumpVolts: 0,
+  wiperFollows: true,
+  output: 'works',
+  zener: 'works',
+  shortOhms: null,
+  padOhms: 0,
+  defect: 'none',
+} as const;
 
 /** Within `tolerance`, three standard deviations. */
 function near(value: number, tolerance: number, random: Random): number {

@@ -9,11 +9,12 @@ const wrongFeedbackRatios = [10, 2.2, 0.45];
 
 /** Makes a sound board defective. `targetTurns` is where the screw would have to go. */
 export function fitDefect(
-  truth: BoardTruth,
+  sound: BoardTruth,
   defect: DefectKind,
   { targetTurns, random }: { targetTurns: number; random: Random },
 ): BoardTruth {
-  const { design } = truth;
+  const { design } = sound;
+  const truth = { ...sound, defect };
   switch (defect) {
     case 'none':
       return truth;

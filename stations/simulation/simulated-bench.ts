@@ -56,4 +56,3 @@ export function simulateBench(options: SimulatedBenchOptions): SimulatedBench {
     },
   };
 }
-

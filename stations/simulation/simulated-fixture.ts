@@ -5,11 +5,11 @@ import { StepResponse, usualStep, type StepCharacter } from './step-response';
 
 export interface FixtureCharacter {
   step: StepCharacter;
-  /** Nails and leads, ohms. */
+  /** Nails in parallel between the sense point and the board, ohms. */
   contactOhms: number;
 }
 
-export const usualFixture: FixtureCharacter = { step: usualStep, contactOhms: 0.03 };
+export const usualFixture: FixtureCharacter = { step: usualStep, contactOhms: 0.004 };
 
 /** How fast the supply's output stage pulls the terminals down once off. */
 const dischargeMs = 15;

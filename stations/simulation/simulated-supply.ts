@@ -78,7 +78,10 @@ export class SimulatedSupply extends ScpiInstrument {
       afterMs: measureMs,
       answer: () => {
         const { readbackOffsetVolts, readbackNoiseVolts } = this.character;
-        return formatNr3(this.fixture.senseVolts() + readbackOffsetVolts + readbackNoiseVolts * this.random.normal(), 5);
+        return formatNr3(
+          this.fixture.senseVolts() + readbackOffsetVolts + readbackNoiseVolts * this.random.normal(),
+          5,
+        );
       },
     }),
     'MEASure[:SCALar]:CURRent[:DC]?': () => ({

@@ -37,7 +37,8 @@ export class StepResponse {
     const sine = (this.rate + decay * this.distance) / pace;
     return (
       Math.exp(-decay * t) *
-      ((sine * pace - decay * this.distance) * Math.cos(angle) - (this.distance * pace + decay * sine) * Math.sin(angle))
+      ((sine * pace - decay * this.distance) * Math.cos(angle) -
+        (this.distance * pace + decay * sine) * Math.sin(angle))
     );
   }
 
