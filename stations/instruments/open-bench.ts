@@ -76,7 +76,14 @@ export async function openBench(config: BenchConfig, clock: Clock): Promise<Benc
 
   const sessions = new Map<InstrumentName, ScpiSession>();
   const open = async (instrument: InstrumentName, port: Port, words: SessionWords) => {
-    const serial = new SerialLink({ instrument, ...port, baudRate: link.baudRate, clock, sync: scpiSync });
+    const serial = new SerialLink({
+      instrument,
+      path: port.path,
+      binding: port.binding,
+      baudRate: link.baudRate,
+      clock,
+      sync: scpiSync,
+    });
     const session = new ScpiSession(serial, words);
     sessions.set(instrument, session);
     await serial.open().catch(() => undefined);
