@@ -87,7 +87,7 @@ export function layoutLabel(content: LabelContent): LabelOutcome {
           sizePt: 5,
           anchor: 'start',
           font: 'text',
-          text: shortened(`${content.boardTypeCode}, ${content.boardTypeName}`, 34),
+          text: shortened(`${content.boardTypeCode}, ${content.boardTypeName}`, 38),
         },
         { xMm: 2.3, yMm: 5.9, sizePt: 5, anchor: 'start', font: 'text', text: pointsLine(content) },
         {

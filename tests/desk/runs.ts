@@ -60,16 +60,14 @@ export async function insertRun(db: Database, story: RunStory): Promise<{ id: st
       measured({ quantity: 'release-volts', value: story.releaseVolts ?? 12.23, min: 12.1, max: 12.5 }),
     ];
     await tx.insert(measurements).values(values.map((value, n) => ({ ...value, runId: run!.id, n })));
-    await tx
-      .insert(traces)
-      .values({
-        runId: run!.id,
-        n: 0,
-        kind: 'find-points',
-        atMs: [0, 500, 900],
-        volts: [12, 11, 10.2],
-        output: [1, 1, 0],
-      });
+    await tx.insert(traces).values({
+      runId: run!.id,
+      n: 0,
+      kind: 'find-points',
+      atMs: [0, 500, 900],
+      volts: [12, 11, 10.2],
+      output: [1, 1, 0],
+    });
     const { ending } = story;
     await tx
       .update(runs)

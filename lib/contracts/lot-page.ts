@@ -1,0 +1,57 @@
+import type { BoardStanding } from '../decision/board-standing';
+import type { RejectReason, Verdict } from '../run/types';
+import type { LotSummary } from '../statistics/lot-summary';
+import type { LabelState, LotState } from './stored-states';
+
+/** A value against the limits it was judged by. Volts. */
+export interface PointAgainstLimits {
+  value: number;
+  min: number | null;
+  max: number | null;
+}
+
+/** One row of the table of boards. */
+export interface LotBoardRow {
+  serial: string;
+  position: number;
+  standing: BoardStanding['kind'];
+  /** Of the newest run with a verdict; `no-verdict` when there were only others; null before the first run. */
+  verdict: Verdict | null;
+  rejectReason: RejectReason | null;
+  runs: number;
+  /** Points of the newest run that ended; null where it found none. */
+  tripVolts: PointAgainstLimits | null;
+  releaseVolts: PointAgainstLimits | null;
+  stationCode: string | null;
+  endedAtIso: string | null;
+  label: { state: LabelState; problem: string | null } | null;
+}
+
+export interface ComponentBatchRow {
+  id: string;
+  component: string;
+  batch: string;
+  fromIso: string;
+  byName: string;
+  stationCode: string | null;
+}
+
+/** Everything that the page of a lot shows; fetched again every few seconds while the lot is in production. */
+export interface LotPage {
+  id: string;
+  code: string;
+  state: LotState;
+  boardTypeCode: string;
+  boardTypeName: string;
+  sequenceNumber: number;
+  createdAtIso: string;
+  createdByName: string;
+  closedAtIso: string | null;
+  hold: { sinceIso: string; byName: string; reason: string } | null;
+  stationCodes: string[];
+  firstTestIso: string | null;
+  lastTestIso: string | null;
+  summary: LotSummary;
+  boards: LotBoardRow[];
+  components: ComponentBatchRow[];
+}
