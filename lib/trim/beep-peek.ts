@@ -30,12 +30,14 @@ const roomVolts = 0.005;
 
 /** The nearer place, where there is room before the hold. */
 function nearerPlace(state: TrimState, watch: BeepWatch): PeekPlace | null {
+  if (watch.nearVolts === null) return null;
   const volts = watch.nearVolts + sign(watch) * state.pace.peekVolts;
   return sign(watch) * (watch.holdVolts - volts) > roomVolts ? { look: 'nearer', volts, doublings: 0 } : null;
 }
 
 /** A place farther than ever, inside the supply's range; null where the range ends before it. */
 function fartherPlace(state: TrimState, watch: BeepWatch, doublings: number): PeekPlace | null {
+  if (watch.farVolts === null) return null;
   const { minVolts, maxVolts } = supplyLimits(state);
   const volts = watch.farVolts - sign(watch) * state.pace.peekVolts * 2 ** doublings;
   return volts > minVolts && volts < maxVolts ? { look: 'farther', volts, doublings } : null;
@@ -62,7 +64,7 @@ export function judgePeek(
   if (place.look === 'nearer') {
     if (answered) return { kind: 'moved', pastVolts: place.volts };
     const next = fartherPlace(state, watch, 0);
-    return next ? { next } : { kind: 'unmoved' };
+    return next ? { next } : { kind: 'not-away' };
   }
   const distance = state.pace.peekVolts * 2 ** place.doublings;
   if (answered && place.doublings === 0) return { kind: nearerPlace(state, watch) ? 'unmoved' : 'not-away' };

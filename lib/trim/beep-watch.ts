@@ -15,9 +15,9 @@ export interface BeepWatch {
   tripAtHoldVolts: number;
   /** False where more than four turns are left and the beep comes on the way. */
   last: boolean;
-  /** Where the watched point is known to be: not beyond `near` (toward the hold), not short of `far`, unless it moved. */
-  nearVolts: number;
-  farVolts: number;
+  /** The watched point was proved not to be beyond `near` (toward the hold) nor short of `far`; null where it was not. */
+  nearVolts: number | null;
+  farVolts: number | null;
   promptedAtMs: number | null;
   nextPeekAtMs: number;
   /** Prompt, or the last movement seen. */
@@ -51,9 +51,7 @@ const armMarginVolts = 0.05;
 /** Arms the output on the side of the watch and brings the supply to its hold. */
 export function armPath(state: TrimState, watch: BeepWatch): SupplyPath {
   const margin = armMarginVolts + 4 * state.settings.noiseVolts;
-  const trips = watch.rising
-    ? Math.max(watch.tripAtHoldVolts, watch.nearVolts)
-    : Math.min(watch.tripAtHoldVolts, state.trip.volts);
+  const trips = watch.rising ? watch.tripAtHoldVolts : Math.min(watch.tripAtHoldVolts, state.trip.volts);
   if (watch.rising) {
     return armOnThenHold(state.supplyVolts, releaseFor(state, trips) + margin, watch.holdVolts, supplyLimits(state));
   }

@@ -5,6 +5,17 @@ import { paceOf, type Pace } from './pace';
 import type { BeepPhase } from './two-beeps';
 import type { FoundPoints, TrimCommand, TrimFinding, TrimOutcome, TrimSettings, TrimView } from './types';
 
+export interface TripBounds {
+  minVolts: number | null;
+  maxVolts: number | null;
+}
+
+/** Bounds that a measured trip point proves, at three standard uncertainties. */
+export function provedBy(trip: { volts: number; standardUncertaintyVolts: number }): TripBounds {
+  const doubt = 3 * trip.standardUncertaintyVolts;
+  return { minVolts: trip.volts - doubt, maxVolts: trip.volts + doubt };
+}
+
 /** One trim from its first prompt to its outcome. Plain data: a copy of it replays the same way. */
 export interface TrimState {
   settings: TrimSettings;
@@ -17,6 +28,8 @@ export interface TrimState {
   advice: Advice | null;
   /** The trip point as last measured, or as the last beep or bracket tells. */
   trip: { volts: number; standardUncertaintyVolts: number };
+  /** What is proved of the trip point where the screw last stood; null where nothing is. */
+  proved: TripBounds;
   /** Hysteresis as last measured, and the trip point it belongs to. */
   hysteresis: { volts: number; atTripVolts: number };
   tripIsStale: boolean;
@@ -40,6 +53,7 @@ export interface TrimState {
 }
 
 export function startState(settings: TrimSettings, found: FoundPoints, atMs: number): TrimState {
+  const trip = { volts: found.tripVolts, standardUncertaintyVolts: found.tripUncertaintyVolts };
   return {
     settings,
     pace: paceOf(settings),
@@ -49,7 +63,8 @@ export function startState(settings: TrimSettings, found: FoundPoints, atMs: num
     atMs,
     stage: 'measuring',
     advice: null,
-    trip: { volts: found.tripVolts, standardUncertaintyVolts: found.tripUncertaintyVolts },
+    trip,
+    proved: provedBy(trip),
     hysteresis: { volts: found.releaseVolts - found.tripVolts, atTripVolts: found.tripVolts },
     tripIsStale: false,
     heldVolts: null,

@@ -5,7 +5,7 @@ import { armPath, releaseFor, waitingOutput, type BeepWatch } from './beep-watch
 import { raisingTurnsTo, tripAfter } from './board-estimate';
 import { reactionSeconds } from './pace';
 import { failNoEffect, foundMovement, foundNoEffect, foundWrongWay, noEffectAnswerMs, prompt } from './prompts';
-import { finishFailed, finishTrimmed, nearTarget, type TrimState } from './state';
+import { finishFailed, finishTrimmed, nearTarget, provedBy, type TrimState } from './state';
 import type { TrimObservation } from './types';
 import { askVerify, isOnTarget, judgeVerify, relearn, withResult } from './verify';
 
@@ -23,7 +23,6 @@ export type BeepPhase =
 
 const pauseAfterBeepMs = 1200;
 const handsOffMs = 500;
-const peekEveryMs = 2000;
 /** Without movement: the tool is on the screw already, or it has to be fetched (first prompt, screw just found). */
 const noEffectAfterMs = 6000;
 const noEffectWithFetchAfterMs = 12_000;
@@ -59,8 +58,8 @@ function watchFor(state: TrimState, beep: 1 | 2, rising: boolean, tripVolts: num
   const last = advice.cutBy !== 'most-at-once';
   const signed = rising ? advice.turns : -advice.turns;
   const tripAtHoldVolts = last ? tripVolts : tripAfter(state.estimate, state.settings, signed);
-  const known = rising ? state.trip.volts : releaseFor(state, state.trip.volts);
-  const doubt = (rising ? 3 : -3) * state.trip.standardUncertaintyVolts;
+  const pointAt = (trip: number | null) => (trip === null || rising ? trip : releaseFor(state, trip));
+  const { minVolts, maxVolts } = state.proved;
   return arm(
     { ...state, advice },
     {
@@ -69,8 +68,8 @@ function watchFor(state: TrimState, beep: 1 | 2, rising: boolean, tripVolts: num
       last,
       holdVolts: rising ? tripAtHoldVolts : releaseFor(state, tripAtHoldVolts),
       tripAtHoldVolts,
-      nearVolts: known + doubt,
-      farVolts: known - doubt,
+      nearVolts: pointAt(rising ? maxVolts : minVolts),
+      farVolts: pointAt(rising ? minVolts : maxVolts),
       promptedAtMs: null,
       nextPeekAtMs: 0,
       movedAtMs: state.atMs,
@@ -115,7 +114,11 @@ function armed(state: TrimState, watch: BeepWatch, seen: { volts: number; output
 
 /** The point is past the hold before anyone turned. */
 function answeredAtOnce(state: TrimState, watch: BeepWatch): TrimState {
-  if (watch.rising) return fall(state, state.pace.backOffVolts);
+  if (watch.rising) {
+    const proved = { minVolts: watch.holdVolts, maxVolts: null };
+    const trip = { volts: watch.holdVolts + state.pace.peekVolts, standardUncertaintyVolts: 0.05 };
+    return fall(relearn({ ...state, trip, proved }), state.pace.backOffVolts);
+  }
   const farther = state.pace.backOffVolts + Math.min(0.1, 0.15 * state.pace.voltsPerTurn);
   const already = watch.tripAtHoldVolts <= state.settings.targetVolts - farther;
   return already ? riseToSecond(state) : fall(state, farther);
@@ -133,10 +136,12 @@ function promptBeep(state: TrimState, watch: BeepWatch): TrimState {
 }
 
 /** A peek is deaf to the beep, so at the slow pace it waits until the beep is overdue. */
-function firstPeekAfterMs({ pace }: TrimState, watch: BeepWatch): number {
-  if (watch.beep === 1) return peekEveryMs;
+function firstPeekAfterMs(state: TrimState, watch: BeepWatch): number {
+  const { pace, prompts } = state;
+  if (watch.beep === 1) return peekEveryMs(state);
   const slowVoltsPerSecond = pace.voltsPerTurn * pace.slowTurnsPerSecond;
-  return 4000 + (1000 * Math.abs(watch.holdVolts - watch.farVolts)) / slowVoltsPerSecond;
+  const expectedMs = (1000 * Math.abs(watch.tripAtHoldVolts - state.trip.volts)) / slowVoltsPerSecond;
+  return (prompts === 0 ? noEffectWithFetchAfterMs : noEffectAfterMs) + 1.5 * expectedMs;
 }
 
 const listen = (state: TrimState, watch: BeepWatch): TrimState => ({
@@ -167,7 +172,7 @@ function learn(state: TrimState, watch: BeepWatch, found: PeekFinding): TrimStat
       // From here it is only known to be somewhere before the hold.
       return arm(foundMovement(state), {
         ...watch,
-        nearVolts: watch.holdVolts,
+        nearVolts: null,
         farVolts: found.pastVolts,
         movedAtMs: now,
         nextPeekAtMs: now + noEffectAfterMs,
@@ -180,7 +185,7 @@ function learn(state: TrimState, watch: BeepWatch, found: PeekFinding): TrimStat
       return goOn(state, watch, arm);
     case 'unmoved': {
       const waited = now - watch.promptedAtMs!;
-      const again = { ...watch, nextPeekAtMs: now + peekEveryMs };
+      const again = { ...watch, nextPeekAtMs: now + peekEveryMs(state) };
       if (watch.noEffectAtMs !== null || waited < patienceMs(state, watch)) {
         return arm(state, again);
       }
@@ -188,6 +193,9 @@ function learn(state: TrimState, watch: BeepWatch, found: PeekFinding): TrimStat
     }
   }
 }
+
+/** A peek is deaf to the beep for about ten commands, so a slow link peeks less often. */
+const peekEveryMs = ({ settings }: TrimState) => Math.max(2000, 45 * settings.pollMs);
 
 function patienceMs(state: TrimState, watch: BeepWatch): number {
   return state.prompts === 1 || watch.screwFound ? noEffectWithFetchAfterMs : noEffectAfterMs;
@@ -201,7 +209,7 @@ function noEffect(state: TrimState, watch: BeepWatch): TrimState {
 
 /** Nothing told by this peek: wait on, and measure again once it has been silent for long. */
 function goOn(state: TrimState, watch: BeepWatch, wait: typeof arm): TrimState {
-  const again = { ...watch, nextPeekAtMs: state.atMs + peekEveryMs };
+  const again = { ...watch, nextPeekAtMs: state.atMs + peekEveryMs(state) };
   if (state.atMs - watch.movedAtMs < silenceMs) return wait(state, again);
   return {
     ...state,
@@ -219,7 +227,8 @@ function turnedAway(state: TrimState, watch: BeepWatch, found: { fromVolts: numb
   const volts = (found.fromVolts + found.toVolts) / 2 - (watch.rising ? 0 : hysteresisVolts);
   const standardUncertaintyVolts = Math.abs(found.fromVolts - found.toVolts) / Math.sqrt(12);
   const wrong = foundWrongWay(state, Math.abs(volts - state.trip.volts));
-  const moved = relearn({ ...wrong, trip: { volts, standardUncertaintyVolts } });
+  const trip = { volts, standardUncertaintyVolts };
+  const moved = relearn({ ...wrong, trip, proved: provedBy(trip) });
   return chooseBeep(moved, turnBackVolts);
 }
 
@@ -228,7 +237,7 @@ function measuredAgain(
   watch: BeepWatch,
   result: Extract<TrimObservation, { kind: 'searched' }>['result'],
 ): TrimState {
-  const quiet = { ...watch, movedAtMs: state.atMs, nextPeekAtMs: state.atMs + peekEveryMs };
+  const quiet = { ...watch, movedAtMs: state.atMs, nextPeekAtMs: state.atMs + peekEveryMs(state) };
   const stage = watch.beep === 1 ? ('beep-1' as const) : ('beep-2' as const);
   // Still turning while it was measured, or chattering: a beep or the next measurement tells.
   if (result.kind === 'unresolved' || result.kind === 'chatter') {
@@ -257,7 +266,11 @@ function beep(state: TrimState, watch: BeepWatch): TrimState {
   const coastingVolts = pace.voltsPerTurn * pace.briskTurnsPerSecond * (reactionSeconds + settings.pollMs / 2000);
   const coasted = watch.beep === 2 ? 0 : watch.rising ? coastingVolts : -coastingVolts;
   const volts = watch.tripAtHoldVolts + coasted;
-  const heard = foundMovement({ ...state, trip: { volts, standardUncertaintyVolts: 0.03 }, tripIsStale: true });
+  const proved = watch.rising
+    ? { minVolts: watch.tripAtHoldVolts, maxVolts: null }
+    : { minVolts: null, maxVolts: watch.tripAtHoldVolts };
+  const trip = { volts, standardUncertaintyVolts: 0.03 };
+  const heard = foundMovement({ ...state, trip, proved, tripIsStale: true });
   return {
     ...relearn(heard),
     stage: watch.beep === 1 ? 'beep-1-heard' : 'beep-2-heard',

@@ -1,6 +1,6 @@
 import type { SearchPrior, SearchResult } from '../search/types';
 import { observeTrip, turnedFreely } from './board-estimate';
-import { finishFailed, finishTrimmed, type TrimState } from './state';
+import { finishFailed, finishTrimmed, provedBy, type TrimState } from './state';
 
 /** Ask for the search that judges a stop: end check, and fine enough for the tolerance. */
 export function askVerify(state: TrimState, prior: SearchPrior | null): TrimState {
@@ -41,15 +41,19 @@ export function withResult(
   result: Extract<SearchResult, { kind: 'found' | 'stuck-on' | 'stuck-off' }>,
 ): TrimState {
   const { supplyMinVolts, supplyMaxVolts } = state.settings;
-  const trip =
-    result.kind === 'found'
-      ? { volts: result.trip.volts, standardUncertaintyVolts: result.trip.standardUncertaintyVolts }
-      : { volts: result.kind === 'stuck-on' ? supplyMinVolts : supplyMaxVolts, standardUncertaintyVolts: 0.3 };
-  const hysteresis =
-    result.kind === 'found'
-      ? { volts: Math.max(0.01, result.release.volts - result.trip.volts), atTripVolts: trip.volts }
-      : state.hysteresis;
-  return { ...state, trip, hysteresis, tripIsStale: false, liveTripVolts: null };
+  const measured = { ...state, tripIsStale: false, liveTripVolts: null };
+  if (result.kind === 'stuck-on') {
+    const trip = { volts: supplyMinVolts, standardUncertaintyVolts: 0.3 };
+    return { ...measured, trip, proved: { minVolts: null, maxVolts: supplyMinVolts } };
+  }
+  if (result.kind === 'stuck-off') {
+    const trip = { volts: supplyMaxVolts, standardUncertaintyVolts: 0.3 };
+    return { ...measured, trip, proved: { minVolts: supplyMaxVolts - state.hysteresis.volts, maxVolts: null } };
+  }
+  const { volts, standardUncertaintyVolts } = result.trip;
+  const trip = { volts, standardUncertaintyVolts };
+  const hysteresis = { volts: Math.max(0.01, result.release.volts - volts), atTripVolts: volts };
+  return { ...measured, trip, proved: provedBy(trip), hysteresis };
 }
 
 /** The estimate with the trip point just measured, after a turn of unknown size. */
