@@ -18,6 +18,11 @@ const environmentSchema = z
     PORT: z.coerce.number({ error: 'PORT must be a number.' }).int().min(1).max(65_535).default(3000),
     /** The address that people type. Absent: http on the host and port. */
     PUBLIC_URL: z.url({ protocol: /^https?$/, error: 'PUBLIC_URL must be an http or https address.' }).optional(),
+    /** Certificate and key of our own, as PEM files: the server then speaks https itself. */
+    TLS_CERTIFICATE_FILE: z.string().optional(),
+    TLS_KEY_FILE: z.string().optional(),
+    /** A proxy in front of us ends https and overwrites the forwarding headers. */
+    TRUSTED_PROXY: flag,
     NEXTAUTH_SECRET: z.string().min(32, { error: 'NEXTAUTH_SECRET needs at least 32 characters.' }),
     /** How much faster than real time simulated stations run. Real stations always run at 1. */
     SILLWRIGHT_CLOCK_RATE: z.coerce.number().min(1).max(1000).default(1),
@@ -30,7 +35,15 @@ const environmentSchema = z
     databaseOwnerUrl: e.DATABASE_OWNER_URL ?? e.DATABASE_URL,
     host: e.HOST,
     port: e.PORT,
-    publicUrl: (e.PUBLIC_URL ?? `http://${e.HOST.includes(':') ? `[${e.HOST}]` : e.HOST}:${e.PORT}`).replace(/\/$/, ''),
+    publicUrl: (
+      e.PUBLIC_URL ??
+      `http${e.TLS_CERTIFICATE_FILE ? 's' : ''}://${e.HOST.includes(':') ? `[${e.HOST}]` : e.HOST}:${e.PORT}`
+    ).replace(/\/$/, ''),
+    tls:
+      e.TLS_CERTIFICATE_FILE && e.TLS_KEY_FILE
+        ? { certificateFile: e.TLS_CERTIFICATE_FILE, keyFile: e.TLS_KEY_FILE }
+        : null,
+    trustedProxy: e.TRUSTED_PROXY,
     secret: e.NEXTAUTH_SECRET,
     clockRate: e.SILLWRIGHT_CLOCK_RATE,
     demo: e.SILLWRIGHT_DEMO,
@@ -42,6 +55,12 @@ const environmentSchema = z
       context.addIssue({
         code: 'custom',
         message: `HOST=${e.host} reaches beyond this computer: set PUBLIC_URL to the https address that people will use.`,
+      });
+    }
+    if (!e.tls && !e.trustedProxy) {
+      context.addIssue({
+        code: 'custom',
+        message: `HOST=${e.host} reaches beyond this computer: give TLS_CERTIFICATE_FILE and TLS_KEY_FILE, or set TRUSTED_PROXY=1 behind a proxy that ends https.`,
       });
     }
     if (e.demo) {
