@@ -38,6 +38,7 @@ export abstract class ScpiInstrument {
   private sendBytes: (bytes: Buffer) => void = () => undefined;
   private byteMs = 0;
   private busyUntilMs = 0;
+  private sendingUntilMs = 0;
   private fault: AnswerFault | null = null;
 
   constructor(
@@ -50,6 +51,7 @@ export abstract class ScpiInstrument {
     this.sendBytes = send;
     this.byteMs = baudRate === null ? 0 : 10_000 / baudRate;
     this.busyUntilMs = 0;
+    this.sendingUntilMs = 0;
     this.lines.clear();
   }
 
@@ -119,10 +121,11 @@ export abstract class ScpiInstrument {
     if (fault && --fault.count <= 0) this.fault = null;
     if (fault?.kind === 'silent') return;
     const bytes = fault ? spoilt(text, fault) : Buffer.from(`${text}\n`, 'latin1');
-    const afterMs = bytes.length * this.byteMs + (fault?.lateMs ?? 0);
-    this.busyUntilMs = Math.max(this.busyUntilMs, this.clock.now() + bytes.length * this.byteMs);
+    // An instrument answers in order: what comes after a late answer is late too.
+    const startMs = Math.max(this.clock.now(), this.sendingUntilMs) + (fault?.lateMs ?? 0);
+    this.sendingUntilMs = startMs + bytes.length * this.byteMs;
     const { sendBytes } = this;
-    this.clock.after(afterMs, () => sendBytes(bytes));
+    this.clock.after(this.sendingUntilMs - this.clock.now(), () => sendBytes(bytes));
   }
 
   private find(header: string): ((parameters: string[]) => Effect) | null {

@@ -37,7 +37,11 @@ beforeEach(async () => {
 
 describe('SerialLink', () => {
   it('sends one command at a time, in the order they were asked', async () => {
-    const answers = await Promise.all([link.exchange('SLOW?', 1000), link.exchange('COUN?', 1000), link.exchange('ECHO? b', 1000)]);
+    const answers = await Promise.all([
+      link.exchange('SLOW?', 1000),
+      link.exchange('COUN?', 1000),
+      link.exchange('ECHO? b', 1000),
+    ]);
     expect(answers).toEqual(['slow', '1', 'b']);
   });
 
@@ -54,7 +58,10 @@ describe('SerialLink', () => {
     await link.exchange('COUN?', 1000);
     instrument.spoil({ kind: 'silent', count: 1 });
     const before = clock.now();
-    await expect(link.exchange('COUN?', 500)).rejects.toMatchObject({ code: 'instrument-timeout', instrument: 'meter' });
+    await expect(link.exchange('COUN?', 500)).rejects.toMatchObject({
+      code: 'instrument-timeout',
+      instrument: 'meter',
+    });
     expect(clock.now() - before).toBe(500);
     expect(await link.exchange('COUN?', 500)).toBe('3');
   });
@@ -65,11 +72,10 @@ describe('SerialLink', () => {
       await link.exchange('COUN?', 1000);
       instrument.spoil({ kind: 'late', count: 1, lateMs });
       await link.exchange('COUN?', 100).catch(() => undefined);
-      for (let i = 0; i < 12; i++) {
-        const text = `x${i}`;
+      while (clock.now() < lateMs + 2000) {
+        const text = `x${Math.round(clock.now())}`;
         const answer = await link.exchange(`ECHO? ${text}`, 400).catch((error: { code: string }) => error.code);
-        expect([text, 'instrument-timeout', 'instrument-garbled']).toContain(answer);
-        await clock.sleep(200);
+        expect([text, 'instrument-timeout']).toContain(answer);
       }
       expect(await link.exchange('ECHO? end', 400)).toBe('end');
     },
