@@ -1,5 +1,6 @@
 import { compareReference } from '@/lib/bench/reference-check';
 import type { ReferenceCheck, RunEnding } from '@/lib/bench/types';
+import type { RunView } from '@/lib/contracts/bench-view';
 import type { RunPlan, RunResult } from '@/lib/run/types';
 import type { Clock } from '../clock/clock';
 import type { Bench } from '../instruments/open-bench';
@@ -24,11 +25,18 @@ export interface RunJob {
   onPerformer(performer: RunPerformer | null): void;
 }
 
+export interface RunOver {
+  ending: RunEnding;
+  /** What the bench shows from now on; null when the run never began. */
+  view: RunView | null;
+  stored: boolean;
+}
+
 /** From the first effect to the closed record. Never rejects: whatever fails, the supply is off and the run has an ending. */
-export async function performRun(job: RunJob): Promise<{ ending: RunEnding; stored: boolean }> {
+export async function performRun(job: RunJob): Promise<RunOver> {
   const { plan, check, clock, binCode } = job;
   const startedAtMs = clock.now();
-  const result = await resultOfRun(job);
+  const { result, view } = await resultOfRun(job);
   const seconds = (clock.now() - startedAtMs) / 1000;
   const { stored, validUntilIso } = await job.log.close(result, seconds);
   const ending: RunEnding = {
@@ -39,23 +47,40 @@ export async function performRun(job: RunJob): Promise<{ ending: RunEnding; stor
     bin: result.verdict === 'reject' && !check ? { runId: plan.runId, serial: plan.serial, binCode } : null,
     reference: check && { ...compareReference(check, result), validUntilIso },
   };
-  return { ending, stored };
+  return { ending, view, stored };
 }
 
-async function resultOfRun(job: RunJob): Promise<RunResult> {
+async function resultOfRun(job: RunJob): Promise<{ result: RunResult; view: RunView | null }> {
   const { plan, bench, clock, watchdogMs, log, onView, onReading, onPerformer, onProblem } = job;
+  let performer: RunPerformer | null = null;
   try {
     if (!bench) throw new Error('The run began before the instruments were opened.');
-    const performer = new RunPerformer({ plan, bench, clock, watchdogMs, log, onView, onReading });
+    performer = new RunPerformer({ plan, bench, clock, watchdogMs, log, onView, onReading });
     onView(performer.view());
     onPerformer(performer);
-    return await performer.perform();
+    return { result: await performer.perform(), view: performer.view() };
   } catch (error) {
     onProblem(error);
-    return brokenOff(error, bench ? await bench.safeOff() : { confirmed: false });
+    const result = brokenOff(error, bench ? await bench.safeOff() : { confirmed: false });
+    return { result, view: performer && brokenView(performer.view(), result) };
   } finally {
     onPerformer(null);
   }
+}
+
+function brokenView(view: RunView, { faultCode, faultDetail, supplyOff }: RunResult): RunView {
+  return {
+    ...view,
+    supply: supplyOff.confirmed ? { state: 'off', volts: supplyOff.volts ?? 0 } : { state: 'maybe-on' },
+    screen: {
+      kind: 'no-verdict',
+      reason: 'interrupted',
+      code: faultCode,
+      detail: { code: 'run.fault', params: { detail: faultDetail ?? '' } },
+      failingWhenStopped: false,
+      stoppedAtVolts: null,
+    },
+  };
 }
 
 /** A run whose engine failed: the station's fault, never the board's. */

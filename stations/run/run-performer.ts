@@ -151,7 +151,8 @@ export class RunPerformer {
     this.state = state;
     this.take(effects);
     this.shown = viewRun(state);
-    this.options.onView(this.shown);
+    // The end is shown once it is recorded.
+    if (!this.over) this.options.onView(this.shown);
   }
 
   /** An effect that comes while another is performed takes its place; it is the supply going off, which cannot wait. */

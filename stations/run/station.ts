@@ -178,7 +178,7 @@ export class Station {
   private async run(plan: RunPlan, check: ReferenceCheck | null): Promise<void> {
     const { ports, clock, watchdogMs, binCode, onReading, onProblem } = this.options;
     this.running = true;
-    const { ending, stored } = await this.inTurn(() =>
+    const { ending, view, stored } = await this.inTurn(() =>
       performRun({
         plan,
         check,
@@ -200,6 +200,7 @@ export class Station {
       }),
     );
     this.running = false;
+    this.lastRun = view;
     if (!stored) await this.dispatch({ kind: 'database', away: true });
     await this.dispatch({ kind: 'run-over', ending });
   }
