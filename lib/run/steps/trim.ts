@@ -45,7 +45,7 @@ export const trim: StepMachine<TrimStep, TrimMachine> = {
       tripUncertaintyVolts: found.trip.standardUncertaintyVolts,
       releaseVolts: found.release.volts,
     };
-    const refusal = refuseUntrimmable(settings, found, context);
+    const refusal = refuseUntrimmable(settings, points, context);
     if (refusal) return { ending: refusal };
     const state = beginTrim(settings, points, context.atMs);
     const turn = obey({ trim: state, doing: { kind: 'asked' }, unresolved: false }, step, context);

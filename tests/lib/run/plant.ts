@@ -89,7 +89,6 @@ export class Plant {
         return { tripVolts: -1, releaseVolts: -1 };
       case 'zener-open':
       case 'op-amp-missing':
-      case 'wiper-open':
         return { tripVolts: 99, releaseVolts: 99 };
       case 'zener-reversed':
         return { tripVolts: 1.5, releaseVolts: 1.6 };
@@ -101,7 +100,7 @@ export class Plant {
   }
 
   turn(turns: number): void {
-    if (this.defect === 'trimmer-at-end') return;
+    if (this.defect === 'trimmer-at-end' || this.defect === 'wiper-open') return;
     this.screwTurns = Math.min(this.boardType.trimmer.turns, Math.max(0, this.screwTurns + turns));
     this.switchAt(this.setVolts);
   }
@@ -246,14 +245,16 @@ function spread(design: BoardDesign, random: () => number, defect: DefectKind): 
     ...design,
     reference: {
       ...design.reference,
-      nominalVolts: defect === 'wrong-zener' ? design.reference.nominalVolts * 1.1 : about(design.reference.nominalVolts, 0.004),
+      nominalVolts:
+        defect === 'wrong-zener' ? design.reference.nominalVolts * 1.1 : about(design.reference.nominalVolts, 0.004),
     },
     trimmerOhms: about(design.trimmerOhms, 0.03),
     supplyEndOhms: about(design.supplyEndOhms, 0.003),
     groundEndOhms: about(design.groundEndOhms, 0.003),
-    feedbackOhms: {
-      'wrong-feedback': design.feedbackOhms / 2.2,
-      'feedback-open': 1e9,
-    }[defect as string] ?? about(design.feedbackOhms, 0.003),
+    feedbackOhms:
+      {
+        'wrong-feedback': design.feedbackOhms / 2.2,
+        'feedback-open': 1e9,
+      }[defect as string] ?? about(design.feedbackOhms, 0.003),
   };
 }

@@ -1,0 +1,58 @@
+import { say } from '../bench/sayings';
+import type { Say } from '../contracts/bench-view';
+import type { LotState } from '../contracts/stored-states';
+import type { BoardStanding } from '../decision/board-standing';
+
+/** What is on record of a scanned serial, of the lot in work, and of the sequence that the lot is tested with. */
+export interface BoardFacts {
+  serial: string;
+  /** The lot whose sheet was scanned. */
+  lot: { code: string; state: LotState; held: boolean; boardTypeCode: string; serialPattern: string };
+  /** Null: no board of this serial is on record. */
+  unit: { lotCode: string; standing: BoardStanding } | null;
+  /** Where its open run is, if it has one. */
+  inTestAt: string | null;
+  sequence: { released: boolean };
+}
+
+export type BoardAdmission = { allowed: true; retestOrderId: string | null } | { allowed: false; refusal: Say };
+
+const refuse = (refusal: Say): BoardAdmission => ({ allowed: false, refusal });
+
+/**
+ * Whether this board may be tested in this lot now. The lot first, then whether it is the lot's board, then the board's own
+ * record; each refusal says its reason.
+ */
+export function admitBoard({ serial, lot, unit, inTestAt, sequence }: BoardFacts): BoardAdmission {
+  if (lot.held) return refuse(say('lot-on-hold', { lot: lot.code }));
+  if (lot.state === 'paused') return refuse(say('lot-paused', { lot: lot.code }));
+  if (lot.state !== 'open') return refuse(say('lot-not-open', { lot: lot.code }));
+  if (!sequence.released) return refuse(say('sequence-not-released', { boardType: lot.boardTypeCode }));
+  if (!new RegExp(lot.serialPattern).test(serial)) return refuse(say('serial-wrong-form', { serial }));
+  if (!unit) return refuse(say('serial-unknown', { serial }));
+  if (unit.lotCode !== lot.code) return refuse(say('serial-of-other-lot', { serial, lot: unit.lotCode }));
+  return admitStanding(serial, unit.standing, inTestAt);
+}
+
+function admitStanding(serial: string, standing: BoardStanding, inTestAt: string | null): BoardAdmission {
+  switch (standing.kind) {
+    case 'may-be-tested':
+      return { allowed: true, retestOrderId: standing.retestOrderId };
+    case 'in-test':
+      return refuse(say('board-in-test', { serial, station: inTestAt ?? '' }));
+    case 'passed':
+      return refuse(say('board-passed', { serial, atIso: standing.at }));
+    case 'scrapped':
+      return refuse(say('board-scrapped', { serial }));
+    case 'used-as-is':
+      return refuse(say('board-used-as-is', { serial }));
+    case 'returned':
+      return refuse(say('board-returned', { serial }));
+    case 'needs-disposition':
+      return refuse(say('board-needs-disposition', { serial }));
+    case 'waits-for-quality':
+      return refuse(say(`board-${standing.because}`, { serial }));
+    case 'attempts-used':
+      return refuse(say('attempts-used', { serial, most: standing.most }));
+  }
+}

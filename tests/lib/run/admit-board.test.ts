@@ -1,0 +1,73 @@
+import { describe, expect, it } from 'vitest';
+import { admitBoard, type BoardFacts } from '@/lib/run/admit-board';
+import type { BoardStanding } from '@/lib/decision/board-standing';
+import { cb1210 } from '@/db/seed/board-types';
+
+const serial = 'CB1210264800184';
+const facts = (
+  over: Partial<BoardFacts> = {},
+  standing: BoardStanding = { kind: 'may-be-tested', retestOrderId: null },
+) => ({
+  serial,
+  lot: {
+    code: '2648-B',
+    state: 'open' as const,
+    held: false,
+    boardTypeCode: 'CB1210',
+    serialPattern: cb1210.serialPattern,
+  },
+  unit: { lotCode: '2648-B', standing },
+  inTestAt: null,
+  sequence: { released: true },
+  ...over,
+});
+const refusal = (over: Partial<BoardFacts>, standing?: BoardStanding) => {
+  const admission = admitBoard(facts(over, standing));
+  return admission.allowed ? null : admission.refusal;
+};
+const lot = facts().lot;
+
+describe('a board is admitted', () => {
+  it('when its lot is open and its record allows a test, with the retest order that allows it', () => {
+    expect(admitBoard(facts({}, { kind: 'may-be-tested', retestOrderId: 'o1' }))).toEqual({
+      allowed: true,
+      retestOrderId: 'o1',
+    });
+  });
+});
+
+describe('a board is refused, with its reason', () => {
+  it('when it passed, with the time of the pass', () => {
+    expect(refusal({}, { kind: 'passed', at: '2026-12-01T11:38:00Z' })).toEqual({
+      code: 'board-passed',
+      params: { serial, atIso: '2026-12-01T11:38:00Z' },
+    });
+  });
+  it.each<[string, BoardStanding]>([
+    ['board-scrapped', { kind: 'scrapped' }],
+    ['board-used-as-is', { kind: 'used-as-is' }],
+    ['board-returned', { kind: 'returned' }],
+    ['board-needs-disposition', { kind: 'needs-disposition' }],
+    ['board-failing-when-stopped', { kind: 'waits-for-quality', because: 'failing-when-stopped' }],
+    ['board-three-without-verdict', { kind: 'waits-for-quality', because: 'three-without-verdict' }],
+    ['attempts-used', { kind: 'attempts-used', most: 3 }],
+    ['board-in-test', { kind: 'in-test' }],
+  ])('%s', (code, standing) => {
+    expect(refusal({ inTestAt: 'S2' }, standing)).toMatchObject({ code });
+  });
+  it.each<[string, Partial<BoardFacts>]>([
+    ['lot-on-hold', { lot: { ...lot, held: true } }],
+    ['lot-paused', { lot: { ...lot, state: 'paused' } }],
+    ['lot-not-open', { lot: { ...lot, state: 'closed' } }],
+    ['sequence-not-released', { sequence: { released: false } }],
+    ['serial-wrong-form', { serial: 'CB2420264800184' }],
+    ['serial-wrong-form', { serial: `${serial}7` }],
+    ['serial-unknown', { unit: null }],
+    ['serial-of-other-lot', { unit: { lotCode: '2648-A', standing: { kind: 'may-be-tested', retestOrderId: null } } }],
+  ])('%s', (code, over) => {
+    expect(refusal(over)).toMatchObject({ code });
+  });
+  it('for its lot before its own record, since a held lot is not tested whatever the board', () => {
+    expect(refusal({ lot: { ...lot, held: true } }, { kind: 'passed', at: '' })).toMatchObject({ code: 'lot-on-hold' });
+  });
+});
