@@ -9,7 +9,7 @@ const lockAfterMs = 15 * 60_000;
 
 function leave(because: 'ended' | 'locked'): void {
   const here = window.location.pathname + window.location.search;
-  window.location.assign(`/sign-in?because=${because}&next=${encodeURIComponent(here)}`);
+  window.location.replace(`/sign-in?because=${because}&next=${encodeURIComponent(here)}`);
 }
 
 /** Leaves the page when its session has ended, and locks it after 15 minutes without a key or touch. Draws nothing. */

@@ -22,7 +22,7 @@ export function SignInForm({ next }: { next: string }) {
     const result = await signIn('desk', { ...form, redirect: false }).catch(() => undefined);
     if (result?.ok) {
       setLeaving(true);
-      window.location.assign(next);
+      window.location.replace(next);
       return;
     }
     setProblem(signInProblem(result?.error ?? null));

@@ -12,7 +12,7 @@ export function SignOutButton() {
       className="min-h-9 hover:text-accent max-sm:min-h-[46px]"
       onClick={() => {
         setLeaving(true);
-        void signOut({ redirect: false }).finally(() => window.location.assign('/sign-in'));
+        void signOut({ redirect: false }).finally(() => window.location.replace('/sign-in'));
       }}
     >
       {leaving ? 'Signing out' : 'Sign out'}

@@ -1,0 +1,34 @@
+/** Counts with a thin gap between thousands, as the design writes them: 1 360. */
+export const count = (value: number) => value.toLocaleString('en-GB').replaceAll(',', '\u202f');
+
+/** 0.896 is "89.6 %". Null: a dash. */
+export const percent = (share: number | null) => (share === null ? '–' : `${(share * 100).toFixed(1)} %`);
+
+export const volts = (value: number) => value.toFixed(2);
+
+const rounded = (value: number, digits: number) => value.toFixed(digits).replace('-', '\u2212');
+
+/** A measured value in the unit that people say it in; the quantity's name carries the stored unit. */
+export function inSpokenUnit(
+  quantity: string,
+  value: number,
+): { text: string; unit: string; scale: number; digits: number } {
+  const [scale, digits, unit] = quantity.endsWith('-amps')
+    ? [1_000, 2, 'mA']
+    : quantity.endsWith('-seconds')
+      ? [1_000, 1, 'ms']
+      : quantity.endsWith('-milliohms')
+        ? [1, 0, 'milliohms']
+        : quantity === 'trip-spread-volts'
+          ? [1_000, 1, 'mV']
+          : [1, 2, 'V'];
+  return { text: rounded(value * scale, digits), unit, scale, digits };
+}
+
+/** "10.70–10.90", "≤ 0.50", "≥ 10", or "–" without limits; the stored unit turned into the spoken one. */
+export function limitsText(quantity: string, min: number | null, max: number | null): string {
+  const text = (value: number) => inSpokenUnit(quantity, value).text;
+  if (min !== null && max !== null) return `${text(min)}–${text(max)}`;
+  if (max !== null) return `≤ ${text(max)}`;
+  return min === null ? '–' : `≥ ${text(min)}`;
+}
