@@ -1,5 +1,4 @@
-import { type GridPosterior, overshoots } from './grid-posterior';
-import { overshootGrid } from './overshoot-range';
+import type { GridPosterior } from './grid-posterior';
 
 /** A posterior weighted by the assumptions, with what is read off it. Fall coordinates. */
 export interface Belief extends GridPosterior {
@@ -16,9 +15,9 @@ export interface Belief extends GridPosterior {
 }
 
 /** Mass of each cell over all overshoots. */
-export function cellMarginal({ cells, mass }: GridPosterior): Float64Array {
+export function cellMarginal({ cells, mass, overshoots }: GridPosterior): Float64Array {
   const marginal = new Float64Array(cells);
-  for (let k = 0; k < overshoots; k++) for (let i = 0; i < cells; i++) marginal[i]! += mass[k * cells + i]!;
+  for (let k = 0; k < overshoots.length; k++) for (let i = 0; i < cells; i++) marginal[i]! += mass[k * cells + i]!;
   return marginal;
 }
 
@@ -43,10 +42,10 @@ export function massBelow(low: number, cell: number, cumulative: Float64Array, x
  * it is: the assumption is then about to be dropped.
  */
 export function weighBelief(posterior: GridPosterior, weights: Float64Array): Belief {
-  const { low, cell, cells } = posterior;
-  const mass = new Float64Array(cells * overshoots);
+  const { low, cell, cells, overshoots } = posterior;
+  const mass = new Float64Array(posterior.mass.length);
   let total = 0;
-  for (let k = 0; k < overshoots; k++)
+  for (let k = 0; k < overshoots.length; k++)
     for (let i = 0; i < cells; i++) total += mass[k * cells + i] = posterior.mass[k * cells + i]! * weights[i]!;
   if (!(total > 1e-12)) {
     mass.set(posterior.mass);
@@ -55,16 +54,16 @@ export function weighBelief(posterior: GridPosterior, weights: Float64Array): Be
   const scale = 1 / total;
   const marginal = new Float64Array(cells);
   let overshootMean = 0;
-  let overshootFrom = overshoots;
+  let overshootFrom = overshoots.length;
   let overshootTo = -1;
-  for (let k = 0; k < overshoots; k++) {
+  for (let k = 0; k < overshoots.length; k++) {
     let share = 0;
     for (let i = 0; i < cells; i++) {
       const m = (mass[k * cells + i]! *= scale);
       marginal[i]! += m;
       share += m;
     }
-    overshootMean += share * overshootGrid[k]!;
+    overshootMean += share * overshoots[k]!;
     if (share > 2e-3) {
       overshootFrom = Math.min(overshootFrom, k);
       overshootTo = k;
@@ -78,6 +77,7 @@ export function weighBelief(posterior: GridPosterior, weights: Float64Array): Be
     low,
     cell,
     cells,
+    overshoots,
     mass,
     marginal,
     cumulative: cumulate(marginal),

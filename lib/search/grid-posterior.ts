@@ -1,5 +1,5 @@
 import { normalCdf } from './normal-distribution';
-import { overshootGrid } from './overshoot-range';
+import type { OvershootPrior } from './overshoot-range';
 
 /**
  * What the outcomes say about one threshold and the overshoot of the moves toward it: probability mass on a grid of
@@ -16,6 +16,8 @@ export interface Window {
 }
 
 export interface GridPosterior extends Window {
+  /** Overshoots weighed, fractions of the step. */
+  overshoots: readonly number[];
   /** Mass of cell i with overshoot k at [k * cells + i]; sums to 1. */
   mass: Float64Array;
 }
@@ -34,13 +36,11 @@ export const lapseRate = 0.005;
 /** Spread of the lowest point for the same step, as a fraction of the step. */
 const stepScatter = 0.002;
 
-export const overshoots = overshootGrid.length;
-
-export function flatPosterior(window: Window, overshootWeights: readonly number[]): GridPosterior {
-  const mass = new Float64Array(window.cells * overshoots);
-  for (let k = 0; k < overshoots; k++)
-    mass.fill(overshootWeights[k]! / window.cells, k * window.cells, (k + 1) * window.cells);
-  return { ...window, mass };
+export function flatPosterior(window: Window, overshoot: OvershootPrior): GridPosterior {
+  const { cells } = window;
+  const mass = new Float64Array(cells * overshoot.values.length);
+  overshoot.weights.forEach((weight, k) => mass.fill(weight / cells, k * cells, (k + 1) * cells));
+  return { ...window, overshoots: overshoot.values, mass };
 }
 
 /** Standard deviation of the answer's edge: comparator noise, step scatter, and the width of a cell. */
@@ -50,13 +50,13 @@ export function edgeSd(noise: number, step: number, cell: number, extraVariance:
 
 /** Multiplies the probe's likelihood in and normalises, in place. */
 function absorbInPlace(posterior: GridPosterior, probe: Probe, noise: number): void {
-  const { low, cell, cells, mass } = posterior;
+  const { low, cell, cells, overshoots, mass } = posterior;
   const toward = Math.max(0, probe.from - probe.to);
   const sd = edgeSd(noise, Math.abs(probe.from - probe.to), cell, probe.extraVariance);
   const dt = cell / sd;
   let total = 0;
-  for (let k = 0; k < overshoots; k++) {
-    const lowest = probe.to - overshootGrid[k]! * toward;
+  for (let k = 0; k < overshoots.length; k++) {
+    const lowest = probe.to - overshoots[k]! * toward;
     let t = (low + 0.5 * cell - lowest) / sd;
     for (let i = k * cells, end = i + cells; i < end; i++, t += dt) {
       const flip = lapseRate + (1 - 2 * lapseRate) * normalCdf(t);
@@ -78,9 +78,9 @@ export function rebuildPosterior(
   window: Window,
   history: readonly Probe[],
   noise: number,
-  overshootWeights: readonly number[],
+  overshoot: OvershootPrior,
 ): GridPosterior {
-  const posterior = flatPosterior(window, overshootWeights);
+  const posterior = flatPosterior(window, overshoot);
   for (const probe of history) absorbInPlace(posterior, probe, noise);
   return posterior;
 }

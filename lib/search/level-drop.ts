@@ -1,6 +1,7 @@
 import { type Level, type Pair, levelEvidence } from './assumptions';
 import type { Belief } from './belief';
 import { type GridPosterior, flatPosterior } from './grid-posterior';
+import type { OvershootPrior } from './overshoot-range';
 import type { SearchSettings } from './types';
 
 /** Evidence below which a level is given up. */
@@ -15,7 +16,7 @@ export function allowedLevel(
   level: Level,
   wide: Pair<GridPosterior>,
   beliefs: Pair<Belief>,
-  overshootWeights: readonly number[],
+  overshoot: OvershootPrior,
 ): Level {
   if (level === 2) return 2;
   const noise = settings.noiseVolts;
@@ -41,8 +42,8 @@ export function allowedLevel(
     if (atEdge) return 1;
   }
   const flat = {
-    trip: flatPosterior(wide.trip, overshootWeights),
-    release: flatPosterior(wide.release, overshootWeights),
+    trip: flatPosterior(wide.trip, overshoot),
+    release: flatPosterior(wide.release, overshoot),
   };
   if (levelEvidence(settings, level, wide, flat) < leastEvidence) return level === 0 ? 1 : 2;
   return level;

@@ -1,7 +1,6 @@
 import { type Belief, massBelow } from './belief';
 import { edgeSd, lapseRate } from './grid-posterior';
 import { binaryEntropy, normalCdf } from './normal-distribution';
-import { overshootGrid } from './overshoot-range';
 
 /** What a move is expected to bring. Information in nats. */
 export interface MoveValue {
@@ -18,11 +17,11 @@ const saturated = 3.2;
  * Only cells near the edge are visited; the others answer for certain but for lapses.
  */
 export function valueMove(belief: Belief, from: number, to: number, noise: number, value: MoveValue): void {
-  const { low, cell, cells, mass, marginal, cumulative } = belief;
+  const { low, cell, cells, overshoots, mass, marginal, cumulative } = belief;
   const toward = Math.max(0, from - to);
   const sd = edgeSd(noise, Math.abs(from - to), cell, 0);
-  const deepest = to - overshootGrid[belief.overshootTo]! * toward;
-  const shallowest = to - overshootGrid[belief.overshootFrom]! * toward;
+  const deepest = to - overshoots[belief.overshootTo]! * toward;
+  const shallowest = to - overshoots[belief.overshootFrom]! * toward;
   const firstPosition = (deepest - saturated * sd - low) / cell - 0.5;
   const lastPosition = (shallowest + saturated * sd - low) / cell - 0.5;
   const first = Math.min(cells, Math.max(0, Math.ceil(firstPosition)));
@@ -45,7 +44,7 @@ export function valueMove(belief: Belief, from: number, to: number, noise: numbe
   } else {
     flipOfCell.fill(0, first, last + 1);
     for (let k = belief.overshootFrom; k <= belief.overshootTo; k++) {
-      let t = (low + (first + 0.5) * cell - to + overshootGrid[k]! * toward) / sd;
+      let t = (low + (first + 0.5) * cell - to + overshoots[k]! * toward) / sd;
       const offset = k * cells;
       for (let i = first; i <= last; i++, t += dt)
         flipOfCell[i]! += mass[offset + i]! * (lapseRate + (1 - 2 * lapseRate) * normalCdf(t));

@@ -38,7 +38,7 @@ const pointOf = (belief: Belief, sign: number): PointEstimate => ({
 
 /** Completes a state: windows that suit the beliefs, assumptions the outcomes allow, estimates and the next command. */
 function settle(state: SearchState, startOver: Pair<boolean>): SearchState {
-  const { settings, overshootWeights } = state;
+  const { settings, overshoot } = state;
   const noise = settings.noiseVolts;
   let { sides, assumptions } = state;
   let lost = startOver;
@@ -52,7 +52,7 @@ function settle(state: SearchState, startOver: Pair<boolean>): SearchState {
         if (lost[name]) {
           const window = windowAround(wide[name], ranges[name], noise);
           const { history } = sides[name];
-          sides[name] = { ...sides[name], fine: rebuildPosterior(window, history, noise, overshootWeights) };
+          sides[name] = { ...sides[name], fine: rebuildPosterior(window, history, noise, overshoot) };
         }
     }
     beliefs = weighSides(settings, assumptions, sides, 'fine');
@@ -64,14 +64,14 @@ function settle(state: SearchState, startOver: Pair<boolean>): SearchState {
         const { history } = sides[name];
         sides = {
           ...sides,
-          [name]: { ...sides[name], fine: rebuildPosterior(window, history, noise, overshootWeights) },
+          [name]: { ...sides[name], fine: rebuildPosterior(window, history, noise, overshoot) },
         };
         changed = true;
       }
       if (!changed) break;
       beliefs = weighSides(settings, assumptions, sides, 'fine');
     }
-    const allowed = allowedLevel(settings, assumptions, windowsOf(sides, 'wide'), beliefs, overshootWeights);
+    const allowed = allowedLevel(settings, assumptions, windowsOf(sides, 'wide'), beliefs, overshoot);
     if (allowed === assumptions) break;
     assumptions = allowed;
     lost = { trip: true, release: true };
@@ -90,12 +90,12 @@ function settle(state: SearchState, startOver: Pair<boolean>): SearchState {
  * when there is none; `start.output` the output's state there.
  */
 export function beginSearch(settings: SearchSettings, start: { volts: number; output: OutputState }): SearchState {
-  const overshootWeights = overshootPrior(settings.overshoot);
+  const overshoot = overshootPrior(settings.overshoot);
   const wide = wideWindow(settings);
   const ranges = levelRanges(settings, 0);
   const side = (name: 'trip' | 'release'): Side => ({
-    wide: flatPosterior(wide[name], overshootWeights),
-    fine: flatPosterior(windowOver(ranges[name].low, ranges[name].high, settings.noiseVolts), overshootWeights),
+    wide: flatPosterior(wide[name], overshoot),
+    fine: flatPosterior(windowOver(ranges[name].low, ranges[name].high, settings.noiseVolts), overshoot),
     history: [],
   });
   const nowhere = { volts: Number.NaN, standardUncertaintyVolts: Infinity };
@@ -106,7 +106,7 @@ export function beginSearch(settings: SearchSettings, start: { volts: number; ou
     output: start.output,
     sides: { trip: side('trip'), release: side('release') },
     assumptions: 0,
-    overshootWeights,
+    overshoot,
     counts: { settles: 0, waypoints: 0, endCheckSettles: 0 },
     settlesAtTop: 0,
     settlesAtBottom: 0,

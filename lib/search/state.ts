@@ -1,6 +1,7 @@
 import type { Level, Pair } from './assumptions';
 import type { GridPosterior, Probe } from './grid-posterior';
 import type { EndCheck } from './end-check';
+import type { OvershootPrior } from './overshoot-range';
 import type { SupplyModel } from './supply-level';
 import type { OutputState, PointEstimate, SearchCommand, SearchCounts, SearchSettings } from './types';
 
@@ -20,8 +21,8 @@ export interface SearchState {
   readonly output: OutputState;
   readonly sides: Pair<Side>;
   readonly assumptions: Level;
-  /** Prior weight of each overshoot of the grid. */
-  readonly overshootWeights: readonly number[];
+  /** What was believed of the overshoot before any outcome. */
+  readonly overshoot: OvershootPrior;
   readonly counts: SearchCounts;
   /** Settles at the highest level allowed with the output off, and at the lowest with it on. */
   readonly settlesAtTop: number;
