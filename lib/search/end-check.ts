@@ -34,10 +34,12 @@ export function planCheck(
   mean: number,
   guard: number,
 ): { move: Move; check: EndCheck } {
-  if (check.remaining[armed] === 'crossing') {
+  const stage = check.remaining[armed];
+  if (stage !== 'landing') {
+    // A point already shown is only crossed again, to arm the other: the search had gone on in between.
     return {
       move: { to: mean - guard, dwell: 'settle' },
-      check: { ...check, expected: { flip: true, completes: true } },
+      check: { ...check, expected: { flip: true, completes: stage === 'crossing' } },
     };
   }
   const landing = mean + guard;
