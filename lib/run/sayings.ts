@@ -10,7 +10,7 @@ export const runSayings = {
   'run.find-points': [],
   'run.find-again': [],
   'run.looking-closer': [],
-  'run.verify': [],
+  'run.verify': ['repeat', 'repeats'],
   'run.output-levels': [],
   'run.quiescent-current': [],
   'run.ride-through': [],

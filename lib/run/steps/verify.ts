@@ -5,7 +5,7 @@ import { noTravel, type Points } from '../facts';
 import { causeOfVerified } from '../likely-cause';
 import { measuring, stay, type StepContext, type StepMachine, type StepTurn } from '../machine';
 import { judged } from '../measured';
-import { advanceLocatePoints, beginLocatePoints, type LocatePoints } from '../procedures/locate-points';
+import { advanceLocatePoints, beginLocatePoints, settlesSoFar, type LocatePoints } from '../procedures/locate-points';
 import type { Measurement } from '../types';
 import { verifiedMeasurements } from './point-measurements';
 import { findStep } from './window';
@@ -29,7 +29,10 @@ export const verify: StepMachine<VerifyStep, VerifyMachine> = {
     return done.length < step.repeats ? repeat(step, context, done) : conclude(done, step, context);
   },
 
-  view: (machine, step) => measuring({ code: 'run.verify' }, machine.done.length, step.repeats),
+  view({ done, locate }, { repeats }) {
+    const settles = done.reduce((sum, points) => sum + points.settles, settlesSoFar(locate) ?? 0);
+    return measuring({ code: 'run.verify', params: { repeat: done.length + 1, repeats } }, settles);
+  },
 };
 
 function repeat(step: VerifyStep, context: StepContext, done: Points[]): StepTurn<VerifyMachine> {
