@@ -73,6 +73,14 @@ export function raisingTurnsTo(estimate: BoardEstimate, settings: TrimSettings, 
   return ((estimate.mean[0]! - wanted) * settings.trimmer.turns) / Math.exp(estimate.mean[3]!);
 }
 
+/** The estimate with the screw where the board trips at `tripVolts`, for a trip point followed live. */
+export function standingAt(estimate: BoardEstimate, settings: TrimSettings, tripVolts: number): BoardEstimate {
+  return {
+    ...estimate,
+    mean: [inside(wiperFor(designOf(estimate.mean, settings), tripVolts)), ...estimate.mean.slice(1)],
+  };
+}
+
 /** Turns left before the end stop, raising or lowering the trip point, as estimated. */
 export function turnsToEnd(estimate: BoardEstimate, settings: TrimSettings, raising: boolean): number {
   const left = raising ? estimate.mean[0]! : 1 - estimate.mean[0]!;

@@ -19,6 +19,7 @@ export function prompt(state: TrimState, stage: TrimState['stage'], advice: Advi
     stage,
     advice,
     tripIsStale: true,
+    lastRaised: advice.raises,
     prompts: state.prompts + 1,
     turnsAdvised: state.turnsAdvised + advice.turns,
   };

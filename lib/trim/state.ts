@@ -2,7 +2,10 @@ import type { SearchPrior } from '../search/types';
 import type { Advice } from './advice';
 import { estimateBoard, type BoardEstimate } from './board-estimate';
 import { paceOf, type Pace } from './pace';
+import type { FollowedPhase } from './followed';
 import type { BeepPhase } from './two-beeps';
+import type { WaitedPhase } from './waited';
+import type { ProbedPhase } from './wiper-probe';
 import type { FoundPoints, TrimCommand, TrimFinding, TrimOutcome, TrimSettings, TrimView } from './types';
 
 export interface TripBounds {
@@ -21,7 +24,7 @@ export interface TrimState {
   settings: TrimSettings;
   pace: Pace;
   estimate: BoardEstimate;
-  phase: { kind: 'start' } | { kind: 'over' } | BeepPhase;
+  phase: { kind: 'start' } | { kind: 'over' } | BeepPhase | FollowedPhase | WaitedPhase | ProbedPhase;
   command: TrimCommand;
   atMs: number;
   stage: TrimView['stage'];
@@ -44,6 +47,8 @@ export interface TrimState {
   /** Times the operator was asked to turn; bounded, so that prompting ends. */
   prompts: number;
   turnsAdvised: number;
+  /** Whether the last prompt was to raise the trip point; null before the first. */
+  lastRaised: boolean | null;
   /** Turned the wrong way since the trip point last moved as asked. */
   wrongWays: number;
   /** The screw works against the type's direction. */
@@ -75,6 +80,7 @@ export function startState(settings: TrimSettings, found: FoundPoints, atMs: num
     rounds: 0,
     prompts: 0,
     turnsAdvised: 0,
+    lastRaised: null,
     wrongWays: 0,
     reversed: false,
     searchRepeated: false,

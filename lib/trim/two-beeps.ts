@@ -5,9 +5,9 @@ import { armPath, releaseFor, waitingOutput, type BeepWatch } from './beep-watch
 import { raisingTurnsTo, tripAfter } from './board-estimate';
 import { reactionSeconds } from './pace';
 import { failNoEffect, foundMovement, foundNoEffect, foundWrongWay, noEffectAnswerMs, prompt } from './prompts';
-import { finishFailed, finishTrimmed, nearTarget, provedBy, type TrimState } from './state';
+import { finishFailed, nearTarget, provedBy, type TrimState } from './state';
 import type { TrimObservation } from './types';
-import { askVerify, isOnTarget, judgeVerify, relearn, withResult } from './verify';
+import { askVerify, judgeVerify, relearn, withResult } from './verify';
 
 /**
  * Two beeps: the supply waits short of the target and the operator turns until the board itself answers, first briskly,
@@ -32,7 +32,7 @@ const silenceMs = 10_000;
 const turnBackVolts = 0.03;
 
 export function beginTwoBeeps(state: TrimState): TrimState {
-  return isOnTarget(state) ? finishTrimmed(state) : chooseBeep(state, turnBackVolts);
+  return chooseBeep(state, turnBackVolts);
 }
 
 function chooseBeep(state: TrimState, shortVolts: number): TrimState {

@@ -1,0 +1,135 @@
+import { adviseTo, type Advice } from './advice';
+import { standingAt } from './board-estimate';
+import { failNoEffect, foundMovement, foundNoEffect, foundWrongWay, noEffectAnswerMs } from './prompts';
+import type { TrimState } from './state';
+
+/** Follows one prompt by a live trip point: aim, findings, and whether the hand has come to rest. */
+export interface LiveGuide {
+  /** A point above the target is first brought below it, so that the last turn always rises (backlash). */
+  aim: 'below' | 'target';
+  /** Trip point when the prompt was given or last answered, and when; movement is told from it. */
+  fromVolts: number;
+  fromMs: number;
+  promptedAtMs: number;
+  moved: boolean;
+  recent: { atMs: number; volts: number }[];
+  /** Further wrong turning is only told again once the operator had time to take the first finding in. */
+  wrongToldAtMs: number | null;
+  noEffectAtMs: number | null;
+  screwFound: boolean;
+}
+
+/** Tool on the screw already, or still to be fetched. */
+const noEffectAfterMs = 6000;
+const noEffectWithFetchAfterMs = 12_000;
+const wrongWayPauseMs = 4000;
+/** Rest that counts as stopped: on target at once, elsewhere longer than a regrip or a look around. */
+const restOnTargetMs = 300;
+const restElsewhereMs = 2500;
+const restBelowMs = 8000;
+const leastReadings = 5;
+/** A point that never rests is measured all the same. */
+const longestPromptMs = 120_000;
+
+export function beginGuide(state: TrimState, volts: number): LiveGuide {
+  return {
+    aim: volts > state.settings.targetVolts ? 'below' : 'target',
+    fromVolts: volts,
+    fromMs: state.atMs,
+    promptedAtMs: state.atMs,
+    moved: false,
+    recent: [],
+    wrongToldAtMs: null,
+    noEffectAtMs: null,
+    screwFound: false,
+  };
+}
+
+/** How far below the target a falling point is brought: past the backlash, and enough to come up evenly. */
+function aimVolts({ settings, pace }: TrimState, aim: LiveGuide['aim']): number {
+  if (aim === 'target') return settings.targetVolts;
+  const takeUp = pace.voltsPerTurn * settings.trimmer.backlashTurns;
+  return settings.targetVolts - Math.min(0.15, Math.max(2 * settings.toleranceVolts, 1.5 * takeUp));
+}
+
+export function adviseLive(state: TrimState, guide: LiveGuide, volts: number): Advice {
+  const estimate = standingAt(state.estimate, state.settings, volts);
+  return adviseTo({ ...state, estimate }, aimVolts(state, guide.aim));
+}
+
+export interface Guided {
+  state: TrimState;
+  guide: LiveGuide;
+  stopped: boolean;
+}
+
+/** Takes in a live trip point; `quiet` when its source sees no movement. May end the trim. */
+export function guide(state: TrimState, before: LiveGuide, volts: number, quiet: boolean): Guided {
+  const recent = [...before.recent.filter((r) => state.atMs - r.atMs <= restBelowMs), { atMs: state.atMs, volts }];
+  const told = tellMovement({ ...state, liveTripVolts: volts }, { ...before, recent }, volts);
+  if (told.state.phase.kind === 'over') return { ...told, stopped: false };
+  const turned = turnAim(told.state, told.guide, volts);
+  const advice = adviseLive(told.state, turned, volts);
+  return {
+    state: { ...told.state, advice },
+    guide: turned,
+    stopped: (quiet && hasStopped(told.state, turned, volts)) || state.atMs - turned.promptedAtMs > longestPromptMs,
+  };
+}
+
+function turnAim(state: TrimState, guide: LiveGuide, volts: number): LiveGuide {
+  const { targetVolts, toleranceVolts } = state.settings;
+  const below = aimVolts(state, 'below');
+  const turns =
+    guide.aim === 'target' ? volts > targetVolts + toleranceVolts : volts < below + 0.3 * (targetVolts - below);
+  if (!turns) return guide;
+  return { ...guide, aim: guide.aim === 'target' ? 'below' : 'target', fromVolts: volts, fromMs: state.atMs };
+}
+
+/** Movement as asked, the wrong way, or none for long. */
+function tellMovement(state: TrimState, guide: LiveGuide, volts: number): { state: TrimState; guide: LiveGuide } {
+  const { pace, settings, atMs } = state;
+  const asked = guide.aim === 'below' ? -1 : 1;
+  const moved = (volts - guide.fromVolts) * asked;
+  const answered = { ...guide, fromVolts: volts, fromMs: atMs, moved: true, noEffectAtMs: null };
+  if (moved >= pace.peekVolts) return { state: foundMovement(state), guide: { ...answered, wrongToldAtMs: null } };
+  if (guide.wrongToldAtMs !== null && atMs - guide.wrongToldAtMs < wrongWayPauseMs) {
+    // Overshoots until the finding is taken in; told from where it turns back.
+    return { state, guide: moved < 0 ? { ...guide, fromVolts: volts, fromMs: atMs } : guide };
+  }
+  if (-moved >= pace.peekVolts && Math.abs(volts - settings.targetVolts) > settings.toleranceVolts) {
+    const wrong = foundWrongWay(state, Math.abs(volts - state.trip.volts));
+    return { state: wrong, guide: { ...answered, wrongToldAtMs: atMs } };
+  }
+  if (guide.noEffectAtMs !== null) {
+    return { state: atMs - guide.noEffectAtMs > noEffectAnswerMs ? failNoEffect(state) : state, guide };
+  }
+  const waited = atMs - guide.fromMs;
+  const patience = state.prompts <= 1 || guide.screwFound ? noEffectWithFetchAfterMs : noEffectAfterMs;
+  if (guide.moved || waited < patience || Math.abs(moved) > pace.peekVolts / 3) return { state, guide };
+  if (guide.screwFound) return { state: failNoEffect(state), guide };
+  return { state: foundNoEffect(state, Math.round(waited / 1000)), guide: { ...guide, noEffectAtMs: atMs } };
+}
+
+/** Two agreeing readings at least: all of the last while within a few millivolts, after a movement or on target. */
+function hasStopped(state: TrimState, guide: LiveGuide, volts: number): boolean {
+  const { targetVolts, toleranceVolts } = state.settings;
+  const onTarget = Math.abs(volts - targetVolts) <= toleranceVolts;
+  if (!onTarget && !guide.moved) return false;
+  const restMs = onTarget ? restOnTargetMs : guide.aim === 'target' ? restElsewhereMs : restBelowMs;
+  const since = state.atMs - restMs;
+  const inRest = guide.recent.filter((reading) => reading.atMs >= since);
+  const oldest = guide.recent[0]!.atMs;
+  if (oldest > since || inRest.length < leastReadings) return false;
+  const span = Math.max(...inRest.map((r) => r.volts)) - Math.min(...inRest.map((r) => r.volts));
+  return span < Math.max(0.003, Math.min(0.006, 0.4 * toleranceVolts));
+}
+
+/** The operator found the screw after no effect was told. */
+export function foundScrew(state: TrimState, guide: LiveGuide): { state: TrimState; guide: LiveGuide } {
+  if (guide.noEffectAtMs === null) return { state, guide };
+  return {
+    state: { ...state, finding: null, findingVolts: null },
+    guide: { ...guide, noEffectAtMs: null, screwFound: true, fromMs: state.atMs },
+  };
+}
