@@ -34,6 +34,7 @@ const environmentSchema = z
     databaseUrl: e.DATABASE_URL,
     databaseOwnerUrl: e.DATABASE_OWNER_URL ?? e.DATABASE_URL,
     host: e.HOST,
+    loopback: loopbackHosts.includes(e.HOST),
     port: e.PORT,
     publicUrl: (
       e.PUBLIC_URL ??
@@ -50,7 +51,7 @@ const environmentSchema = z
     dataFolder: e.SILLWRIGHT_DATA,
   }))
   .superRefine((e, context) => {
-    if (loopbackHosts.includes(e.host)) return;
+    if (e.loopback) return;
     if (!e.publicUrl.startsWith('https://')) {
       context.addIssue({
         code: 'custom',
