@@ -25,7 +25,17 @@ export function hysteresisRange(settings: SearchSettings, level: Level): { min: 
   return { min: -3 * settings.noiseVolts - 2e-3, max: Infinity };
 }
 
-const bell = (z: number, cut: number) => (Math.abs(z) > cut ? 0 : Math.exp(-0.5 * z * z) + priorFloor);
+const bellPerSd = 64;
+const bellTable = Float64Array.from({ length: hysteresisCut * bellPerSd + 2 }, (_, i) => {
+  const z = i / bellPerSd;
+  return Math.exp(-0.5 * z * z) + priorFloor;
+});
+
+/** Normal shape with peak 1 on a floor, 0 beyond `cut` standard deviations; from a table, to a hundredth. */
+function bell(z: number, cut: number): number {
+  const size = Math.abs(z);
+  return size > cut ? 0 : bellTable[(size * bellPerSd + 0.5) | 0]!;
+}
 
 const centre = (grid: Window, i: number) => grid.low + (i + 0.5) * grid.cell;
 
@@ -47,9 +57,30 @@ function tripWeights(settings: SearchSettings, level: Level, grid: Window): Floa
   return weights;
 }
 
-function hysteresisBell(prior: SearchPrior, a: Window, b: Window): (hysteresis: number) => number {
-  const scale = 1 / Math.hypot(prior.hysteresisSdVolts, 0.3 * a.cell, 0.3 * b.cell);
-  return (hysteresis) => bell((hysteresis - prior.hysteresisMeanVolts) * scale, hysteresisCut);
+/** Adds the lot's distribution of hysteresis to both sets of weights; only cells within its cut of each other meet. */
+function weighByHysteresis(
+  prior: SearchPrior,
+  grids: Pair<Window>,
+  own: Pair<Float64Array>,
+  weights: Pair<Float64Array>,
+): void {
+  const sd = Math.hypot(prior.hysteresisSdVolts, 0.3 * grids.trip.cell, 0.3 * grids.release.cell);
+  const step = grids.release.cell / sd;
+  for (let i = 0; i < weights.trip.length; i++) {
+    if (weights.trip[i]! === 0) continue;
+    // In fall coordinates the release cell at this trip's expected release lies at position `middle`.
+    const expected = -(centre(grids.trip, i) + prior.hysteresisMeanVolts);
+    const middle = (expected - grids.release.low) / grids.release.cell - 0.5;
+    const first = Math.max(0, Math.ceil(middle - hysteresisCut / step));
+    const last = Math.min(weights.release.length - 1, Math.floor(middle + hysteresisCut / step));
+    let sum = 0;
+    for (let j = first; j <= last; j++) {
+      const w = bell((j - middle) * step, hysteresisCut);
+      sum += own.release[j]! * w;
+      weights.release[j]! += own.trip[i]! * w;
+    }
+    weights.trip[i]! *= sum;
+  }
 }
 
 /**
@@ -64,19 +95,7 @@ export function coupledWeights(settings: SearchSettings, level: Level, pair: Pai
   const ownRelease = cellMarginal(pair.release);
 
   if (level === 0 && settings.prior) {
-    const weigh = hysteresisBell(settings.prior, pair.trip, pair.release);
-    for (let i = 0; i < trip.length; i++) {
-      let sum = 0;
-      const tripVolts = centre(pair.trip, i);
-      if (trip[i]! > 0)
-        for (let j = 0; j < release.length; j++) {
-          if (ownRelease[j]! < 1e-12 && ownTrip[i]! < 1e-12) continue;
-          const w = weigh(-centre(pair.release, j) - tripVolts);
-          sum += ownRelease[j]! * w;
-          release[j]! += ownTrip[i]! * w;
-        }
-      trip[i]! *= sum;
-    }
+    weighByHysteresis(settings.prior, pair, { trip: ownTrip, release: ownRelease }, { trip, release });
     return { trip, release };
   }
 
@@ -96,22 +115,8 @@ export function coupledWeights(settings: SearchSettings, level: Level, pair: Pai
   return { trip, release };
 }
 
-/**
- * How well the level agrees with the outcomes, from posteriors on wide grids. Without a lot prior the share of the mass
- * that the level allows; with one, four tenths of the Bayes factor of the prior against no prior.
- */
-export function levelEvidence(
-  settings: SearchSettings,
-  level: Level,
-  pair: Pair<GridPosterior>,
-  flat: Pair<GridPosterior>,
-): number {
-  if (level === 2) return 1;
-  const mass = (of: Pair<GridPosterior>) => {
-    const weights = coupledWeights(settings, level, of);
-    const marginal = cellMarginal(of.trip);
-    return marginal.reduce((sum, m, i) => sum + m * weights.trip[i]!, 0);
-  };
-  if (level === 0 && settings.prior) return (0.4 * mass(pair)) / mass(flat);
-  return mass(pair);
+/** Mass that the level's assumptions give to a pair of posteriors. */
+export function assumedMass(settings: SearchSettings, level: Level, pair: Pair<GridPosterior>): number {
+  const weights = coupledWeights(settings, level, pair).trip;
+  return cellMarginal(pair.trip).reduce((sum, mass, i) => sum + mass * weights[i]!, 0);
 }

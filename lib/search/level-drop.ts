@@ -1,11 +1,19 @@
-import { type Level, type Pair, levelEvidence } from './assumptions';
+import { type Level, type Pair, assumedMass } from './assumptions';
 import type { Belief } from './belief';
-import { type GridPosterior, flatPosterior } from './grid-posterior';
-import type { OvershootPrior } from './overshoot-range';
+import type { GridPosterior } from './grid-posterior';
 import type { SearchSettings } from './types';
 
 /** Evidence below which a level is given up. */
 const leastEvidence = 0.02;
+
+/**
+ * Evidence for a level from posteriors on wide grids: without a lot prior the share of the mass that the level allows;
+ * with one, four tenths of the Bayes factor of the prior against no assumption. `unseen` is the mass before any outcome.
+ */
+function levelEvidence(settings: SearchSettings, level: Level, wide: Pair<GridPosterior>, unseen: number): number {
+  const mass = assumedMass(settings, level, wide);
+  return level === 0 && settings.prior ? (0.4 * mass) / unseen : mass;
+}
 
 /**
  * The level of assumptions that the outcomes still allow: lower when they carry too little evidence, or when an
@@ -16,7 +24,7 @@ export function allowedLevel(
   level: Level,
   wide: Pair<GridPosterior>,
   beliefs: Pair<Belief>,
-  overshoot: OvershootPrior,
+  unseen: number,
 ): Level {
   if (level === 2) return 2;
   const noise = settings.noiseVolts;
@@ -41,10 +49,6 @@ export function allowedLevel(
       : trip < settings.tripMinVolts + edge || trip > settings.tripMaxVolts - edge;
     if (atEdge) return 1;
   }
-  const flat = {
-    trip: flatPosterior(wide.trip, overshoot),
-    release: flatPosterior(wide.release, overshoot),
-  };
-  if (levelEvidence(settings, level, wide, flat) < leastEvidence) return level === 0 ? 1 : 2;
+  if (levelEvidence(settings, level, wide, unseen) < leastEvidence) return level === 0 ? 1 : 2;
   return level;
 }

@@ -1,4 +1,4 @@
-import { type Level, type Pair, coupledWeights } from './assumptions';
+import { type Level, type Pair, assumedMass, coupledWeights } from './assumptions';
 import { type Belief, weighBelief } from './belief';
 import { atBottom, atTop, decide } from './decide';
 import { freshCheck, observeCheck } from './end-check';
@@ -71,7 +71,7 @@ function settle(state: SearchState, startOver: Pair<boolean>): SearchState {
       if (!changed) break;
       beliefs = weighSides(settings, assumptions, sides, 'fine');
     }
-    const allowed = allowedLevel(settings, assumptions, windowsOf(sides, 'wide'), beliefs, overshoot);
+    const allowed = allowedLevel(settings, assumptions, windowsOf(sides, 'wide'), beliefs, state.unseenMass);
     if (allowed === assumptions) break;
     assumptions = allowed;
     lost = { trip: true, release: true };
@@ -98,15 +98,17 @@ export function beginSearch(settings: SearchSettings, start: { volts: number; ou
     fine: flatPosterior(windowOver(ranges[name].low, ranges[name].high, settings.noiseVolts), overshoot),
     history: [],
   });
+  const sides = { trip: side('trip'), release: side('release') };
   const nowhere = { volts: Number.NaN, standardUncertaintyVolts: Infinity };
   const state: SearchState = {
     settings,
     supply: beginSupplyModel(settings.supplyMinVolts, settings.supplyMaxVolts),
     level: start.volts,
     output: start.output,
-    sides: { trip: side('trip'), release: side('release') },
+    sides,
     assumptions: 0,
     overshoot,
+    unseenMass: assumedMass(settings, 0, windowsOf(sides, 'wide')),
     counts: { settles: 0, waypoints: 0, endCheckSettles: 0 },
     settlesAtTop: 0,
     settlesAtBottom: 0,

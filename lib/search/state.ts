@@ -23,6 +23,8 @@ export interface SearchState {
   readonly assumptions: Level;
   /** What was believed of the overshoot before any outcome. */
   readonly overshoot: OvershootPrior;
+  /** Mass that the first level's assumptions held before any outcome. */
+  readonly unseenMass: number;
   readonly counts: SearchCounts;
   /** Settles at the highest level allowed with the output off, and at the lowest with it on. */
   readonly settlesAtTop: number;
