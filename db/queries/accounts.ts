@@ -1,6 +1,8 @@
-import { and, eq, isNull, sql } from 'drizzle-orm';
+import { and, asc, eq, isNull, max, sql } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import { accounts } from '@/db/schema/accounts';
+import { sessions } from '@/db/schema/sessions';
+import { trainings } from '@/db/schema/trainings';
 
 export type Account = typeof accounts.$inferSelect;
 export type NewAccount = typeof accounts.$inferInsert;
@@ -32,7 +34,69 @@ export async function updateAccount(tx: Transaction, id: string, set: Partial<Ne
   return row ?? null;
 }
 
-/** How many working accounts hold the role of administrator; the last one is not taken away. */
-export async function countAdministrators(tx: Transaction): Promise<number> {
-  return tx.$count(accounts, and(isNull(accounts.disabledAt), sql`'administrator' = any(${accounts.roles})`));
+/**
+ * Ids of the working accounts with the role of administrator, locked until the transaction ends: two administrators cannot
+ * take the role from each other at the same moment.
+ */
+export async function lockAdministrators(tx: Transaction): Promise<string[]> {
+  const rows = await tx
+    .select({ id: accounts.id })
+    .from(accounts)
+    .where(and(isNull(accounts.disabledAt), sql`'administrator' = any(${accounts.roles})`))
+    .for('update');
+  return rows.map((row) => row.id);
+}
+
+/** One account with what the list of people shows beside it. */
+export interface PersonRow extends Pick<
+  Account,
+  'id' | 'name' | 'email' | 'operatorNumber' | 'badgeCode' | 'roles' | 'locale' | 'createdAt' | 'disabledAt'
+> {
+  hasPassword: boolean;
+  hasPin: boolean;
+  /** Null: never signed in. */
+  lastSeenAt: Date | null;
+  /** The first of the board types' trainings to end, each by its latest record. Null: trained for none. */
+  trainedUntil: Date | null;
+}
+
+export async function listPeople(db: Database): Promise<PersonRow[]> {
+  const lastSeen = db
+    .select({ accountId: sessions.accountId, at: max(sessions.lastSeenAt).as('last_seen') })
+    .from(sessions)
+    .groupBy(sessions.accountId)
+    .as('last_seen_of');
+  const latest = db
+    .select({ accountId: trainings.accountId, until: max(trainings.validUntil).as('latest') })
+    .from(trainings)
+    .groupBy(trainings.accountId, trainings.boardTypeId)
+    .as('latest_of');
+  const trained = db
+    .select({
+      accountId: latest.accountId,
+      until: sql`min(${latest.until})`.mapWith(trainings.validUntil).as('trained_until'),
+    })
+    .from(latest)
+    .groupBy(latest.accountId)
+    .as('trained_of');
+  return db
+    .select({
+      id: accounts.id,
+      name: accounts.name,
+      email: accounts.email,
+      operatorNumber: accounts.operatorNumber,
+      badgeCode: accounts.badgeCode,
+      roles: accounts.roles,
+      locale: accounts.locale,
+      createdAt: accounts.createdAt,
+      disabledAt: accounts.disabledAt,
+      hasPassword: sql<boolean>`${accounts.passwordHash} is not null`,
+      hasPin: sql<boolean>`${accounts.pinHash} is not null`,
+      lastSeenAt: lastSeen.at,
+      trainedUntil: trained.until,
+    })
+    .from(accounts)
+    .leftJoin(lastSeen, eq(lastSeen.accountId, accounts.id))
+    .leftJoin(trained, eq(trained.accountId, accounts.id))
+    .orderBy(asc(accounts.name));
 }

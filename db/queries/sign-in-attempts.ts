@@ -1,6 +1,7 @@
 import { and, eq, gt, inArray, isNull, sql } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import { signInAttempts } from '@/db/schema/sign-in-attempts';
+import { stations } from '@/db/schema/stations';
 import { nextTryAtMs, triesWindowMs } from '@/lib/access/sign-in-limits';
 
 /** Whose tries are counted together: an account, or the text given where no account has it, at a station or a desk. */
@@ -56,4 +57,19 @@ export async function clearFailures(db: Database | Transaction, identifier: stri
     .update(signInAttempts)
     .set({ outcome: 'cleared' })
     .where(and(eq(signInAttempts.identifier, identifier), eq(signInAttempts.outcome, 'failed')));
+}
+
+/** Evaluated tries since `since` at any place, for telling who is waiting to try again. */
+export async function listEvaluatedTries(db: Database, since: Date) {
+  return db
+    .select({
+      identifier: signInAttempts.identifier,
+      stationId: signInAttempts.stationId,
+      stationCode: stations.code,
+      at: signInAttempts.at,
+      outcome: signInAttempts.outcome,
+    })
+    .from(signInAttempts)
+    .leftJoin(stations, eq(stations.id, signInAttempts.stationId))
+    .where(and(gt(signInAttempts.at, since), inArray(signInAttempts.outcome, ['succeeded', 'failed'])));
 }
