@@ -1,39 +1,41 @@
 import type { SearchPrior } from './types';
 
-/** Boards that must be known before their lot says anything about the next one. */
-export const leastBoards = 10;
-/** The lot is never believed to be narrower than this: a drifting process must not be hidden by its past. Volts. */
-const leastSdVolts = 0.02;
-/** Boards this many robust deviations off the median say nothing about sound ones. */
-const outlierDeviations = 4;
-/** Median absolute deviation of a normal distribution in standard deviations. */
-const madOfNormal = 0.6745;
+/** Boards of the lot whose points must be known before the lot's distribution is used. */
+export const fewestKnownBoards = 10;
+
+/** The narrowest distributions that were studied (own study, simulation); a lot may well be tighter, the search gains no more. */
+const leastTripSdVolts = 0.03;
+const leastHysteresisSdVolts = 0.02;
+
+export interface FoundPoints {
+  tripVolts: number;
+  hysteresisVolts: number;
+}
 
 /**
- * The lot's own distribution of trip and hysteresis, from the points found on its earlier boards before any trim; null while
- * fewer than ten are known. Defective boards are left out by median and median absolute deviation (Hampel's identifier).
+ * The lot's own distribution from the points found on its earlier boards (before trimming), or null while fewer than
+ * ten are known. Robust, since defective boards are among them: median, and median absolute deviation scaled to a
+ * standard deviation (1.4826, with the small-sample factor n / (n - 0.8) of Croux and Rousseeuw 1992), widened by the
+ * median's own uncertainty. Volts.
  */
-export function lotPrior(found: readonly { tripVolts: number; hysteresisVolts: number }[]): SearchPrior | null {
-  const trip = spreadOf(found.map((board) => board.tripVolts));
-  const hysteresis = spreadOf(found.map((board) => board.hysteresisVolts));
-  if (!trip || !hysteresis) return null;
+export function lotPrior(found: readonly FoundPoints[]): SearchPrior | null {
+  if (found.length < fewestKnownBoards) return null;
+  const trip = spreadOf(found.map((points) => points.tripVolts));
+  const hysteresis = spreadOf(found.map((points) => points.hysteresisVolts));
   return {
-    tripMeanVolts: trip.mean,
-    tripSdVolts: trip.sd,
-    hysteresisMeanVolts: hysteresis.mean,
-    hysteresisSdVolts: hysteresis.sd,
+    tripMeanVolts: trip.middle,
+    tripSdVolts: Math.max(leastTripSdVolts, trip.sd),
+    hysteresisMeanVolts: hysteresis.middle,
+    hysteresisSdVolts: Math.max(leastHysteresisSdVolts, hysteresis.sd),
   };
 }
 
-function spreadOf(values: number[]): { mean: number; sd: number } | null {
-  if (values.length < leastBoards) return null;
+function spreadOf(values: readonly number[]): { middle: number; sd: number } {
   const middle = median(values);
-  const deviation = median(values.map((value) => Math.abs(value - middle))) / madOfNormal;
-  const widest = outlierDeviations * Math.max(deviation, leastSdVolts);
-  const kept = values.filter((value) => Math.abs(value - middle) <= widest);
-  const mean = kept.reduce((sum, value) => sum + value, 0) / kept.length;
-  const squares = kept.reduce((sum, value) => sum + (value - mean) ** 2, 0);
-  return { mean, sd: Math.max(leastSdVolts, Math.sqrt(squares / Math.max(1, kept.length - 1))) };
+  const deviation = median(values.map((value) => Math.abs(value - middle)));
+  const n = values.length;
+  const sd = 1.4826 * deviation * (n / (n - 0.8)) * Math.sqrt(1 + Math.PI / 2 / n);
+  return { middle, sd };
 }
 
 function median(values: readonly number[]): number {
