@@ -43,6 +43,8 @@ interface DataTableProps<Row extends RowData> {
   empty: { title: string; text?: string };
   initialSort?: SortingState;
   pageSize?: number;
+  /** Key of the row that the page shows more of. */
+  chosen?: string | null;
 }
 
 /** A table that sorts by its heads, in the client; rows stack on a phone. */
@@ -54,6 +56,7 @@ export function DataTable<Row extends RowData>({
   empty,
   initialSort = [],
   pageSize = 50,
+  chosen = null,
 }: DataTableProps<Row>) {
   const table = useTable({
     features,
@@ -101,7 +104,7 @@ export function DataTable<Row extends RowData>({
         </thead>
         <tbody>
           {table.getRowModel().rows.map((row) => (
-            <tr key={row.id}>
+            <tr key={row.id} data-chosen={row.id === chosen || undefined}>
               {row.getAllCells().map((cell) => {
                 const { header, meta } = cell.column.columnDef;
                 return (
