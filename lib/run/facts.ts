@@ -7,6 +7,11 @@ export interface Points {
   settles: number;
 }
 
+export interface ReferenceReading {
+  volts: number;
+  supplyVolts: number;
+}
+
 export type SupplyFact =
   | { state: 'off'; volts: number | null; by: 'meter' | 'supply' | null }
   /** `setVolts` as commanded, `volts` as last read. */
@@ -35,7 +40,8 @@ export interface RunFacts {
   supply: SupplyFact;
   output: OutputState | null;
   travel: Travel;
-  referenceVolts: number | null;
+  /** Channel 103, and the board's supply at which it was read. */
+  reference: ReferenceReading | null;
   found: Points | null;
   trimmed: Points | null;
   trimBegan: boolean;
@@ -54,7 +60,7 @@ export const noFacts: RunFacts = {
   supply: { state: 'off', volts: null, by: null },
   output: null,
   travel: noTravel,
-  referenceVolts: null,
+  reference: null,
   found: null,
   trimmed: null,
   trimBegan: false,

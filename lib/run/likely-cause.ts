@@ -1,8 +1,9 @@
 import type { BoardType } from '../contracts/board-type';
 import type { BoardDesign } from '../circuit/board-design';
-import { inferBoard } from '../circuit/inverse';
+import { inferSoftKneeBoard } from '../circuit/inverse';
 import { referenceAt } from '../circuit/soft-knee';
 import type { Thresholds } from '../circuit/thresholds';
+import type { ReferenceReading } from './facts';
 import { e24Near } from './preferred-values';
 import type { LikelyCause, Measurement } from './types';
 
@@ -38,27 +39,32 @@ const openRatio = 30;
 /** Nearer than this to the nominal the resistor fitted is taken to be the right one. An E24 step is 10 %. */
 const resistorTolerance = 0.07;
 
-/** Hysteresis that trimming cannot correct: what the two points say about the feedback resistor. */
+/** Hysteresis that trimming cannot correct: what the two points, and the reference where it was read, say about the feedback resistor. */
 export function causeOfHysteresis(
   points: Thresholds,
-  referenceVolts: number | null,
+  read: ReferenceReading | null,
   design: BoardDesign,
 ): LikelyCause | null {
-  const nominal = referenceAt(design.reference, points.tripVolts);
-  const reference = referenceVolts ?? (nominal.kind === 'found' ? nominal.x : null);
-  if (reference === null) return null;
-  const inferred = inferBoard(design, points, reference);
+  const inferred = inferSoftKneeBoard(withReference(design, read), points);
   if (inferred.kind !== 'found') return null;
   const ratio = inferred.feedbackOhms / design.feedbackOhms;
   if (ratio >= openRatio) return 'feedback-open';
   return Math.abs(ratio - 1) > resistorTolerance ? 'wrong-feedback-resistor' : null;
 }
 
+/** The design with the zener that gives the reference read. */
+function withReference(design: BoardDesign, read: ReferenceReading | null): BoardDesign {
+  const expected = read && referenceAt(design.reference, read.supplyVolts);
+  if (expected?.kind !== 'found') return design;
+  const nominalVolts = design.reference.nominalVolts + read!.volts - expected.x;
+  return { ...design, reference: { ...design.reference, nominalVolts } };
+}
+
 /** A verified value out of limits, seen with the other verified values. */
 export function causeOfVerified(
   failed: Measurement,
   measurements: readonly Measurement[],
-  referenceVolts: number | null,
+  read: ReferenceReading | null,
   { design }: BoardType,
 ): LikelyCause | null {
   if (failed.quantity === 'trip-spread-volts') return 'noisy-wiper-or-contact';
@@ -67,5 +73,5 @@ export function causeOfVerified(
   const tripVolts = valueOf('trip-volts');
   const releaseVolts = valueOf('release-volts');
   if (tripVolts === undefined || releaseVolts === undefined) return null;
-  return causeOfHysteresis({ tripVolts, releaseVolts }, referenceVolts, design);
+  return causeOfHysteresis({ tripVolts, releaseVolts }, read, design);
 }

@@ -44,6 +44,11 @@ function stepLine({ plan, stepIndex, phase }: RunState): RunView['stepGroups'] {
   });
 }
 
+/** The part of the step line that an event now belongs to. */
+export function currentGroup({ stepGroups: line }: RunView): StepGroup {
+  return line.find((each) => each.state === 'current')?.group ?? 'record';
+}
+
 /** Off is said only after the read-back, or while nothing was ever switched on. */
 function supplyView(supply: SupplyFact): SupplyView {
   switch (supply.state) {

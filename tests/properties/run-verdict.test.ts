@@ -250,7 +250,7 @@ describe('the verdict', () => {
         const measurements =
           how === 'missing'
             ? whole.filter((_, i) => i !== at)
-            : whole.map((m, i) => (i === at ? { ...m, passed: how } : m));
+            : whole.map((m, i) => (i === at ? { ...m, passed: how as boolean | null } : m));
         const decision = decideVerdict({ ...evidence, measurements });
         expect(decision).toMatchObject({ kind: how === false ? 'reject' : 'no-verdict' });
       }),

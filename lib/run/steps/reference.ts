@@ -41,7 +41,10 @@ export const reference: StepMachine<ReferenceStep, ReferenceMachine> = {
       },
       context,
     );
-    const learned = { measurements: [measurement], facts: { referenceVolts: event.volts } };
+    const learned = {
+      measurements: [measurement],
+      facts: { reference: { volts: event.volts, supplyVolts: machine.supplyVolts } },
+    };
     if (measurement.passed) return { done: true, ...learned };
     const cause = causeOfReference(event.volts, machine.supplyVolts, boardType.design);
     return { ending: { kind: 'reject', cause, ...reasonFor(measurement) }, ...learned };

@@ -20,6 +20,6 @@ export function refuseUntrimmable(
   if (reach.reason === 'trip-too-low' || reach.reason === 'trip-too-high') {
     return { kind: 'reject', reason: 'trim-cannot-reach', cause: null, measured };
   }
-  const cause = causeOfHysteresis(found, facts.referenceVolts, design);
+  const cause = causeOfHysteresis(found, facts.reference, design);
   return { kind: 'reject', reason: reach.reason, cause, measured };
 }

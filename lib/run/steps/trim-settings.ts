@@ -1,7 +1,7 @@
 import type { TrimSettings } from '../../trim/types';
 import type { StepContext } from '../machine';
 import type { TrimStep } from './trim';
-import { findStep, referenceStep } from './window';
+import { findStep } from './find-step';
 
 export function trimSettings(step: TrimStep, context: StepContext): TrimSettings {
   const { plan, facts } = context;
@@ -20,7 +20,7 @@ export function trimSettings(step: TrimStep, context: StepContext): TrimSettings
     noiseVolts: Math.max(boardType.search.noiseVolts, commissioning.noiseVolts),
     pollMs: plan.pollMs,
     fastLink: plan.fastLink,
-    referenceVolts: facts.referenceVolts,
-    referenceAtVolts: facts.referenceVolts === null ? null : (referenceStep(context)?.atVolts ?? null),
+    referenceVolts: facts.reference?.volts ?? null,
+    referenceAtVolts: facts.reference?.supplyVolts ?? null,
   };
 }

@@ -12,7 +12,7 @@ import { pointMeasurements } from './point-measurements';
 import { refuseUntrimmable } from './trim-reach';
 import { rejectForOutcome } from './trim-outcome';
 import { trimSettings } from './trim-settings';
-import { findStep } from './window';
+import { findStep } from './find-step';
 
 export type TrimStep = Extract<Step, { kind: 'trim' }>;
 

@@ -8,7 +8,7 @@ import { judged } from '../measured';
 import { advanceLocatePoints, beginLocatePoints, settlesSoFar, type LocatePoints } from '../procedures/locate-points';
 import type { Measurement } from '../types';
 import { verifiedMeasurements } from './point-measurements';
-import { findStep } from './window';
+import { findStep } from './find-step';
 
 type VerifyStep = Extract<Step, { kind: 'verify' }>;
 export interface VerifyMachine {
@@ -72,7 +72,7 @@ function conclude(repeats: Points[], step: VerifyStep, context: StepContext): St
   const learned = { measurements, facts: { verified: repeats } };
   const failed = measurements.find((m) => m.passed === false);
   if (!failed) return { done: true, ...learned };
-  const cause = causeOfVerified(failed, measurements, context.facts.referenceVolts, context.plan.boardType);
+  const cause = causeOfVerified(failed, measurements, context.facts.reference, context.plan.boardType);
   return { ending: { kind: 'reject', cause, ...reasonFor(failed) }, ...learned };
 }
 

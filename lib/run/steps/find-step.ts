@@ -17,8 +17,3 @@ export function findStep({ plan }: StepContext): FindStep {
     settleMs: plan.commissioning.settleMs,
   };
 }
-
-export function referenceStep({ plan }: StepContext): Extract<Step, { kind: 'reference' }> | null {
-  const step = plan.sequence.steps.find((s) => s.kind === 'reference');
-  return step?.kind === 'reference' ? step : null;
-}
