@@ -90,6 +90,15 @@ export interface Standing {
   label: BenchView['label'];
 }
 
+/** Who works at a station on what. */
+export interface BenchPlace {
+  accountId: string | null;
+  sessionId: string | null;
+  lotId: string | null;
+  /** Of the board last passed: its label is watched. */
+  serial: string | null;
+}
+
 /** How a run ended, as the bench needs it. */
 export interface RunEnding {
   verdict: Verdict;

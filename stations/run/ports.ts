@@ -1,4 +1,4 @@
-import type { BenchAnswer, BenchAsk, PendingBin, ReferenceCheck, Standing } from '@/lib/bench/types';
+import type { BenchAnswer, BenchAsk, BenchPlace, PendingBin, ReferenceCheck, Standing } from '@/lib/bench/types';
 import type { BoardType } from '@/lib/contracts/board-type';
 import type { CommissioningValues, RunEvent, RunPlan, RunResult } from '@/lib/run/types';
 import type { StepGroup } from '@/lib/sequence/step';
@@ -14,15 +14,6 @@ export interface StationPorts {
   saveCommissioning(values: CommissioningValues, referenceCode: string, accountId: string): Promise<void>;
   /** Begins to keep the events of an opened run. Works while the database is away. */
   logOf(plan: RunPlan): RunLog;
-}
-
-/** Who works at the station on what. */
-export interface BenchPlace {
-  accountId: string | null;
-  sessionId: string | null;
-  lotId: string | null;
-  /** Of the board last passed: its label is watched. */
-  serial: string | null;
 }
 
 /** Keeps a run's events as they happen and stores the run once, exactly once. Neither method fails: what cannot be stored waits. */

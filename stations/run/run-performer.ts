@@ -2,8 +2,7 @@ import type { BenchReading, RunView } from '@/lib/contracts/bench-view';
 import type { PersonsRunEvent } from '@/lib/bench/types';
 import { advanceRun, beginRun, resultOf, type RunState } from '@/lib/run/run';
 import type { RunEffect, RunEvent, RunPlan, RunResult } from '@/lib/run/types';
-import { viewRun } from '@/lib/run/view';
-import type { StepGroup } from '@/lib/sequence/step';
+import { currentGroup, viewRun } from '@/lib/run/view';
 import type { Clock } from '../clock/clock';
 import type { Bench } from '../instruments/open-bench';
 import { valueCycles } from './integration';
@@ -168,8 +167,4 @@ export class RunPerformer {
     }
     this.wake();
   }
-}
-
-function currentGroup({ stepGroups }: RunView): StepGroup {
-  return stepGroups.find((each) => each.state === 'current')?.group ?? 'record';
 }

@@ -1,6 +1,6 @@
 import { advanceBench, beginBench } from '@/lib/bench/bench';
 import { say } from '@/lib/bench/sayings';
-import type { BenchEffect, BenchEvent, BenchState, ReferenceCheck } from '@/lib/bench/types';
+import type { BenchEffect, BenchEvent, BenchPlace, BenchState, ReferenceCheck } from '@/lib/bench/types';
 import { viewBench } from '@/lib/bench/view';
 import type { BenchCommand, CommandReply } from '@/lib/contracts/bench-command';
 import type { BenchReading, BenchView, RunView } from '@/lib/contracts/bench-view';
@@ -11,7 +11,7 @@ import type { SafeOffReport } from '../instruments/safe-off';
 import { BenchKeeper } from './bench-keeper';
 import { faultOf } from './fault-of';
 import type { ExpectedIdentities } from './links';
-import type { BenchPlace, CommissionBench, StationPorts } from './ports';
+import type { CommissionBench, StationPorts } from './ports';
 import { performRun } from './run-job';
 import type { RunPerformer } from './run-performer';
 

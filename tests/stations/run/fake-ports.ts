@@ -1,6 +1,6 @@
-import type { BenchAnswer, BenchAsk, PendingBin, ReferenceCheck, Standing } from '@/lib/bench/types';
+import type { BenchAnswer, BenchAsk, BenchPlace, PendingBin, ReferenceCheck, Standing } from '@/lib/bench/types';
 import type { RunEvent, RunPlan, RunResult } from '@/lib/run/types';
-import type { BenchPlace, RunLog, StationPorts } from '@/stations/run/ports';
+import type { RunLog, StationPorts } from '@/stations/run/ports';
 
 export interface KeptRun {
   plan: RunPlan;

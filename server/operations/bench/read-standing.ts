@@ -1,0 +1,76 @@
+import type { Database } from '@/db/client';
+import { findRunAwaitingBin, findNewestLabel } from '@/db/queries/runs-bench';
+import { listOpenSessions } from '@/db/queries/sessions';
+import { listBenches, type BenchRow } from '@/db/queries/station-benches';
+import { findStationCall } from '@/db/queries/station-calls';
+import { findBenchLot, type BenchLot } from '@/db/queries/station-lots';
+import { readStationFacts } from '@/db/queries/station-readiness';
+import { listOpenRuns } from '@/db/queries/runs-open';
+import type { BenchPlace, PendingBin, Standing } from '@/lib/bench/types';
+import { linkHasController } from '@/lib/contracts/station-link';
+import { admitStation } from '@/lib/run/admit-station';
+import { readLotStrip } from '../runs/lot-strip';
+
+/** Where a station stands: what must hold before it may test, its lot, its call, its label and a bin that waits. */
+export async function readStanding(
+  db: Database,
+  bench: BenchRow,
+  who: BenchPlace,
+): Promise<{ standing: Standing; pendingBin: PendingBin | null }> {
+  const lot = who.lotId ? await findBenchLot(db, { lotId: who.lotId }) : null;
+  const [admission, sessions, strip, call, label, awaiting] = await Promise.all([
+    admitBench(db, bench, who.accountId, lot),
+    who.sessionId ? listOpenSessions(db, [who.sessionId]) : [],
+    lot ? readLotStrip(db, lot) : null,
+    findStationCall(db, bench.id),
+    who.serial ? findNewestLabel(db, who.serial) : null,
+    findRunAwaitingBin(db, bench.id),
+  ]);
+  const otherStation = admission.reasons.length > 0 ? await findFreeStation(db, bench, who.accountId, lot) : null;
+  const standing: Standing = {
+    ...admission,
+    otherStation,
+    signedIn: sessions.length > 0,
+    lot: strip,
+    call: call && { sinceIso: call.at.toISOString(), acknowledgedBy: call.acknowledgedByName },
+    label: label && { serial: who.serial!, state: label.state, problem: label.problem },
+  };
+  return { standing, pendingBin: awaiting && { ...awaiting, binCode: bench.binCode } };
+}
+
+/** Calibration, daily check, commissioning, training and equipment. Links and database are the station's own to say. */
+export async function admitBench(
+  db: Database,
+  bench: BenchRow,
+  accountId: string | null,
+  lot: BenchLot | null,
+): Promise<Pick<Standing, 'readiness' | 'reasons'>> {
+  const facts = await readStationFacts(db, bench, { accountId, boardTypeId: lot?.boardTypeId ?? null });
+  const { readiness, reasons } = admitStation({
+    ...facts,
+    nowIso: new Date().toISOString(),
+    silent: [],
+    stranger: null,
+    databaseAnswers: true,
+    hasController: linkHasController(bench.link),
+    hasWiperProbe: bench.hasWiperProbe,
+    sequence: lot?.sequence ?? null,
+  });
+  return { readiness: readiness.filter(({ key }) => key !== 'links' && key !== 'database'), reasons };
+}
+
+/** Another station that could take the lot now: nothing runs there and nothing forbids it. */
+async function findFreeStation(
+  db: Database,
+  bench: BenchRow,
+  accountId: string | null,
+  lot: BenchLot | null,
+): Promise<string | null> {
+  const [benches, open] = await Promise.all([listBenches(db), listOpenRuns(db)]);
+  for (const other of benches) {
+    if (other.id === bench.id || open.some((run) => run.stationId === other.id)) continue;
+    const { reasons } = await admitBench(db, other, accountId, lot);
+    if (reasons.length === 0) return other.name;
+  }
+  return null;
+}

@@ -1,0 +1,84 @@
+import type { Database, Transaction } from '@/db/client';
+import { insertRunEvents } from '@/db/queries/runs-open';
+import { closeRun, getRunForUpdate, insertMeasurements, insertTraces } from '@/db/queries/runs-record';
+import { findStationPrinter } from '@/db/queries/station-benches';
+import { getReferencePoints, insertDailyCheck } from '@/db/queries/station-references';
+import { findDailyCheck } from '@/db/queries/station-readiness';
+import { compareReference } from '@/lib/bench/reference-check';
+import type { RunCloser } from '@/lib/contracts/stored-states';
+import { tracesOf } from '@/lib/run/traces';
+import { printLabel } from '../labels/print-label';
+import type { RunRecord } from './run-record';
+
+type Run = Awaited<ReturnType<typeof getRunForUpdate>>;
+
+/** Hours that a passed daily check lasts where none was made before. */
+const usualValidHours = 12;
+
+/**
+ * Stores a run that ended: its events, traces and measurements, its verdict, and the label or daily check that follows from
+ * it, all or nothing. Exactly once: a run that is closed already is left as it is.
+ */
+export async function recordRun(
+  db: Database,
+  record: RunRecord,
+  closedBy: RunCloser,
+): Promise<{ validUntilIso: string | null }> {
+  return db.transaction(async (tx) => {
+    const run = await getRunForUpdate(tx, record.runId);
+    if (run.endedAt) return { validUntilIso: null };
+    await storeResults(tx, record);
+    await close(tx, record, closedBy);
+    if (run.kind === 'production' && record.result.verdict === 'pass') {
+      const printerId = await findStationPrinter(tx, run.stationId);
+      await printLabel(tx, { unitId: run.unitId!, runId: run.id, printerId });
+    }
+    return { validUntilIso: run.kind === 'daily-check' ? await storeDailyCheck(tx, run, record) : null };
+  });
+}
+
+async function storeResults(tx: Transaction, { runId, batches, result }: RunRecord): Promise<void> {
+  const events = batches.flatMap((batch) => batch.events);
+  await insertRunEvents(
+    tx,
+    runId,
+    batches.map((batch) => ({ n: batch.n, batch: batch.events.map(({ event }) => event) })),
+  );
+  await insertTraces(tx, runId, tracesOf(events, events[0]?.event.atMs ?? 0));
+  await insertMeasurements(tx, runId, result.measurements);
+}
+
+async function close(tx: Transaction, record: RunRecord, closedBy: RunCloser): Promise<void> {
+  const { measurements: _stored, supplyOff, ...ending } = record.result;
+  await closeRun(tx, record.runId, {
+    ...ending,
+    supplyOffConfirmed: supplyOff.confirmed,
+    supplyOffVolts: supplyOff.volts,
+    supplyOffBy: supplyOff.by,
+    seconds: record.seconds,
+    endedAt: new Date(record.endedAtIso),
+    closedBy,
+  });
+}
+
+/** Null when the check decided nothing: it is repeated. */
+async function storeDailyCheck(tx: Transaction, run: Run, { result, endedAtIso }: RunRecord): Promise<string | null> {
+  if (result.verdict === 'no-verdict') return null;
+  const known = await getReferencePoints(tx, run.referenceBoardId!);
+  const { passed, points } = compareReference(known, result);
+  const validHours = (await findDailyCheck(tx, run.stationId))?.validHours ?? usualValidHours;
+  const at = new Date(endedAtIso);
+  const measured = (quantity: string) => points.find((point) => point.quantity === quantity)?.measuredVolts ?? null;
+  await insertDailyCheck(tx, {
+    stationId: run.stationId,
+    referenceBoardId: run.referenceBoardId!,
+    runId: run.id,
+    tripVolts: measured('trip-volts'),
+    releaseVolts: measured('release-volts'),
+    passed,
+    at,
+    validHours,
+    byAccountId: run.operatorId,
+  });
+  return passed ? new Date(at.getTime() + validHours * 3_600_000).toISOString() : null;
+}
