@@ -72,7 +72,7 @@ export function DataTable<Row extends RowData>({
   const pages = table.getPageCount();
   return (
     <>
-      <Table aria-label={label}>
+      <Table aria-label={label} className="[&_:is(td,th):not(:last-child)]:pr-7">
         <thead>
           {table.getHeaderGroups().map((group) => (
             <tr key={group.id}>
@@ -87,7 +87,7 @@ export function DataTable<Row extends RowData>({
                     {header.column.getCanSort() ? (
                       <button
                         type="button"
-                        className="min-h-[25px] hover:text-accent"
+                        className="min-h-[25px] font-text hover:text-accent"
                         onClick={header.column.getToggleSortingHandler()}
                       >
                         <table.FlexRender header={header} />

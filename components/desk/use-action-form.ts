@@ -10,9 +10,9 @@ const unreachable = 'The server did not answer. Nothing was stored; what you ent
  * Sends a form to a server action. A refusal stands beside its field, or is returned as `problem` for the foot of the form;
  * what was entered stays.
  */
-export function useActionForm<Form extends FieldValues, Value>(
-  form: UseFormReturn<Form>,
-  action: (input: Form) => Promise<Outcome<Value>>,
+export function useActionForm<Entered extends FieldValues, Parsed, Value>(
+  form: UseFormReturn<Entered, unknown, Parsed>,
+  action: (input: Parsed) => Promise<Outcome<Value>>,
   onDone: (value: Value) => void,
 ) {
   const [problem, setProblem] = useState<string | null>(null);
@@ -28,7 +28,8 @@ export function useActionForm<Form extends FieldValues, Value>(
       return;
     }
     if (outcome.ok) return onDone(outcome.value);
-    if (outcome.field) form.setError(outcome.field as Path<Form>, { message: outcome.sentence }, { shouldFocus: true });
+    if (outcome.field)
+      form.setError(outcome.field as Path<Entered>, { message: outcome.sentence }, { shouldFocus: true });
     else setProblem(outcome.sentence);
   });
   return { send, problem, sending: form.formState.isSubmitting };

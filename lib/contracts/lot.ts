@@ -32,7 +32,7 @@ export const lotSerialsSchema = z.discriminatedUnion('kind', [
     text: z
       .string()
       .min(1, { error: 'Choose a file with the serial numbers.' })
-      .max(1_000_000, { error: 'The file is larger than 1 MB. Choose one with serial numbers only.' }),
+      .max(500_000, { error: 'The file is larger than 500 kB. Choose one with serial numbers only.' }),
     /** Store the good rows although others are bad. */
     leaveOutBad: z.boolean().default(false),
   }),

@@ -3,7 +3,7 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
-import { useForm } from 'react-hook-form';
+import { useForm, useWatch } from 'react-hook-form';
 import type { z } from 'zod';
 import { Button, ButtonLink } from '@/components/ui/button';
 import { CheckField } from '@/components/ui/check-field';
@@ -53,8 +53,8 @@ export function LotForm({ bases, check, create }: LotFormProps) {
   const [checking, setChecking] = useState(false);
   // Both ways of naming the boards keep what was entered when the other one is looked at.
   const [counted, setCounted] = useState({ firstSerial: '', quantity: '' });
-  const kind: Kind = form.watch('serials.kind');
-  const { send, problem, sending } = useActionForm(form as never, create, ({ code, size }) => {
+  const kind: Kind = useWatch({ control: form.control, name: 'serials.kind' });
+  const { send, problem, sending } = useActionForm(form, create, ({ code, size }) => {
     toast(`Lot ${code} made with ${size} ${size === 1 ? 'board' : 'boards'}`);
     router.push(`/lots/${encodeURIComponent(code)}`);
   });

@@ -1,8 +1,23 @@
 import type { Surface } from '../surface';
 
 export const qualitySurface: Surface = {
-  pages: {},
-  handlers: {},
-  actions: {},
+  pages: {
+    '/lots': 'signed-in',
+    '/lots/new': 'manage-lots',
+    '/lots/[code]': 'signed-in',
+    /** Printed for the bench, with the lot's barcode. */
+    '/lots/[code]/sheet': 'signed-in',
+  },
+  handlers: {
+    'GET /api/lots/[code]': 'signed-in',
+  },
+  actions: {
+    'app/(quality)/lots/actions.ts#checkLotSerialsAction': 'manage-lots',
+    'app/(quality)/lots/actions.ts#createLotAction': 'manage-lots',
+    'app/(quality)/lots/actions.ts#changeLotAction': 'manage-lots',
+    'app/(quality)/lots/actions.ts#holdLotAction': 'hold-lots',
+    'app/(quality)/lots/actions.ts#releaseLotAction': 'hold-lots',
+    'app/(quality)/lots/actions.ts#recordComponentBatchAction': 'manage-lots',
+  },
   events: {},
 };

@@ -54,3 +54,8 @@ export async function listLotsForDesk(filter: LotFilter): Promise<LotList> {
     }),
   };
 }
+
+/** Released sequences that a lot can be made from. */
+export function listBasesForLot(): Promise<LotBasis[]> {
+  return listLotBases(database());
+}
