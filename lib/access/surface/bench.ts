@@ -4,5 +4,8 @@ export const benchSurface: Surface = {
   pages: {},
   handlers: {},
   actions: {},
-  events: {},
+  events: {
+    'server/live/gateway.ts#command': 'enrolled-bench',
+    'server/live/gateway.ts#hands': 'enrolled-bench',
+  },
 };

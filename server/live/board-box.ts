@@ -1,0 +1,37 @@
+import { createHash } from 'node:crypto';
+import type { Database } from '@/db/client';
+import { findNextUntested, findSimulatedBoard } from '@/db/queries/station-boxes';
+import { findReferenceBoard } from '@/db/queries/station-references';
+import type { BoardBox, BoardOrder } from '@/stations/simulation/simulated-hands';
+
+/** The box of boards beside a simulated bench: those of its lot, and the reference boards. */
+export function boardBox(db: Database, lotId: () => string | null): BoardBox {
+  return {
+    async nextSerial() {
+      const lot = lotId();
+      return lot ? findNextUntested(db, lot) : null;
+    },
+    async orderOf(serial): Promise<BoardOrder | null> {
+      const drawn = await findSimulatedBoard(db, serial);
+      if (drawn) {
+        const { boardType, sequence } = drawn;
+        const trim = sequence.steps.find((step) => step.kind === 'trim');
+        return {
+          kind: 'drawn',
+          boardType,
+          seed: drawn.seed ?? seedOf(serial),
+          defect: drawn.defect ?? 'none',
+          ...(trim?.kind === 'trim' && { targetVolts: trim.targetVolts }),
+        };
+      }
+      const reference = await findReferenceBoard(db, serial);
+      if (!reference) return null;
+      const { tripVolts, releaseVolts } = reference.board;
+      return { kind: 'reference', boardType: reference.boardType, points: { tripVolts, releaseVolts } };
+    },
+  };
+}
+
+function seedOf(serial: string): number {
+  return createHash('sha256').update(serial).digest().readUInt32BE();
+}
