@@ -15,7 +15,7 @@ const menu: readonly MenuItem[] = [
   { href: '/board-types', label: 'Board types' },
   { href: '/sequences', label: 'Sequences' },
   { href: '/instruments', label: 'Instruments' },
-  { href: '/people', label: 'Administration' },
+  { href: '/administration', label: 'Administration' },
 ];
 
 /** The items whose page these roles open. */

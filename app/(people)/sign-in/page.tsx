@@ -6,9 +6,12 @@ import { localPath } from '@/lib/access/local-path';
 
 export const metadata: Metadata = { title: 'Sign in' };
 
-const ended: Record<string, string> = {
+/** Why the page came up, by `because` in the address. */
+const reasons: Record<string, string> = {
   ended: 'Your session has ended. Sign in again to go on.',
   locked: 'The page locked after 15 minutes without a key.',
+  chosen: 'Your password is set. Sign in with it.',
+  made: 'The account is made. Sign in with it.',
 };
 
 interface Props {
@@ -17,7 +20,7 @@ interface Props {
 
 export default async function SignInPage({ searchParams }: Props) {
   const { next, because } = await searchParams;
-  const reason = because ? ended[because] : undefined;
+  const reason = because ? reasons[because] : undefined;
   return (
     <Entrance
       title="Sign in"

@@ -2,7 +2,11 @@ import type { Surface } from '../surface';
 
 export const engineeringSurface: Surface = {
   pages: {},
-  handlers: {},
-  actions: {},
+  handlers: {
+    'GET /api/calls': 'signed-in',
+  },
+  actions: {
+    'app/(engineering)/calls/actions.ts#acknowledgeCallAction': 'acknowledge-calls',
+  },
   events: {},
 };
