@@ -1,15 +1,20 @@
 import { cookies } from 'next/headers';
 import type { ReactNode } from 'react';
+import { CallBanner } from '@/components/desk/call-banner';
+import { DeskQuery } from '@/components/desk/desk-query';
+import { DeskSearch } from '@/components/desk/desk-search';
 import { SessionWatch } from '@/components/people/session-watch';
 import { SignOutButton } from '@/components/people/sign-out-button';
 import { DeskShell } from '@/components/ui/desk-shell';
 import { schemeCookie } from '@/components/ui/scheme';
+import { actorMay } from '@/lib/access/actor';
 import { menuFor } from '@/lib/access/menu';
 import { currentActor } from '@/server/auth/authorise';
+import { acknowledgeCallAction } from './(engineering)/calls/actions';
 
 /**
- * The frame of every page at a desk: menu of what the person may open, their name, signing out. `extra` stands left of the
- * name. It guards nothing: each page asks for its own access.
+ * The frame of every page at a desk: menu of what the person may open, search, calls for an engineer, their name, signing out.
+ * `extra` stands left of the name. It guards nothing: each page asks for its own access.
  */
 export async function DeskFrame({ children, extra }: { children: ReactNode; extra?: ReactNode }) {
   const actor = await currentActor();
@@ -22,6 +27,7 @@ export async function DeskFrame({ children, extra }: { children: ReactNode; extr
       aside={
         actor ? (
           <>
+            <DeskSearch />
             {extra}
             <span>{actor.name}</span>
             <SignOutButton />
@@ -30,7 +36,12 @@ export async function DeskFrame({ children, extra }: { children: ReactNode; extr
       }
     >
       {actor ? <SessionWatch /> : null}
-      {children}
+      <DeskQuery>
+        {actor ? (
+          <CallBanner acknowledge={actorMay(actor, 'acknowledge-calls') ? acknowledgeCallAction : null} />
+        ) : null}
+        {children}
+      </DeskQuery>
     </DeskShell>
   );
 }
