@@ -19,6 +19,8 @@ type Looking = Extract<FollowedPhase, { step: 'look' }>;
 const aboveVolts = 0.03;
 /** A rest makes precise looks worth their waypoints. */
 const restingShare = 0.5;
+/** Share that still moves when the screw is taken for stopped. */
+const stoppedShare = 0.2;
 const wideMoveVolts = 0.02;
 
 export function beginFollowed(state: TrimState): TrimState {
@@ -92,8 +94,8 @@ function looked(state: TrimState, phase: Looking, seen: { volts: number; output:
       atMs: state.atMs,
     },
   );
-  const { volts, movingShare } = trackedTrip(tracker);
-  const guided = guide(state, phase.guide, volts, movingShare < restingShare);
+  const { volts, sdVolts, movingShare } = trackedTrip(tracker);
+  const guided = guide(state, phase.guide, { volts, sdVolts, quiet: movingShare < stoppedShare });
   if (guided.state.phase.kind === 'over') return guided.state;
   if (guided.stopped) {
     const stopped: TrimState = { ...guided.state, stage: 'stop-turning', phase: { kind: 'followed', step: 'verify' } };

@@ -63,17 +63,25 @@ export interface Guided {
   stopped: boolean;
 }
 
-/** Takes in a live trip point; `quiet` when its source sees no movement. May end the trim. */
-export function guide(state: TrimState, before: LiveGuide, volts: number, quiet: boolean): Guided {
+/** A live trip point, its standard uncertainty, and whether its source sees no movement. */
+export interface LiveReading {
+  volts: number;
+  sdVolts: number;
+  quiet: boolean;
+}
+
+/** Takes in a live trip point. May end the trim. */
+export function guide(state: TrimState, before: LiveGuide, { volts, sdVolts, quiet }: LiveReading): Guided {
   const recent = [...before.recent.filter((r) => state.atMs - r.atMs <= restBelowMs), { atMs: state.atMs, volts }];
-  const told = tellMovement({ ...state, liveTripVolts: volts }, { ...before, recent }, volts);
+  const told = tellMovement({ ...state, liveTripVolts: volts }, { ...before, recent }, volts, sdVolts);
   if (told.state.phase.kind === 'over') return { ...told, stopped: false };
   const turned = turnAim(told.state, told.guide, volts);
   const advice = adviseLive(told.state, turned, volts);
   return {
     state: { ...told.state, advice },
     guide: turned,
-    stopped: (quiet && hasStopped(told.state, turned, volts)) || state.atMs - turned.promptedAtMs > longestPromptMs,
+    stopped:
+      (quiet && hasStopped(told.state, turned, volts, sdVolts)) || state.atMs - turned.promptedAtMs > longestPromptMs,
   };
 }
 
@@ -87,17 +95,23 @@ function turnAim(state: TrimState, guide: LiveGuide, volts: number): LiveGuide {
 }
 
 /** Movement as asked, the wrong way, or none for long. */
-function tellMovement(state: TrimState, guide: LiveGuide, volts: number): { state: TrimState; guide: LiveGuide } {
+function tellMovement(
+  state: TrimState,
+  guide: LiveGuide,
+  volts: number,
+  sdVolts: number,
+): { state: TrimState; guide: LiveGuide } {
   const { pace, settings, atMs } = state;
   const asked = guide.aim === 'below' ? -1 : 1;
   const moved = (volts - guide.fromVolts) * asked;
+  const enough = pace.peekVolts + 3 * sdVolts;
   const answered = { ...guide, fromVolts: volts, fromMs: atMs, moved: true, noEffectAtMs: null };
-  if (moved >= pace.peekVolts) return { state: foundMovement(state), guide: { ...answered, wrongToldAtMs: null } };
+  if (moved >= enough) return { state: foundMovement(state), guide: { ...answered, wrongToldAtMs: null } };
   if (guide.wrongToldAtMs !== null && atMs - guide.wrongToldAtMs < wrongWayPauseMs) {
     // Overshoots until the finding is taken in; told from where it turns back.
     return { state, guide: moved < 0 ? { ...guide, fromVolts: volts, fromMs: atMs } : guide };
   }
-  if (-moved >= pace.peekVolts && Math.abs(volts - settings.targetVolts) > settings.toleranceVolts) {
+  if (-moved >= enough && Math.abs(volts - settings.targetVolts) > settings.toleranceVolts) {
     const wrong = foundWrongWay(state, Math.abs(volts - state.trip.volts));
     return { state: wrong, guide: { ...answered, wrongToldAtMs: atMs } };
   }
@@ -106,23 +120,28 @@ function tellMovement(state: TrimState, guide: LiveGuide, volts: number): { stat
   }
   const waited = atMs - guide.fromMs;
   const patience = state.prompts <= 1 || guide.screwFound ? noEffectWithFetchAfterMs : noEffectAfterMs;
+  // A small turn is easily lost in play and the hand's own error: that is no finding, but a stop.
+  if (Math.abs(volts - settings.targetVolts) < 2 * pace.peekVolts) return { state, guide };
   if (guide.moved || waited < patience || Math.abs(moved) > pace.peekVolts / 3) return { state, guide };
   if (guide.screwFound) return { state: failNoEffect(state), guide };
   return { state: foundNoEffect(state, Math.round(waited / 1000)), guide: { ...guide, noEffectAtMs: atMs } };
 }
 
 /** Two agreeing readings at least: all of the last while within a few millivolts, after a movement or on target. */
-function hasStopped(state: TrimState, guide: LiveGuide, volts: number): boolean {
+function hasStopped(state: TrimState, guide: LiveGuide, volts: number, sdVolts: number): boolean {
   const { targetVolts, toleranceVolts } = state.settings;
-  const onTarget = Math.abs(volts - targetVolts) <= toleranceVolts;
-  if (!onTarget && !guide.moved) return false;
+  const off = Math.abs(volts - targetVolts);
+  const onTarget = off <= Math.min(0.75 * toleranceVolts, toleranceVolts - 2 * sdVolts);
+  const idle = off < 2 * state.pace.peekVolts && state.atMs - guide.fromMs > noEffectWithFetchAfterMs;
+  if (!onTarget && !guide.moved && !idle) return false;
   const restMs = onTarget ? restOnTargetMs : guide.aim === 'target' ? restElsewhereMs : restBelowMs;
-  const since = state.atMs - restMs;
-  const inRest = guide.recent.filter((reading) => reading.atMs >= since);
-  const oldest = guide.recent[0]!.atMs;
-  if (oldest > since || inRest.length < leastReadings) return false;
-  const span = Math.max(...inRest.map((r) => r.volts)) - Math.min(...inRest.map((r) => r.volts));
-  return span < Math.max(0.003, Math.min(0.006, 0.4 * toleranceVolts));
+  // The last `restMs`, or as far back as it takes for enough readings.
+  const tail = guide.recent.filter(
+    (reading, i) => state.atMs - reading.atMs <= restMs || i >= guide.recent.length - leastReadings,
+  );
+  if (tail.length < leastReadings || state.atMs - guide.recent[0]!.atMs < restMs) return false;
+  const span = Math.max(...tail.map((r) => r.volts)) - Math.min(...tail.map((r) => r.volts));
+  return span < (onTarget ? Math.max(0.003, Math.min(0.006, 0.4 * toleranceVolts)) : 0.006);
 }
 
 /** The operator found the screw after no effect was told. */

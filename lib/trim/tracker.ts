@@ -75,12 +75,16 @@ export function track(tracker: Tracker, model: TrackerModel, look: TrackerLook):
   return { ...next, seed: random.seed() };
 }
 
-/** Median trip point, and the share of particles that move. */
-export function trackedTrip(tracker: Tracker): { volts: number; movingShare: number } {
-  const sorted = tracker.trips.slice().sort();
+/** Median trip point with its standard deviation, and the share of particles that move. */
+export function trackedTrip(tracker: Tracker): { volts: number; sdVolts: number; movingShare: number } {
+  const volts = tracker.trips.slice().sort()[particles >> 1]!;
   let moving = 0;
-  for (const rate of tracker.rates) if (rate !== 0) moving++;
-  return { volts: sorted[particles >> 1]!, movingShare: moving / particles };
+  let squares = 0;
+  for (let i = 0; i < particles; i++) {
+    if (tracker.rates[i] !== 0) moving++;
+    squares += (tracker.trips[i]! - volts) ** 2;
+  }
+  return { volts, sdVolts: Math.sqrt(squares / particles), movingShare: moving / particles };
 }
 
 /** Median release point, for a look from the off side. */

@@ -108,9 +108,8 @@ function glanced(state: TrimState, turn: WaitedTurn, result: SearchResult): Trim
   }
   const seen = withResult(state, result);
   const moved = Math.abs(seen.trip.volts - turn.fromVolts);
-  const expected = Math.abs(turn.expectedVolts - turn.fromVolts);
   const isStill = moved < Math.max(agreeVolts, 4 * seen.trip.standardUncertaintyVolts);
-  if (!isStill || expected < 3 * agreeVolts) {
+  if (!isStill || isSmall(state, turn)) {
     const moving = turn.noEffectAtMs === null ? seen : foundMovement(seen);
     return verify(moving, { ...turn, noEffectAtMs: null }, seen.trip.volts);
   }
@@ -122,6 +121,12 @@ function glanced(state: TrimState, turn: WaitedTurn, result: SearchResult): Trim
   if (turn.screwFound) return failNoEffect(state);
   const told = foundNoEffect(state, Math.round(waitedMs / 1000));
   return wait(told, { ...turn, noEffectAtMs: state.atMs }, lookAgainMs);
+}
+
+/** A turn so small that play and the hand's own error may hide it: not moving is no finding then. */
+function isSmall({ pace, settings }: TrimState, turn: WaitedTurn): boolean {
+  const hidden = 10 / 360 + 2 * settings.trimmer.backlashTurns;
+  return Math.abs(turn.raisingTurns) < hidden || Math.abs(turn.expectedVolts - turn.fromVolts) < 2 * pace.peekVolts;
 }
 
 function verify(state: TrimState, turn: WaitedTurn, glancedVolts: number): TrimState {

@@ -26,6 +26,8 @@ interface WiperScale {
 }
 
 const calibrationReadings = 5;
+/** Half a millivolt of reading noise at the wiper and at the supply. */
+const readingSdVolts = 0.001;
 /** The supply stays this far above the release point that belongs to the larger of trip point and target. */
 const roomVolts = 0.3;
 /** A trip point this near to the supply is about to switch the board off. */
@@ -110,10 +112,14 @@ function calibrated(state: TrimState, shares: number[]): TrimState {
 
 /** T = (Vz' + b) / share with Vz' + b = share0 T0, and what the reference node itself moves between the two supplies. */
 function tripFrom(state: TrimState, scale: WiperScale, share: number): number {
-  const first = (scale.share * scale.tripVolts) / share;
   const design = designOf(state.estimate.mean, state.settings);
-  const sag = nodeAt(design, first) - nodeAt(design, scale.tripVolts);
-  return (scale.share * scale.tripVolts + sag) / share;
+  const node = nodeAt(design, scale.tripVolts);
+  let volts = (scale.share * scale.tripVolts) / share;
+  // The sag is a small part of the volts, so each pass leaves about a tenth of the error.
+  for (let pass = 0; pass < 4; pass++) {
+    volts = (scale.share * scale.tripVolts + nodeAt(design, volts) - node) / share;
+  }
+  return volts;
 }
 
 function read(
@@ -122,7 +128,7 @@ function read(
   seen: Extract<TrimObservation, { kind: 'wiper' }>,
 ): TrimState {
   const volts = tripFrom(state, phase.scale, shareOf(state, seen));
-  const guided = guide(state, phase.guide, volts, true);
+  const guided = guide(state, phase.guide, { volts, sdVolts: readingSdVolts, quiet: true });
   if (guided.state.phase.kind === 'over') return guided.state;
   if (guided.stopped) {
     const stopped: TrimState = { ...guided.state, stage: 'stop-turning', phase: { kind: 'probed', step: 'verify' } };
