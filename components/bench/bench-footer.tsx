@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import { useBench } from './bench-context';
 import { LotFoot } from './lot-foot';
 import { RefusalBand } from './refusal-band';
+import { WatcherNote } from './watcher-note';
 
 interface BenchFooterProps {
   /** Instead of the lot rule. */
@@ -24,6 +25,7 @@ export function BenchFooter({ note, ending, actions }: BenchFooterProps) {
           view.lot && <LotFoot lot={view.lot} ending={ending} />
         )}
       </div>
+      {!leads && <WatcherNote />}
       {leads && actions ? (
         <div className="flex flex-none gap-(--sw-bench-gap) max-[900px]:[&>*]:flex-1">{actions}</div>
       ) : null}

@@ -28,7 +28,7 @@ export function BenchHeader({ tools }: { tools?: ReactNode }) {
   const bold = (chunks: ReactNode) => <b className="text-ink">{chunks}</b>;
   const mono = (chunks: ReactNode) => <b className="font-num text-ink">{chunks}</b>;
   return (
-    <header className="relative flex items-start justify-between gap-8 px-12 pt-9 pb-5 max-[900px]:flex-wrap max-[900px]:gap-3">
+    <header className="relative flex min-[900px]:h-36.5 items-start justify-between gap-8 px-12 pt-9 max-[900px]:flex-wrap max-[900px]:gap-3">
       <div className="flex min-h-18 items-center gap-9">
         <Mark size="calc(76 * var(--sw-b))" title="Sillwright" />
         {run ? (

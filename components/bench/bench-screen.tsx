@@ -11,18 +11,16 @@ import { BenchSteps } from './bench-steps';
 import { BenchTools } from './bench-tools';
 import { BenchMenu } from './dialogs/bench-menu';
 import { LostBand } from './lost-band';
-import { WatcherBand } from './watcher-band';
 import type { BenchView } from '@/lib/contracts/bench-view';
 
 /** The whole screen of a station, from its view alone. */
 export function BenchScreen() {
-  const { view, leads, lost } = useBench();
+  const { view, lost } = useBench();
   const [menu, setMenu] = useState(false);
   const flood = useFlood(heardBeep(view));
   return (
     <div className="sw-bench relative flex min-h-dvh flex-col overflow-x-hidden bg-paper text-ink min-[900px]:h-dvh min-[900px]:overflow-hidden">
       {lost && <LostBand />}
-      {!leads && <WatcherBand />}
       <BenchHeader tools={<BenchTools onMenu={() => setMenu(true)} />} />
       <BenchSteps />
       <main className="flex min-h-0 flex-1 flex-col">

@@ -17,6 +17,11 @@ export function BenchTools({ onMenu }: { onMenu: () => void }) {
           {t(`sound.${sound}`)}
         </span>
       </button>
+      {!leads && (
+        <span className={`${look.replace('text-accent underline', 'text-ink')} hover:!bg-transparent`}>
+          {t('watching')}
+        </span>
+      )}
       {leads && (
         <button type="button" className={look} onClick={onMenu} aria-haspopup="dialog">
           {t('menu')}

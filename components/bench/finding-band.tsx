@@ -6,17 +6,17 @@ import { useNumbers } from './use-numbers';
 /** Amber band of 150 px: triangle, a title of two words, the measured fact. No flash and no tone. */
 export function FindingBand({ finding, trim }: { finding: TrimFinding; trim: TrimView }) {
   const t = useTranslations('bench.findings');
-  const { volts, oneDigit } = useNumbers();
+  const { volts, whole } = useNumbers();
   const amount = trim.findingVolts ?? 0;
   const fact = t(`${finding}.fact`, {
-    amount: finding === 'no-effect' ? oneDigit(amount) : volts(Math.abs(amount)),
+    amount: finding === 'no-effect' ? whole(amount) : volts(Math.abs(amount)),
     trip: trim.lastTripVolts === null ? '' : volts(trim.lastTripVolts),
     rounds: trim.round,
   });
   return (
-    <div role="status" className="flex min-h-37.5 flex-none items-center gap-9 bg-attn px-13 py-3 text-on-attn">
+    <div role="status" className="flex min-h-37.5 flex-none items-center gap-8 bg-attn px-12 py-3 text-on-attn">
       <BandTriangle size={110} />
-      <Fitted text={t(`${finding}.title`)} most={104} width={560} as="h2" className="flex-none !font-extrabold" />
+      <Fitted text={t(`${finding}.title`)} most={98} width={540} as="h2" className="flex-none !font-extrabold" />
       <p className="text-b-line leading-tight font-bold">{fact}</p>
     </div>
   );

@@ -9,7 +9,7 @@ interface FixturePictureProps {
 export function FixturePicture({ lid, board, seal = false }: FixturePictureProps) {
   const down = lid === 'closed' || lid === 'opening';
   return (
-    <svg viewBox="0 0 380 400" aria-hidden="true" className="block h-auto w-full">
+    <svg viewBox="-10 0 440 400" aria-hidden="true" className="block h-auto w-full">
       <g fill="none" stroke="var(--sw-ink)" strokeWidth={5}>
         <path d="M30 320h320v56H30z" fill="var(--sw-well)" />
         {[80, 130, 180, 230, 280].map((x) => (
@@ -22,7 +22,6 @@ export function FixturePicture({ lid, board, seal = false }: FixturePictureProps
             <path d="M86 254h40v22H86z" />
           </g>
         )}
-        {seal ? null : <path d="M350 324 336 306" strokeWidth={8} />}
         <g transform={down ? undefined : 'rotate(52 336 300)'}>
           <path d="M40 214h300v28H40z" fill="var(--sw-sheet)" />
           <path d="M60 242v22M320 242v46" />

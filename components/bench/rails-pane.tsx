@@ -8,10 +8,12 @@ interface RailsPaneProps {
   inside?: Partial<RailsInside>;
   showsTarget?: boolean;
   fixed?: BenchReading | null;
+  /** False where the magnified strip carries the values. */
+  flags?: boolean;
 }
 
 /** The rails of the run, or of the next run while none goes on; empty without a lot. Greyed when the connection is lost. */
-export function RailsPane({ inside, showsTarget, fixed }: RailsPaneProps) {
+export function RailsPane({ inside, showsTarget, fixed, flags = true }: RailsPaneProps) {
   const { view, readings, lost } = useBench();
   const known = view.run?.rails ?? view.next?.rails;
   if (!known) return null;
@@ -20,7 +22,7 @@ export function RailsPane({ inside, showsTarget, fixed }: RailsPaneProps) {
   return (
     <div className={`h-full ${lost ? 'opacity-40 grayscale' : ''}`}>
       <Rails
-        rails={rails}
+        rails={flags ? rails : { ...rails, flags: [], hysteresisVolts: null }}
         readings={readings}
         inside={{ ...nothingInside, ...inside }}
         showsTarget={showsTarget}

@@ -3,8 +3,9 @@ import { useMemo } from 'react';
 
 /** Numbers and times as the operator's language writes them. */
 export function useNumbers() {
-  const locale = useLocale();
+  const language = useLocale();
   return useMemo(() => {
+    const locale = language === 'en' ? 'en-GB' : language;
     const fixed = (digits: number) =>
       new Intl.NumberFormat(locale, {
         minimumFractionDigits: digits,
@@ -30,5 +31,5 @@ export function useNumbers() {
         dayOf(new Date(iso)) === dayOf(now) ? clock.format(new Date(iso)) : day.format(new Date(iso)),
       isToday: (iso: string, now = new Date()) => dayOf(new Date(iso)) === dayOf(now),
     };
-  }, [locale]);
+  }, [language]);
 }

@@ -30,7 +30,7 @@ export function fieldControl(id: string, { hint, error, warning }: FieldMessages
 export function Field({ id, messages, children }: { id: string; messages: FieldMessages; children: ReactNode }) {
   const { label, hint, error, warning } = messages;
   return (
-    <div className="grid gap-1">
+    <div className="grid content-start gap-1">
       <label htmlFor={id} className="text-cap text-ink">
         {label}
       </label>

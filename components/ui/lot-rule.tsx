@@ -14,10 +14,10 @@ const base = 30;
 export function LotRule({ marks, width = 1180, label, first = 1 }: LotRuleProps) {
   const count = Math.max(marks.length, 2);
   const pitch = (width - 2) / (count - 1);
-  const every = [1, 2, 5, 10, 20, 40, 50, 100, 200, 500].find((n) => n * pitch > 90) ?? 1000;
+  const every = [1, 2, 5, 10, 20, 40, 50, 100, 200, 500].find((n) => n * pitch > 150) ?? 1000;
   const x = (i: number) => 1 + i * pitch;
   return (
-    <svg viewBox={`0 -6 ${width} 80`} className="block h-auto w-full" role="img" aria-label={label}>
+    <svg viewBox={`0 -6 ${width} 76`} className="block h-auto w-full" role="img" aria-label={label}>
       <path d={`M0 ${base}H${width}`} stroke="var(--sw-ink)" strokeWidth={2} />
       {[...marks].map((mark, i) => (
         <BoardTick key={i} mark={mark} x={x(i)} pitch={pitch} />
@@ -29,7 +29,7 @@ export function LotRule({ marks, width = 1180, label, first = 1 }: LotRuleProps)
           <text
             key={k}
             x={x(board)}
-            y={70}
+            y={68}
             textAnchor={anchor}
             className="font-num"
             fontSize={22}

@@ -26,7 +26,7 @@ export interface RailFlag {
   volts: number;
   /** Hollow: an earlier attempt, or stale since the screw moved. */
   hollow: boolean;
-  note: 'too-low' | 'too-high' | 'before' | 'after-beep-1' | null;
+  note: 'too-low' | 'too-high' | 'before' | 'after-beep-1' | 'no-change' | null;
 }
 
 /** The rails: what is printed (scale, limits) and what is measured. Volts. */

@@ -24,6 +24,11 @@ export function BeepFlood({ beep }: { beep: Beep }) {
             <SerialStrip serial={view.run.serial} boardTypeCode={view.lot?.boardTypeCode} />
           </p>
         )}
+        <p className="ml-auto text-end text-b-label leading-[1.28]">
+          <b>{view.station.name}</b>, {view.station.fixture}
+          <br />
+          {view.lot && <b className="font-num">{view.lot.code}</b>}
+        </p>
       </div>
       <div className="flex min-h-0 flex-1 items-center gap-21 px-14 max-[900px]:flex-col max-[900px]:justify-center max-[900px]:gap-10">
         <ClosedJaws />

@@ -43,9 +43,12 @@ const arrowRoom = 56;
 /** Heights of everything between the tubes, so that nothing overlaps. */
 export function placeInside(rails: RailsView, inside: RailsInside): PlacedInside {
   const shifted = shiftedFlag(rails.flags);
-  const flags = rails.flags.map((flag, i) => {
+  const flags = rails.flags.map((found, i) => {
+    const solid = rails.flags.some((other) => other.side === found.side && !other.hollow);
+    // A hollow flag beside a solid one explains itself.
+    const flag = found.hollow && solid ? { ...found, note: null } : found;
     const key = `${i}`;
-    const shift = flag === shifted && inside.shiftVolts !== null;
+    const shift = found === shifted && inside.shiftVolts !== null;
     const rises = (inside.shiftVolts ?? 0) > 0;
     const noteBelow = shift ? rises : flag.note !== 'too-high' || flag.side === 'release';
     return { flag, key, pointY: heightOf(rails, flag.volts), height: flagHeight(flag.hollow), noteBelow, shift, rises };
@@ -63,8 +66,8 @@ export function placeInside(rails: RailsView, inside: RailsInside): PlacedInside
     blocks.push({
       key: 'hysteresis',
       wantedY: (heightOf(rails, ends[0].volts) + heightOf(rails, ends[1].volts)) / 2,
-      above: 34,
-      below: 34,
+      above: 30,
+      below: 28,
     });
   const centres = stackBlocks(blocks, railsBox.topY + 4, railsBox.bottomY + 8);
   return {

@@ -126,21 +126,22 @@ function Hysteresis({ rails, placed, y }: { rails: RailsView; placed: PlacedInsi
   const t = useTranslations('bench.rails');
   const { volts } = useNumbers();
   const ends = hysteresisEnds(rails.flags)!;
-  const [upper, lower] = ends.map((end) => placed.flags.find(({ flag }) => flag === end)!);
-  const top = upper!.boxY + upper!.height / 2 + 4;
-  const bottom = lower!.boxY - lower!.height / 2 - 4;
+  const [upper, lower] = ends.map((end) => placed.flags.find(({ flag }) => flag.side === end.side && !flag.hollow)!);
+  const top = upper!.boxY + upper!.height / 2 + (upper!.flag.note && upper!.noteBelow ? 40 : 4);
+  const between = placed.flags.some(({ boxY }) => boxY > upper!.boxY && boxY < lower!.boxY);
+  const bottom = lower!.boxY - lower!.height / 2 - (lower!.flag.note && !lower!.noteBelow ? 40 : 4);
   return (
     <g fill="var(--sw-ink)">
-      {y - 34 - top > 22 && (
+      {!between && y - 34 - top > 16 && (
         <>
-          <path d={`M${middle} ${top}V${y - 32}`} stroke="var(--sw-ink)" strokeWidth={2} />
-          <path d={`M${middle - 8} ${top + 19}L${middle} ${top}l8 19z`} />
+          <path d={`M${middle} ${top}V${y - 33}`} stroke="var(--sw-ink)" strokeWidth={2} />
+          <path d={`M${middle - 7} ${top + 15}L${middle} ${top}l7 15z`} />
         </>
       )}
-      {bottom - y - 34 > 22 && (
+      {!between && bottom - y - 34 > 16 && (
         <>
           <path d={`M${middle} ${y + 36}V${bottom}`} stroke="var(--sw-ink)" strokeWidth={2} />
-          <path d={`M${middle - 8} ${bottom - 19}L${middle} ${bottom}l8-19z`} />
+          <path d={`M${middle - 7} ${bottom - 15}L${middle} ${bottom}l7-15z`} />
         </>
       )}
       <text x={middle} y={y - 8} textAnchor="middle" fontSize={26} fill="var(--sw-ink-2)">

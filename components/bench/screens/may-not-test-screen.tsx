@@ -24,9 +24,9 @@ export function MayNotTestScreen({ screen }: { screen: MayNotTestView }) {
       <Panes left={<StationPanel />}>
         <div className="flex flex-none items-stretch bg-attn text-on-attn">
           <div className="w-14 flex-none bg-[repeating-linear-gradient(-45deg,var(--sw-on-attn)_0_calc(16*var(--sw-b)),var(--sw-attn)_calc(16*var(--sw-b))_calc(40*var(--sw-b)))]" />
-          <div className="px-9 pt-7 pb-6">
-            <Fitted as="h1" text={t('title')} most={116} width={1100} className="!font-extrabold" />
-            <ul className="mt-5 text-b-line leading-snug font-bold">
+          <div className="px-9 pt-6 pb-5">
+            <Fitted as="h1" text={t('title')} most={110} width={1100} className="!font-extrabold" />
+            <ul className="mt-4 text-b-line leading-snug font-bold">
               {screen.reasons.map((reason) => (
                 <li key={reason.faultCode + reason.code}>
                   {say(reason)} <span className="font-num">{reason.faultCode}</span>
@@ -35,7 +35,7 @@ export function MayNotTestScreen({ screen }: { screen: MayNotTestView }) {
             </ul>
           </div>
         </div>
-        <ol className="px-14 py-6">
+        <ol className="px-14 py-3">
           <Advice number={1} title={t('call')} text={first ? t('tell', { code: first.faultCode }) : ''} />
           {screen.otherStation && (
             <Advice
@@ -66,11 +66,11 @@ export function MayNotTestScreen({ screen }: { screen: MayNotTestView }) {
 
 function Advice({ number, title, text }: { number: number; title: ReactNode; text: ReactNode }) {
   return (
-    <li className="flex gap-10 border-b-2 border-hair py-4.5 last:border-0">
+    <li className="flex gap-10 border-b-2 border-hair py-3.5 last:border-0">
       <span className="text-[calc(44*var(--sw-b))] leading-tight font-bold">{number}</span>
       <div>
         <h2 className="text-[calc(42*var(--sw-b))] leading-tight font-bold">{title}</h2>
-        <p className="text-b-line text-ink-2">{text}</p>
+        <p className="text-b-line leading-snug text-ink-2">{text}</p>
       </div>
     </li>
   );

@@ -49,20 +49,25 @@ export function NoVerdictScreen({ screen, run }: { screen: NoVerdictView; run: R
             </p>
           </div>
         </div>
-        <div className="flex min-h-0 flex-1 justify-between gap-12 px-14 py-8 pr-16 max-[900px]:flex-col">
+        <div className="flex min-h-0 flex-1 justify-between gap-12 px-14 py-7 pr-16 max-[900px]:flex-col">
           <div className="flex min-w-0 flex-1 flex-col gap-6">
-            <p className="text-b-next leading-[1.14] font-bold whitespace-pre-line" role="alert">
+            <p
+              className={`leading-[1.14] font-bold whitespace-pre-line ${off ? 'text-b-next' : 'text-[calc(52*var(--sw-b))]'}`}
+              role="alert"
+            >
               {t(off ? 'supplyOff' : 'supplyMaybeOn')}
             </p>
             <p className="text-[calc(38*var(--sw-b))] leading-[1.34] text-ink-2">
-              {t.rich('notJudged', { serial, b: bold })} {words(`${screen.reason}.next`)}
+              {t.rich('notJudged', { serial, b: bold })} {off && words(`${screen.reason}.next`)}
               {screen.failingWhenStopped && <b className="block text-ink">{t('failing')}</b>}
             </p>
-            {!stopped && <p className="text-[calc(38*var(--sw-b))] leading-[1.34] text-ink-2">{t('again')}</p>}
-            <Cautions which={['supply-off', 'eyes', 'site-rules']} className="mt-auto" />
+            {!stopped && !screen.failingWhenStopped && (
+              <p className="text-[calc(38*var(--sw-b))] leading-[1.34] text-ink-2">{t('again')}</p>
+            )}
           </div>
           <div className="w-80 flex-none max-[900px]:w-full">
             <SupplyGauge supply={supply} />
+            <Cautions which={['supply-off', 'eyes', 'site-rules']} className="mt-5" />
           </div>
         </div>
       </Panes>

@@ -15,9 +15,7 @@ type RejectView = Extract<RunView['screen'], { kind: 'reject' }>;
 export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode: string | null }) {
   const t = useTranslations('bench.reject');
   const words = useTranslations();
-  const quantity = useQuantity();
   const { measured, reason, cause } = screen;
-  const mono = (chunks: ReactNode) => <b className="font-num">{chunks}</b>;
   return (
     <>
       <Panes left={<RailsPane />}>
@@ -33,14 +31,7 @@ export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode:
             <div className="flex min-w-0 flex-1 flex-col">
               <h2 className="text-[calc(54*var(--sw-b))] leading-tight font-bold">{words(`reject.${reason}`)}</h2>
               <p className="mt-2 text-[calc(42*var(--sw-b))] leading-[1.34]">
-                {measured &&
-                  (measured.limit === null
-                    ? t.rich('measured', { value: quantity(measured.value, measured.unit), b: mono })
-                    : t.rich('measuredLimit', {
-                        value: quantity(measured.value, measured.unit, measured.limit),
-                        limit: quantity(measured.limit, measured.unit, measured.value),
-                        b: mono,
-                      }))}{' '}
+                {measured && <Measured measured={measured} />}{' '}
                 {cause && t('likely', { cause: words(`cause.${cause}`) })}
               </p>
               <ol className="mt-6 grid gap-4 border-t-4 border-on-flood pt-7 text-[calc(48*var(--sw-b))] leading-tight font-bold">
@@ -61,4 +52,20 @@ export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode:
       <BenchFooter ending={binCode === null ? t('scanNext') : t('waitingForBin')} actions={<CallButton />} />
     </>
   );
+}
+
+/** The measured value and the limit it missed. */
+function Measured({ measured }: { measured: NonNullable<RejectView['measured']> }) {
+  const t = useTranslations('bench.reject');
+  const quantity = useQuantity();
+  const mono = (chunks: ReactNode) => <b className="font-num">{chunks}</b>;
+  const { value, unit, limit } = measured;
+  const found = quantity(value, unit, limit ?? undefined);
+  if (limit === null) return t.rich('measured', { value: found.number, unit: found.unit, b: mono });
+  return t.rich('measuredLimit', {
+    value: found.number,
+    unit: found.unit,
+    limit: quantity(limit, unit, value).number,
+    b: mono,
+  });
 }

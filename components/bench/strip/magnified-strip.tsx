@@ -27,8 +27,13 @@ export function MagnifiedStrip({ rails, targetVolts, toleranceVolts, heldVolts, 
   const shown = trip && trip.volts >= scope.minVolts && trip.volts <= scope.maxVolts ? trip : null;
   const away = trip ? targetVolts - trip.volts : 0;
   return (
-    <svg viewBox={`0 0 ${width} ${height}`} role="img" aria-label={t('aria')} className="block h-full w-full">
-      <rect width={width} y={76} height={594} fill="var(--sw-sheet)" />
+    <svg
+      viewBox={`0 0 ${width} ${height}`}
+      role="img"
+      aria-label={t('aria')}
+      className="block h-full w-full overflow-visible"
+    >
+      <rect x={-4} width={width + 4} y={76} height={594} fill="var(--sw-sheet)" />
       <StripTicks scope={scope} />
       <g className="font-num" fontSize={28} textAnchor="end" fill="var(--sw-ink-2)">
         <text x={98} y={topY + 10}>
@@ -182,7 +187,7 @@ function StripShift({ from, to, label }: { from: number; to: number; label: stri
     <g fill="var(--sw-accent)">
       <path d={`M${x} ${start}V${end - up * 28}`} stroke="var(--sw-accent)" strokeWidth={16} />
       <path d={`M${x - 24} ${end - up * 30}L${x} ${end}l24 ${-up * 30}z`} />
-      <text x={x + 36} y={(start + end) / 2 + 14} className="font-num" fontWeight={700} fontSize={40}>
+      <text x={x + 30} y={(start + end) / 2 + 13} className="font-num" fontWeight={700} fontSize={37}>
         {label}
       </text>
     </g>

@@ -8,7 +8,7 @@ export function AboutTurns({ words }: { words: TurnWords }) {
   return (
     <p className="flex items-center gap-9 font-bold text-accent">
       <span className="text-[calc(60*var(--sw-b))]">{t('about')}</span>
-      <span className="text-[calc(200*var(--sw-b))]">
+      <span className="text-[calc(200*var(--sw-b))] leading-none">
         <TurnNumber words={words} />
       </span>
     </p>

@@ -1,7 +1,7 @@
 /** A board from above with the trimmer in a blue frame. Not to scale, and not of one board type. */
 export function BoardPicture({ label }: { label: string }) {
   return (
-    <svg viewBox="0 0 600 326" role="img" aria-label={label} className="block h-auto w-full">
+    <svg viewBox="0 0 640 326" role="img" aria-label={label.replace('\n', ' ')} className="block h-auto w-full">
       <g fill="none" stroke="var(--sw-ink-2)" strokeWidth={2.5}>
         <rect x={2} y={2} width={440} height={320} fill="var(--sw-sheet)" stroke="var(--sw-ink)" strokeWidth={4} />
         {[
@@ -27,8 +27,12 @@ export function BoardPicture({ label }: { label: string }) {
       <circle cx={350} cy={115} r={22} fill="var(--sw-sheet)" stroke="var(--sw-ink)" strokeWidth={4} />
       <path d="M350 94v42" stroke="var(--sw-ink)" strokeWidth={8} />
       <path d="M296 60h110v110H296zM410 115h70" fill="none" stroke="var(--sw-accent)" strokeWidth={8} />
-      <text x={490} y={124} fontWeight={700} fontSize={26} fill="var(--sw-accent)">
-        {label}
+      <text y={110} fontWeight={700} fontSize={28} fill="var(--sw-accent)">
+        {label.split('\n').map((line) => (
+          <tspan key={line} x={492} dy={line === label.split('\n')[0] ? 0 : 34}>
+            {line}
+          </tspan>
+        ))}
       </text>
     </svg>
   );

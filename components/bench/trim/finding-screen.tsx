@@ -9,7 +9,7 @@ import { Panes } from '../panes';
 import { RailsPane } from '../rails-pane';
 import { AboutTurns } from './about-turns';
 import { TrimActions } from './trim-actions';
-import { trimInside } from './trim-inside';
+import { heldReading, trimInside } from './trim-inside';
 
 /** What went wrong with the turning, as measured; then the next move at full size. */
 export function FindingScreen({ trim, finding }: { trim: TrimView; finding: TrimFinding }) {
@@ -19,7 +19,7 @@ export function FindingScreen({ trim, finding }: { trim: TrimView; finding: Trim
   const heard = trim.stage === 'beep-2' ? 1 : 0;
   return (
     <>
-      <Panes left={<RailsPane showsTarget={beeps} inside={trimInside(trim)} />}>
+      <Panes left={<RailsPane showsTarget={beeps} inside={trimInside(trim)} fixed={heldReading(trim)} />}>
         <FindingBand finding={finding} trim={trim} />
         {direction && turns !== null && words ? (
           <div className="flex min-h-0 flex-1 items-center justify-between gap-8 px-11 py-6 max-[900px]:flex-col">

@@ -9,7 +9,7 @@ import { RailsPane } from '../rails-pane';
 import { DialBesideWords } from './dial-beside-words';
 import { AboutTurns } from './about-turns';
 import { TrimActions } from './trim-actions';
-import { trimInside } from './trim-inside';
+import { heldReading, trimInside } from './trim-inside';
 
 /** Turn briskly until the board answers. */
 export function FirstBeepScreen({ trim }: { trim: TrimView }) {
@@ -18,15 +18,7 @@ export function FirstBeepScreen({ trim }: { trim: TrimView }) {
   if (!direction || turns === null || !words) return null;
   return (
     <>
-      <Panes
-        left={
-          <RailsPane
-            showsTarget
-            inside={trimInside(trim)}
-            fixed={trim.heldVolts === null ? null : { volts: trim.heldVolts, output: null, rail: 'falling' }}
-          />
-        }
-      >
+      <Panes left={<RailsPane showsTarget inside={trimInside(trim)} fixed={heldReading(trim)} />}>
         <DialBesideWords
           direction={direction}
           dial={<TrimDial direction={direction} turns={turns} />}

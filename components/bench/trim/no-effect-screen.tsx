@@ -8,7 +8,7 @@ import { Panes } from '../panes';
 import { RailsPane } from '../rails-pane';
 import { StopButton } from '../stop-button';
 import { BoardPicture } from './board-picture';
-import { trimInside } from './trim-inside';
+import { heldReading, trimInside } from './trim-inside';
 
 /** Turning changed nothing: the wrong screw, or a trimmer that will not work. The operator says which. */
 export function NoEffectScreen({ trim }: { trim: TrimView }) {
@@ -16,11 +16,13 @@ export function NoEffectScreen({ trim }: { trim: TrimView }) {
   const { send, leads } = useBench();
   return (
     <>
-      <Panes left={<RailsPane showsTarget inside={{ ...trimInside(trim), shiftVolts: null }} />}>
+      <Panes
+        left={<RailsPane showsTarget inside={{ ...trimInside(trim), shiftVolts: null }} fixed={heldReading(trim)} />}
+      >
         <FindingBand finding="no-effect" trim={trim} />
         <div className="flex min-h-0 flex-1 flex-col justify-between gap-5 px-12 py-6">
           <div className="flex min-h-0 items-center gap-14 max-[900px]:flex-col">
-            <div className="w-150 max-w-full">
+            <div className="w-160 max-w-full">
               <BoardPicture label={t('screw')} />
             </div>
             <p className="text-[calc(44*var(--sw-b))] leading-[1.28]">{t('look')}</p>

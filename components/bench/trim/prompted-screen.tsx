@@ -32,7 +32,9 @@ export function PromptedScreen({ trim }: { trim: TrimView }) {
             words={
               <div className="flex h-full flex-col justify-between gap-2 py-4 text-accent">
                 <Fitted as="h1" text={t(`directions.${direction}`)} most={104} width={556} />
-                <p className="text-b-turns leading-none">
+                <p
+                  className={`leading-[0.84] ${words.unit === 'degrees' ? 'text-[calc(236*var(--sw-b))]' : 'text-b-turns'}`}
+                >
                   <TurnNumber words={words} />
                 </p>
                 {words.unit === 'turns' && (
@@ -60,7 +62,7 @@ function NearTarget({ trim }: { trim: TrimView }) {
         <div className="w-78 flex-none">
           <TrimDial direction={direction!} turns={turns!} labelled={false} />
         </div>
-        <p className="text-[calc(150*var(--sw-b))]">
+        <p className="text-[calc(150*var(--sw-b))] leading-none">
           <TurnNumber words={words!} />
         </p>
       </div>

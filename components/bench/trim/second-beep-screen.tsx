@@ -30,7 +30,7 @@ export function SecondBeepScreen({ trim }: { trim: TrimView }) {
                 <p className="text-[calc(50*var(--sw-b))] leading-tight">
                   {t('directionAbout', { direction: t(`directions.${direction}`).toLowerCase() })}
                 </p>
-                <p className="text-[calc(120*var(--sw-b))]">
+                <p className="text-[calc(120*var(--sw-b))] leading-none">
                   <TurnNumber words={words} />
                 </p>
                 {words.unit === 'turns' && (

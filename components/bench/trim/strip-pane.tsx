@@ -4,6 +4,7 @@ import { useBench } from '../bench-context';
 import { railsBox, heightOf } from '../rails/rails-geometry';
 import { RailsPane } from '../rails-pane';
 import { MagnifiedStrip } from '../strip/magnified-strip';
+import { heldReading } from './trim-inside';
 
 /** Rails and, beside them, the magnified strip, joined by a pale beam from its place on the rail. */
 export function StripPane({ trim }: { trim: TrimView }) {
@@ -23,13 +24,10 @@ export function StripPane({ trim }: { trim: TrimView }) {
         aria-hidden="true"
         className="absolute inset-0 h-full w-full max-[900px]:hidden"
       >
-        <path d={`M${railsBox.tripX + 12} ${y}L667 76V670Z`} fill="var(--sw-sheet)" />
+        <path d={`M${railsBox.tripX + 12} ${y}L669 76V670Z`} fill="var(--sw-sheet)" />
       </svg>
       <div className="relative h-full w-166.75 flex-none max-[900px]:w-[60%]">
-        <RailsPane
-          showsTarget
-          fixed={trim.heldVolts === null ? null : { volts: trim.heldVolts, output: null, rail: 'falling' }}
-        />
+        <RailsPane showsTarget flags={false} fixed={heldReading(trim)} />
       </div>
       <div className="relative h-full min-w-0 flex-1">
         <MagnifiedStrip

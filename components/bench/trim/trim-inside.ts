@@ -1,6 +1,11 @@
-import type { RailFlag, RailsView } from '@/lib/contracts/bench-view';
+import type { BenchReading, RailFlag, RailsView } from '@/lib/contracts/bench-view';
 import type { TrimView } from '@/lib/trim/types';
 import type { RailsInside } from '../rails/inside-blocks';
+
+/** The held supply as a reading that stands still. */
+export function heldReading(trim: TrimView): BenchReading | null {
+  return trim.heldVolts === null ? null : { volts: trim.heldVolts, output: null, rail: 'falling' };
+}
 
 /** What a trim adds between the rails: the held supply and how far the trip point still is from its target. */
 export function trimInside(trim: TrimView): Partial<RailsInside> {
@@ -20,13 +25,18 @@ export function trimRails(rails: RailsView, trim: TrimView): RailsView {
   const volts = liveTripVolts ?? lastTripVolts;
   const before = rails.flags
     .filter((flag) => flag.side === 'release' || volts === null || !alike(flag.volts, volts))
-    .map((flag): RailFlag => ({ ...flag, hollow: true, note: flag.side === 'trip' ? 'before' : null }));
+    .map((flag): RailFlag => ({
+      ...flag,
+      hollow: true,
+      note: volts === null && flag.side === 'trip' ? 'before' : null,
+    }));
   const now = volts === null ? [] : [tripNow(rails, trim, volts, liveTripVolts === null && lastTripIsStale)];
   return { ...rails, flags: [...before, ...now], hysteresisVolts: null };
 }
 
 function tripNow(rails: RailsView, trim: TrimView, volts: number, stale: boolean): RailFlag {
   if (stale) return { side: 'trip', volts, hollow: true, note: trim.stage === 'beep-2' ? 'after-beep-1' : 'before' };
+  if (trim.finding === 'no-effect') return { side: 'trip', volts, hollow: false, note: 'no-change' };
   const limits = rails.tripLimits;
   const note = !limits ? null : volts < limits.min ? 'too-low' : volts > limits.max ? 'too-high' : null;
   return { side: 'trip', volts, hollow: false, note };
