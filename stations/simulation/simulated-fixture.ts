@@ -9,7 +9,7 @@ export interface FixtureCharacter {
   contactOhms: number;
 }
 
-export const usualFixture: FixtureCharacter = { step: usualStep, contactOhms: 0.004 };
+export const usualFixture: FixtureCharacter = { step: usualStep, contactOhms: 0.002 };
 
 /** How fast the supply's output stage pulls the terminals down once off. */
 const dischargeMs = 15;
