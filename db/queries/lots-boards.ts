@@ -12,7 +12,7 @@ export interface BoardPoint {
   max: number | null;
 }
 
-/** Of each unit's newest run that ended: when, where, and the points it measured last. */
+/** Of each unit's newest run that ended: when, where, and the points it measured last. A run without a verdict judged none. */
 export interface NewestRun {
   unitId: string;
   runId: string;
@@ -31,6 +31,7 @@ export async function listNewestRuns(db: Database, lotId: string): Promise<Newes
       endedAt: runs.endedAt,
       seconds: runs.seconds,
       stationCode: stations.code,
+      verdict: runs.verdict,
     })
     .from(runs)
     .innerJoin(stations, eq(stations.id, runs.stationId))
@@ -60,13 +61,17 @@ export async function listNewestRuns(db: Database, lotId: string): Promise<Newes
     .orderBy(asc(measurements.n));
   // Later measurements of the run replace earlier ones.
   const last = new Map(points.map(({ runId, quantity, ...point }) => [`${runId} ${quantity}`, point]));
-  return newest.map((run) => ({
-    ...run,
-    unitId: run.unitId!,
-    endedAt: run.endedAt!,
-    tripVolts: last.get(`${run.runId} trip-volts`) ?? null,
-    releaseVolts: last.get(`${run.runId} release-volts`) ?? null,
-  }));
+  return newest.map(({ verdict, ...run }) => {
+    const pointOf = (quantity: string) =>
+      verdict === 'no-verdict' ? null : (last.get(`${run.runId} ${quantity}`) ?? null);
+    return {
+      ...run,
+      unitId: run.unitId!,
+      endedAt: run.endedAt!,
+      tripVolts: pointOf('trip-volts'),
+      releaseVolts: pointOf('release-volts'),
+    };
+  });
 }
 
 /** The newest label's state of each unit that has one. */

@@ -13,7 +13,14 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import { runClosers, runKinds, supplyOffWitnesses } from '@/lib/contracts/stored-states';
-import { likelyCauses, noVerdictReasons, rejectReasons, verdicts, type RunPlan } from '@/lib/run/types';
+import {
+  likelyCauses,
+  noVerdictReasons,
+  rejectReasons,
+  verdicts,
+  type Adjustment,
+  type RunPlan,
+} from '@/lib/run/types';
 import { accounts } from './accounts';
 import { id, moment, momentNow } from './columns';
 import { lots } from './lots';
@@ -76,6 +83,8 @@ export const runs = pgTable(
     seconds: doublePrecision(),
     trimRounds: integer(),
     turnsAdvised: doublePrecision(),
+    /** Every turn that was asked for. Null: open, or recorded before they were kept. */
+    adjustments: jsonb().$type<Adjustment[]>(),
     /** What was scanned at the red bin. Null: no reject, or not scanned yet. */
     binCode: text(),
     binScannedAt: moment(),

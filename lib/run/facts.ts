@@ -1,5 +1,5 @@
 import type { OutputState, PointEstimate } from '../search/types';
-import type { Measurement, RunEffect, RunEvent } from './types';
+import type { Adjustment, Measurement, RunEffect, RunEvent } from './types';
 
 export interface Points {
   trip: PointEstimate;
@@ -51,6 +51,8 @@ export interface RunFacts {
   trimFailing: boolean;
   trimRounds: number;
   turnsAdvised: number;
+  /** Turns asked for, on the station's clock. */
+  adjustments: readonly Adjustment[];
   measurements: Measurement[];
 }
 
@@ -68,6 +70,7 @@ export const noFacts: RunFacts = {
   trimFailing: false,
   trimRounds: 0,
   turnsAdvised: 0,
+  adjustments: [],
   measurements: [],
 };
 

@@ -3,6 +3,7 @@ import { failingWhenStopped } from './failing-when-stopped';
 import { faultCodes } from './fault-codes';
 import { factsAfter, factsAfterAsking, noFacts, type RunFacts } from './facts';
 import { interruptionBy } from './interruption';
+import { expectedUncertainty } from './rails';
 import type { Ask, StepContext, StepEvent, StepTurn } from './machine';
 import type { AnswerKind, RunState } from './state';
 import { machineOf } from './steps/step-machines';
@@ -30,6 +31,7 @@ export function beginRun(plan: RunPlan, atMs: number): Advance {
     stepIndex: 0,
     machine: null,
     facts: noFacts,
+    expectedUncertainty: expectedUncertainty(plan),
     phase: { kind: 'steps' },
     failingWhenStopped: false,
     stoppedAtVolts: null,
@@ -158,7 +160,7 @@ const close = (state: RunState): Advance => ({
 });
 
 /** The result once the run is over; null before. */
-export function resultOf({ phase, facts, failingWhenStopped: failing }: RunState): RunResult | null {
+export function resultOf({ phase, facts, startedAtMs, failingWhenStopped: failing }: RunState): RunResult | null {
   if (phase.kind !== 'over') return null;
   const { decision } = phase;
   const verdict = verdictOf(decision);
@@ -180,5 +182,6 @@ export function resultOf({ phase, facts, failingWhenStopped: failing }: RunState
     measurements: facts.measurements,
     trimRounds: facts.trimRounds,
     turnsAdvised: facts.turnsAdvised,
+    adjustments: facts.adjustments.map((each) => ({ ...each, atMs: each.atMs - startedAtMs })),
   };
 }

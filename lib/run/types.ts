@@ -1,5 +1,6 @@
 import type { BoardType } from '../contracts/board-type';
 import type { Sequence } from '../sequence/step';
+import type { Direction, TurnWords } from '../trim/types';
 import type { OutputState, SearchPrior } from '../search/types';
 
 /** Verdicts are three; mixing them up ruins every figure downstream. */
@@ -189,6 +190,19 @@ export type RunEvent = { atMs: number } & (
   | { kind: 'shutdown' }
 );
 
+/** One turn of the screw that the station asked for. */
+export interface Adjustment {
+  /** Milliseconds since the run began. */
+  atMs: number;
+  round: number;
+  direction: Direction;
+  turns: number;
+  words: TurnWords | null;
+  /** Trip point before it; null while it was not known. */
+  fromVolts: number | null;
+  until: 'turned' | 'first-beep' | 'second-beep';
+}
+
 export interface RunResult {
   verdict: Verdict;
   rejectReason: RejectReason | null;
@@ -202,6 +216,7 @@ export interface RunResult {
   measurements: Measurement[];
   trimRounds: number;
   turnsAdvised: number;
+  adjustments: Adjustment[];
 }
 
 /*

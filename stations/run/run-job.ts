@@ -100,5 +100,6 @@ function brokenOff(error: unknown, off: SafeOffReport): RunResult {
     measurements: [],
     trimRounds: 0,
     turnsAdvised: 0,
+    adjustments: [],
   };
 }

@@ -28,6 +28,9 @@ function Point({ point, tone }: { point: PointAgainstLimits | null; tone: 'trip'
   );
 }
 
+const verdictText = ({ verdict, rejectReason }: LotBoardRow) =>
+  verdict === 'reject' && rejectReason ? rejectWords[rejectReason] : verdict === 'pass' ? 'Passed' : 'No verdict';
+
 function Verdict({ row }: { row: LotBoardRow }) {
   if (row.standing === 'in-test') return <b>In test</b>;
   if (row.verdict === null) return <span className="text-ink-3">not tested</span>;
@@ -35,14 +38,12 @@ function Verdict({ row }: { row: LotBoardRow }) {
   return (
     <span className="inline-flex items-center gap-2">
       <VerdictMark shape={row.verdict === 'pass' ? 'pass' : row.verdict === 'reject' ? 'reject' : 'check'} size={16} />
-      {row.verdict === 'reject' && row.rejectReason
-        ? rejectWords[row.rejectReason]
-        : row.verdict === 'pass'
-          ? 'Passed'
-          : 'No verdict'}
-      {waits || (row.verdict === 'reject' && row.standing !== 'needs-disposition') ? (
-        <span className="text-ink-2">, {standingWords[row.standing].toLowerCase()}</span>
-      ) : null}
+      <span>
+        {verdictText(row)}
+        {waits || (row.verdict === 'reject' && row.standing !== 'needs-disposition') ? (
+          <span className="text-ink-2">, {standingWords[row.standing].toLowerCase()}</span>
+        ) : null}
+      </span>
     </span>
   );
 }

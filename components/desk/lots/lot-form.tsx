@@ -89,7 +89,7 @@ export function LotForm({ bases, check, create }: LotFormProps) {
   const bad = rows?.filter((row) => row.problem !== null).length ?? 0;
   return (
     <form onSubmit={send} noValidate className="grid max-w-[860px] gap-6">
-      <div className="grid gap-5 sm:grid-cols-2">
+      <div className="grid items-start gap-5 sm:grid-cols-2">
         <TextField
           {...form.register('code')}
           label="Lot number"

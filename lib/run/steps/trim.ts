@@ -1,6 +1,7 @@
 import type { Step } from '../../sequence/step';
 import { beginTrim, nextTrimCommand, observeTrim, viewTrim, type TrimState } from '../../trim/trim';
 import type { TrimCommand, TrimObservation, TrimOutcome } from '../../trim/types';
+import { noteAdjustment } from '../adjustments';
 import { faultCodes } from '../fault-codes';
 import { noTravel, type Points } from '../facts';
 import { measuring, stay, type Answer, type StepContext, type StepMachine, type StepTurn } from '../machine';
@@ -135,8 +136,11 @@ function obey(machine: TrimMachine, step: TrimStep, context: StepContext): Turn 
   const command = nextTrimCommand(machine.trim);
   const asked = { ...machine, doing: { kind: 'asked' } as const };
   const { waypointMs, settleMs } = context.plan.commissioning;
-  const finding = viewTrim(machine.trim).finding;
-  const facts = { trimFailing: finding === 'no-effect' || finding === 'end-of-travel' };
+  const view = viewTrim(machine.trim);
+  const facts = {
+    trimFailing: view.finding === 'no-effect' || view.finding === 'end-of-travel',
+    adjustments: noteAdjustment(context.facts.adjustments, view, context.atMs),
+  };
   switch (command.kind) {
     case 'finished':
       return conclude(asked, command.outcome, context);
