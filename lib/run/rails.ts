@@ -5,6 +5,7 @@ import type { Sequence } from '../sequence/step';
 import { combineContributions } from '../uncertainty/combine';
 import { pointBudget } from '../uncertainty/point-budget';
 import { noTravel, type Points, type RunFacts } from './facts';
+import type { PointUncertainty, RunState } from './state';
 import type { RunPlan } from './types';
 
 /** Volts shown beyond the limits at either end of the rails. */
@@ -28,12 +29,12 @@ export function printedRails({ limits }: BoardType, sequence: Sequence): RailsVi
 }
 
 /** The rails of a run: what is printed, and what is measured so far. */
-export function railsOf(plan: RunPlan, facts: RunFacts): RailsView {
+export function railsOf({ plan, facts, expectedUncertainty }: RunState): RailsView {
   const verified = facts.verified.at(-1) ?? null;
   const latest = verified ?? facts.trimmed ?? (facts.trimBegan ? null : facts.found);
   return {
     ...printedRails(plan.boardType, plan.sequence),
-    guardVolts: guardsOf(plan, facts),
+    guardVolts: guardsOf(plan, facts, expectedUncertainty),
     travelled: facts.travel,
     flags: [
       ...(facts.found && latest !== facts.found ? flagsOf(facts.found, plan.boardType, 'before') : []),
@@ -54,26 +55,34 @@ function flagsOf({ trip, release }: Points, { limits }: BoardType, note: 'before
 }
 
 /** Guarded limits as judged; before that, as the verification is expected to draw them. */
-function guardsOf(plan: RunPlan, facts: RunFacts): RailsView['guardVolts'] {
+function guardsOf(plan: RunPlan, facts: RunFacts, expected: PointUncertainty): RailsView['guardVolts'] {
   const { decisionRule } = plan.sequence;
   if (decisionRule.kind === 'simple') return null;
   const { tripVolts, releaseVolts } = plan.boardType.limits;
-  const guarded = (quantity: 'trip-volts' | 'release-volts', limits: { min: number; max: number }) => {
+  const guarded = (
+    quantity: 'trip-volts' | 'release-volts',
+    limits: { min: number; max: number },
+    expectedVolts: number,
+  ) => {
     const judged = facts.measurements.findLast((m) => m.quantity === quantity && m.phase === 'verified');
-    const expanded = judged?.expandedUncertainty ?? expectedUncertainty(plan, (limits.min + limits.max) / 2);
-    const drawn = drawIn(limits, guardBandOf(decisionRule, expanded));
+    const drawn = drawIn(limits, guardBandOf(decisionRule, judged?.expandedUncertainty ?? expectedVolts));
     return { min: drawn.min ?? limits.min, max: drawn.max ?? limits.max };
   };
-  const trip = guarded('trip-volts', tripVolts);
-  const release = guarded('release-volts', releaseVolts);
+  const trip = guarded('trip-volts', tripVolts, expected.tripVolts);
+  const release = guarded('release-volts', releaseVolts, expected.releaseVolts);
   return { tripMin: trip.min, tripMax: trip.max, releaseMin: release.min, releaseMax: release.max };
 }
 
-/** U of a point verified as the sequence asks, when its repeats agree as well as each search. */
-function expectedUncertainty({ sequence, meter }: RunPlan, volts: number): number {
+/** U of the points when verified as the sequence asks, where the repeats agree as well as each search does. Volts. */
+export function expectedUncertainty({ sequence, meter, boardType }: RunPlan): PointUncertainty {
   const step = sequence.steps.find((s) => s.kind === 'verify');
   const [repeats, search] = step?.kind === 'verify' ? [step.repeats, step.wantedUncertaintyVolts] : [1, 0.001];
-  return combineContributions(
-    pointBudget({ values: [volts], searchUncertainties: [search / Math.sqrt(repeats)] }, meter),
-  ).expanded;
+  const expandedAt = ({ min, max }: { min: number; max: number }) => {
+    const point = { values: [(min + max) / 2], searchUncertainties: [search / Math.sqrt(repeats)] };
+    return combineContributions(pointBudget(point, meter)).expanded;
+  };
+  return {
+    tripVolts: expandedAt(boardType.limits.tripVolts),
+    releaseVolts: expandedAt(boardType.limits.releaseVolts),
+  };
 }

@@ -5,6 +5,12 @@ import type { RunEvent, RunPlan } from './types';
 /** The answers that each effect may have; `fault` besides. */
 export type AnswerKind = Extract<RunEvent, { id: number }>['kind'];
 
+/** Expanded uncertainty of the points, volts. */
+export interface PointUncertainty {
+  tripVolts: number;
+  releaseVolts: number;
+}
+
 export type Phase =
   /** Going through the steps. */
   | { kind: 'steps' }
@@ -23,6 +29,8 @@ export interface RunState {
   stepIndex: number;
   machine: unknown;
   facts: RunFacts;
+  /** U that the verification is expected to reach, for the guard band drawn before it is known. */
+  expectedUncertainty: PointUncertainty;
   phase: Phase;
   failingWhenStopped: boolean;
   /** Supply volts when the run was ended; null before, or with the supply off. */

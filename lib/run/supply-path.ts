@@ -3,19 +3,26 @@
  * the overshoot bound of the commissioning, as a fraction of the step.
  */
 
-/** Commands that lead from `fromVolts` to `toVolts`, the last one being `toVolts`, with no peak beyond `boundVolts`. */
+/** A peak this far beyond the bound harms nothing: it is about the noise of a quiet comparator. */
+const negligibleVolts = 0.0007;
+const leastStepVolts = 0.001;
+const mostSteps = 12;
+
+/**
+ * Commands that lead from `fromVolts` to `toVolts`, the last one being `toVolts`, with no peak beyond `boundVolts`, which
+ * lies at or behind the end.
+ */
 export function pathWithin(fromVolts: number, toVolts: number, boundVolts: number, overshoot: number): number[] {
   const path: number[] = [];
   const direction = Math.sign(toVolts - fromVolts);
   let at = fromVolts;
-  while (Math.abs(toVolts - at) > leastStepVolts && path.length < mostSteps) {
-    const farthest = (boundVolts + overshoot * at) / (1 + overshoot);
-    const next = direction > 0 ? Math.min(toVolts, farthest) : Math.max(toVolts, farthest);
+  while (path.length < mostSteps) {
+    const peak = toVolts + overshoot * (toVolts - at);
+    if ((peak - boundVolts) * direction <= negligibleVolts) break;
+    const next = (boundVolts + overshoot * at) / (1 + overshoot);
     if ((next - at) * direction < leastStepVolts) break;
     path.push(next);
     at = next;
   }
-  return path.length === 0 ? [toVolts] : [...path.slice(0, -1), toVolts];
+  return [...path, toVolts];
 }
-const leastStepVolts = 0.001;
-const mostSteps = 12;

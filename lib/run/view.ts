@@ -25,7 +25,7 @@ export function viewRun(state: RunState): RunView {
     serial: plan.serial,
     attempt: plan.attempt,
     stepGroups: stepLine(state),
-    rails: railsOf(plan, facts),
+    rails: railsOf(state),
     supply: supplyView(facts.supply),
     startedAtMs: state.startedAtMs,
     screen: screenOf(state),

@@ -87,6 +87,7 @@ function screenName(screen: RunView['screen']): string {
 class Operator {
   private reactAtMs = 0;
   private stage = '';
+  private leftTurns = 0;
   constructor(
     private readonly plant: Plant,
     private readonly plan: RunPlan,
@@ -133,13 +134,17 @@ class Operator {
   turnDuring(milliseconds: number, screen: RunView['screen']): void {
     if (screen.kind !== 'trim') return;
     const { trim } = screen;
-    if (trim.stage !== this.stage) {
-      this.stage = trim.stage;
+    const stage = `${trim.stage} ${trim.round} ${trim.direction}`;
+    if (stage !== this.stage) {
+      this.stage = stage;
       this.reactAtMs = this.plant.nowMs + paces.reactionMs;
+      // A beep says when to stop; a stated turn is made as asked.
+      this.leftTurns = trim.stage === 'turn' ? (trim.turns ?? 0) : Infinity;
     }
     if (!trim.direction || this.plant.nowMs < this.reactAtMs) return;
     const pace = trim.paceTurnsPerSecond ?? (trim.stage === 'beep-2' ? paces.slow : this.brisk());
-    const turns = (pace * milliseconds) / 1000;
+    const turns = Math.min(this.leftTurns, (pace * milliseconds) / 1000);
+    this.leftTurns -= turns;
     this.plant.turn(trim.direction === 'clockwise' ? turns : -turns);
   }
 
