@@ -3,7 +3,6 @@
 import { useState } from 'react';
 import type { Beep } from './beep/flood-machine';
 import { BeepFlood } from './beep/beep-flood';
-import { useFlood } from './beep/use-flood';
 import { BenchBody } from './bench-body';
 import { useBench } from './bench-context';
 import { BenchHeader } from './bench-header';
@@ -13,13 +12,12 @@ import { BenchMenu } from './dialogs/bench-menu';
 import { LostBand } from './lost-band';
 import type { BenchView } from '@/lib/contracts/bench-view';
 
-/** The whole screen of a station, from its view alone. */
-export function BenchScreen() {
-  const { view, lost } = useBench();
+/** The whole screen of a station, from its view and the beep that floods it now. */
+export function BenchScreen({ flood }: { flood: Beep | null }) {
+  const { lost } = useBench();
   const [menu, setMenu] = useState(false);
-  const flood = useFlood(heardBeep(view));
   return (
-    <div className="sw-bench relative flex min-h-dvh flex-col overflow-x-hidden bg-paper text-ink min-[900px]:h-dvh min-[900px]:overflow-hidden">
+    <div className="sw-bench relative flex min-h-dvh flex-col overflow-x-hidden bg-paper text-ink min-[900px]:h-full min-[900px]:min-h-0 min-[900px]:overflow-hidden">
       {lost && <LostBand />}
       <BenchHeader tools={<BenchTools onMenu={() => setMenu(true)} />} />
       <BenchSteps />

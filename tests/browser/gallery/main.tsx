@@ -4,7 +4,7 @@ import '@/app/globals.css';
 import { NextIntlClientProvider } from 'next-intl';
 import { createRoot } from 'react-dom/client';
 import { BenchProvider } from '@/components/bench/bench-context';
-import { BenchScreen } from '@/components/bench/bench-screen';
+import { BenchScreen, heardBeep } from '@/components/bench/bench-screen';
 import { createReadingStore } from '@/components/bench/live/reading-store';
 import { showScheme } from '@/components/ui/scheme';
 import { benchCatalogue } from '@/lib/messages/bench-locales';
@@ -47,7 +47,9 @@ function Shown() {
           toggleSound: () => {},
         }}
       >
-        <BenchScreen />
+        <div className="sw-stage min-[900px]:h-dvh">
+          <BenchScreen flood={heardBeep(shown.view)} />
+        </div>
       </BenchProvider>
     </NextIntlClientProvider>
   );
