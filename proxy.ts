@@ -4,6 +4,7 @@ import { accessOfRequest } from '@/lib/access/surface';
 import { pathHeader } from '@/server/auth/authorise';
 import { refusedResponse, requestOriginAllowed } from '@/server/auth/authorise-request';
 import { readEnrolment } from '@/server/auth/enrolment-cookie';
+import { nothingHereResponse } from '@/server/auth/nothing-here';
 import { readSession, type Cookies } from '@/server/auth/read-session';
 
 /**
@@ -19,7 +20,7 @@ export async function proxy(request: NextRequest): Promise<Response> {
 
   const isAction = request.headers.has('next-action');
   const access = accessOfRequest(request.method, pathname);
-  if (access === null) return NextResponse.rewrite(new URL('/nothing-here', request.url), { request: { headers } });
+  if (access === null) return nothingHereResponse();
   // An action's own first line answers, in a form that the page which called it can follow.
   if (access === 'public' || isAction) return passOn();
 
@@ -28,7 +29,8 @@ export async function proxy(request: NextRequest): Promise<Response> {
   const decision = decideAccess(access, { roles: actor?.roles ?? null, enrolledBench: enrolment !== null });
   if (decision === 'allowed') return passOn();
   if (pathname.startsWith('/api/')) return refusedResponse(decision);
-  if (decision === 'not-allowed') return NextResponse.rewrite(new URL('/not-allowed', request.url), { status: 403 });
+  // No rewrites: Next takes 127.0.0.1 for another host than localhost and would fetch them over the network.
+  if (decision === 'not-allowed') return NextResponse.redirect(new URL('/not-allowed', request.url));
   const signIn = new URL('/sign-in', request.url);
   if (pathname !== '/') signIn.searchParams.set('next', pathname + search);
   return NextResponse.redirect(signIn);

@@ -41,7 +41,10 @@ export function BarcodeCard({ title, lines, code }: BarcodeCardProps) {
           aria-label={`Barcode ${code}`}
           className="mx-auto block"
         >
-          <path d={barPath(barcode, { x: 0, y: 0, module: moduleMm, height: barsMm.height })} shapeRendering="crispEdges" />
+          <path
+            d={barPath(barcode, { x: 0, y: 0, module: moduleMm, height: barsMm.height })}
+            shapeRendering="crispEdges"
+          />
         </svg>
         <figcaption className="mt-1 font-num text-[13px]">{code}</figcaption>
       </figure>

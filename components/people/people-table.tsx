@@ -31,7 +31,7 @@ const columns = helper.columns([
   helper.accessor('signsInAs', {
     header: 'Signs in as',
     sortFn: 'alphanumeric',
-    cell: ({ getValue }) => <span className="font-num text-ink-2">{getValue()}</span>,
+    cell: ({ getValue }) => <span className="text-cap text-ink-2">{getValue()}</span>,
   }),
   ...roles.map((role) =>
     helper.accessor((row) => (row.roles.includes(role) ? '0' : '1'), {
@@ -60,7 +60,7 @@ function NameLink({ row }: { row: PersonTableRow }) {
   query.set('who', row.accountId);
   return (
     <Link
-      className="font-bold hover:text-accent hover:underline"
+      className="font-bold whitespace-nowrap hover:text-accent hover:underline"
       href={`/administration/people?${query}`}
       scroll={false}
     >
@@ -100,7 +100,7 @@ function LastSeen({ row }: { row: PersonTableRow }) {
         <VerdictMark shape="reject" size={14} /> locked
       </span>
     );
-  return row.lastSeenIso ? <Time iso={row.lastSeenIso} /> : <span className="text-ink-3">never</span>;
+  return row.lastSeenIso ? <Time iso={row.lastSeenIso} format="day" /> : <span className="text-ink-3">never</span>;
 }
 
 export function PeopleTable({ rows, chosen }: { rows: PersonTableRow[]; chosen: string | null }) {
