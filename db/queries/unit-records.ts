@@ -18,6 +18,11 @@ export function listUnitRecordsOfLot(db: Database | Transaction, lotId: string):
   return listRecords(db, eq(units.lotId, lotId));
 }
 
+/** The records of these units, in no order that matters. */
+export function listUnitRecordsById(db: Database | Transaction, unitIds: readonly string[]): Promise<UnitRecord[]> {
+  return unitIds.length === 0 ? Promise.resolve([]) : listRecords(db, inArray(units.id, [...unitIds]));
+}
+
 /** What is on record of one board; null when there is no such unit. */
 export async function findUnitRecord(db: Database | Transaction, unitId: string): Promise<UnitRecord | null> {
   const [record] = await listRecords(db, eq(units.id, unitId));

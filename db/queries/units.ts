@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, ilike, inArray, or, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, ilike, inArray, isNotNull, sql } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import { accounts } from '@/db/schema/accounts';
 import { boardTypeRevisions } from '@/db/schema/board-type-revisions';
@@ -7,12 +7,10 @@ import { dispositions } from '@/db/schema/dispositions';
 import { lots } from '@/db/schema/lots';
 import { measurements } from '@/db/schema/measurements';
 import { retestOrders } from '@/db/schema/retest-orders';
-import { runEvents } from '@/db/schema/run-events';
 import { runs } from '@/db/schema/runs';
 import { stations } from '@/db/schema/stations';
 import { traces } from '@/db/schema/traces';
 import { units } from '@/db/schema/units';
-import type { RunEvent } from '@/lib/run/types';
 
 type Reader = Database | Transaction;
 
@@ -61,16 +59,6 @@ export function listMeasurements(db: Reader, runIds: string[]) {
 export function listTraces(db: Reader, runIds: string[]) {
   if (runIds.length === 0) return Promise.resolve([]);
   return db.select().from(traces).where(inArray(traces.runId, runIds)).orderBy(asc(traces.n));
-}
-
-/** The recorded events of a run in their order, as the engine was told them. */
-export async function listRunEvents(db: Reader, runId: string): Promise<RunEvent[]> {
-  const rows = await db
-    .select({ batch: runEvents.batch })
-    .from(runEvents)
-    .where(eq(runEvents.runId, runId))
-    .orderBy(asc(runEvents.n));
-  return rows.flatMap((row) => row.batch);
 }
 
 export async function listDispositionsOfUnit(db: Reader, unitId: string) {
@@ -145,6 +133,7 @@ export function searchLots(db: Reader, text: string, most: number): Promise<Foun
 }
 
 export interface RecentRun {
+  unitId: string;
   serial: string;
   boardTypeCode: string;
   lotCode: string;
@@ -155,13 +144,19 @@ export interface RecentRun {
   stationCode: string;
 }
 
-/** Production runs that ended, newest first; `verdict` null: any. */
+/** Production runs that ended, newest first; `verdict`, `stationCode` and `unitIds` null: any. */
 export async function listRecentRuns(
   db: Reader,
-  filter: { verdict: RecentRun['verdict'] | null; stationCode: string | null; most: number },
+  filter: {
+    verdict: RecentRun['verdict'] | null;
+    stationCode: string | null;
+    unitIds: readonly string[] | null;
+    most: number;
+  },
 ): Promise<RecentRun[]> {
   const rows = await db
     .select({
+      unitId: units.id,
       serial: units.serial,
       boardTypeCode: boardTypes.code,
       lotCode: lots.code,
@@ -180,8 +175,10 @@ export async function listRecentRuns(
     .where(
       and(
         eq(runs.kind, 'production'),
-        filter.verdict ? eq(runs.verdict, filter.verdict) : or(sql`${runs.endedAt} is not null`),
+        isNotNull(runs.endedAt),
+        filter.verdict ? eq(runs.verdict, filter.verdict) : undefined,
         filter.stationCode ? eq(stations.code, filter.stationCode) : undefined,
+        filter.unitIds ? inArray(units.id, [...filter.unitIds]) : undefined,
       ),
     )
     .orderBy(desc(runs.startedAt))

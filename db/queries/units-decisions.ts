@@ -1,0 +1,69 @@
+import { and, desc, eq, inArray, isNull } from 'drizzle-orm';
+import type { Database, Transaction } from '@/db/client';
+import { dispositions } from '@/db/schema/dispositions';
+import { retestOrders } from '@/db/schema/retest-orders';
+import { runs } from '@/db/schema/runs';
+import { stations } from '@/db/schema/stations';
+import { units } from '@/db/schema/units';
+
+/** The unit, locked until the transaction ends, so that two people cannot decide at once. */
+export async function findUnitForUpdate(tx: Transaction, unitId: string): Promise<typeof units.$inferSelect | null> {
+  const [row] = await tx.select().from(units).where(eq(units.id, unitId)).for('update');
+  return row ?? null;
+}
+
+export async function insertDisposition(
+  tx: Transaction,
+  disposition: typeof dispositions.$inferInsert,
+): Promise<{ id: string }> {
+  const [row] = await tx.insert(dispositions).values(disposition).returning({ id: dispositions.id });
+  return row!;
+}
+
+export async function insertRetestOrder(
+  tx: Transaction,
+  order: typeof retestOrders.$inferInsert,
+): Promise<{ id: string }> {
+  const [row] = await tx.insert(retestOrders).values(order).returning({ id: retestOrders.id });
+  return row!;
+}
+
+export async function markScrapped(tx: Transaction, unitId: string, at: Date): Promise<void> {
+  await tx
+    .update(units)
+    .set({ scrappedAt: at })
+    .where(and(eq(units.id, unitId), isNull(units.scrappedAt)));
+}
+
+/** The newest production run that passed, with the printer of its station now. */
+export async function findNewestPass(
+  db: Database | Transaction,
+  unitId: string,
+): Promise<{ runId: string; printerId: string | null } | null> {
+  const [row] = await db
+    .select({ runId: runs.id, printerId: stations.printerId })
+    .from(runs)
+    .innerJoin(stations, eq(stations.id, runs.stationId))
+    .where(and(eq(runs.unitId, unitId), eq(runs.kind, 'production'), eq(runs.verdict, 'pass')))
+    .orderBy(desc(runs.attempt))
+    .limit(1);
+  return row ?? null;
+}
+
+/** Boards of which somebody must decide: the newest run was rejected or gave no verdict. Unit ids, newest run first. */
+export async function listUnitsAwaitingDecision(db: Database | Transaction, most: number): Promise<string[]> {
+  const newest = db
+    .selectDistinctOn([runs.unitId], { unitId: runs.unitId, verdict: runs.verdict, endedAt: runs.endedAt })
+    .from(runs)
+    .where(eq(runs.kind, 'production'))
+    .orderBy(runs.unitId, desc(runs.attempt))
+    .as('newest');
+  const rows = await db
+    .select({ unitId: newest.unitId })
+    .from(newest)
+    .innerJoin(units, eq(units.id, newest.unitId))
+    .where(and(inArray(newest.verdict, ['reject', 'no-verdict']), isNull(units.scrappedAt)))
+    .orderBy(desc(newest.endedAt))
+    .limit(most);
+  return rows.map((row) => row.unitId!);
+}
