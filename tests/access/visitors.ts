@@ -8,6 +8,12 @@ import { enrolmentCookie } from '@/server/auth/enrolment-cookie';
 import { hashToken, makeToken } from '@/server/auth/secret-hash';
 import { insertAccount, insertStation } from '../database/records';
 
+export interface TestVisitors {
+  visitors: TestVisitor[];
+  /** Where the enrolled bench stands. */
+  station: { id: string; code: string };
+}
+
 export interface TestVisitor {
   name: string;
   visitor: Visitor;
@@ -16,7 +22,7 @@ export interface TestVisitor {
 }
 
 /** Nobody, a browser enrolled at a bench, an account without roles, and one account for each role. */
-export async function makeVisitors(db: Database): Promise<TestVisitor[]> {
+export async function makeVisitors(db: Database): Promise<TestVisitors> {
   const admin = await insertAccount(db, ['administrator']);
   const station = await insertStation(db);
   const token = makeToken();
@@ -38,7 +44,7 @@ export async function makeVisitors(db: Database): Promise<TestVisitor[]> {
     };
   }
 
-  return [
+  const visitors: TestVisitor[] = [
     { name: 'nobody', visitor: { roles: null, enrolledBench: false }, cookies: async () => ({}) },
     {
       name: 'an enrolled bench',
@@ -48,4 +54,5 @@ export async function makeVisitors(db: Database): Promise<TestVisitor[]> {
     await withRoles('an account without roles', []),
     ...(await Promise.all(roles.map((role) => withRoles(role, [role])))),
   ];
+  return { visitors, station };
 }

@@ -29,7 +29,7 @@ let open: TemporaryDatabase;
 let visitors: TestVisitor[];
 beforeAll(async () => {
   open = await temporaryDatabase();
-  visitors = await makeVisitors(open.db);
+  ({ visitors } = await makeVisitors(open.db));
 });
 afterAll(() => open.close());
 
