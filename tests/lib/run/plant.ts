@@ -26,6 +26,8 @@ export interface PlantOptions {
   /** Screw position at the start; near the middle of the demo types when absent. */
   startTripVolts?: number;
   hasController?: boolean;
+  /** Width of an interruption as achieved, against the one asked for. */
+  pulseShare?: number;
   /** Parts that differ from the nominal ones. */
   parts?: Partial<BoardDesign>;
 }
@@ -52,9 +54,11 @@ export class Plant {
   private readonly defect: DefectKind;
   private readonly offsetVolts: number;
   private readonly boardType: BoardType;
+  private readonly pulseShare: number;
 
   constructor(options: PlantOptions) {
     this.boardType = options.boardType;
+    this.pulseShare = options.pulseShare ?? 1;
     this.random = seeded(options.seed);
     this.defect = options.defect ?? 'none';
     this.offsetVolts = 0.002 * normal(this.random);
@@ -221,7 +225,7 @@ export class Plant {
         const before = this.setVolts;
         this.switchAt(before * droop);
         this.switchAt(before);
-        return { ...at(50), kind: 'pulsed', seconds: effect.seconds * 1.01 };
+        return { ...at(50), kind: 'pulsed', seconds: effect.seconds * this.pulseShare };
       }
       case 'wait':
         return { ...at(effect.milliseconds), kind: 'waited' };

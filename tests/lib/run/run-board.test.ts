@@ -112,3 +112,16 @@ describe('a board that fails', () => {
     expect(result).toMatchObject({ verdict: 'reject', rejectReason: 'operator-check-failed' });
   });
 });
+
+describe('an interruption shorter than asked for', () => {
+  it('proves nothing about the board: no verdict, whatever the output did', () => {
+    const { result } = playBoard(planFor('CB1210'), { seed: 11, pulseShare: 0.97 });
+    expect(result).toMatchObject({ verdict: 'no-verdict', noVerdictReason: 'fixture-fault', faultCode: 'F-105' });
+  });
+  it('by some microseconds is allowed for', () => {
+    const { result } = playBoard(planFor('CB1210'), { seed: 11, pulseShare: 0.9995 });
+    expect(result.verdict).toBe('pass');
+    const ridden = result.measurements.find((m) => m.quantity === 'ride-through-seconds')!;
+    expect(ridden.value).toBeGreaterThanOrEqual(0.01);
+  });
+});
