@@ -100,3 +100,9 @@ export async function listPeople(db: Database): Promise<PersonRow[]> {
     .leftJoin(trained, eq(trained.accountId, accounts.id))
     .orderBy(asc(accounts.name));
 }
+
+/** Some working administrator; null before the first one is made. */
+export async function findAdministrator(db: Database): Promise<Account | null> {
+  const working = and(isNull(accounts.disabledAt), sql`'administrator' = any(${accounts.roles})`);
+  return (await db.query.accounts.findFirst({ where: working, orderBy: accounts.createdAt })) ?? null;
+}

@@ -1,11 +1,6 @@
 import type { Cancel, Clock } from './clock';
 import { sleepOn } from './sleep-on';
-
-interface Timer {
-  atMs: number;
-  order: number;
-  run: () => void;
-}
+import { TimerQueue } from './timer-queue';
 
 /**
  * Discrete-event time: jumps to the next timer once nothing else is runnable. Promises and `nextTick` (all that streams
@@ -14,12 +9,10 @@ interface Timer {
  */
 export class VirtualClock implements Clock {
   private nowMs = 0;
-  private order = 0;
   private quietTurns = 0;
   private pumping = false;
   private holds = 0;
-  /** Latest first, so that the next one is popped from the end. */
-  private readonly timers: Timer[] = [];
+  private readonly timers = new TimerQueue();
 
   constructor(private readonly options: { startWallMs: number; idleTurns: number } = defaults) {}
 
@@ -32,14 +25,10 @@ export class VirtualClock implements Clock {
   }
 
   after(ms: number, run: () => void): Cancel {
-    const timer: Timer = { atMs: this.nowMs + Math.max(0, ms), order: this.order++, run };
-    this.timers.splice(this.indexOf(timer), 0, timer);
+    const cancel = this.timers.add(this.nowMs + Math.max(0, ms), run);
     this.quietTurns = 0;
     this.pump();
-    return () => {
-      const index = this.indexOf(timer);
-      if (this.timers[index] === timer) this.timers.splice(index, 1);
-    };
+    return cancel;
   }
 
   sleep(ms: number, signal?: AbortSignal): Promise<void> {
@@ -58,21 +47,8 @@ export class VirtualClock implements Clock {
     }
   }
 
-  /** Where `timer` stands, or belongs, in the order latest first. */
-  private indexOf(timer: Timer): number {
-    let low = 0;
-    let high = this.timers.length;
-    while (low < high) {
-      const middle = (low + high) >> 1;
-      const other = this.timers[middle]!;
-      if (other.atMs > timer.atMs || (other.atMs === timer.atMs && other.order > timer.order)) low = middle + 1;
-      else high = middle;
-    }
-    return low;
-  }
-
   private pump(): void {
-    if (this.pumping || this.holds > 0 || this.timers.length === 0) return;
+    if (this.pumping || this.holds > 0 || this.timers.size === 0) return;
     this.pumping = true;
     setImmediate(this.turn);
   }

@@ -1,9 +1,13 @@
 import type { Surface } from '../surface';
 
 export const benchSurface: Surface = {
-  pages: {},
+  pages: {
+    '/bench': 'public',
+  },
   handlers: {},
-  actions: {},
+  actions: {
+    'app/(bench)/bench/actions.ts#standAtDemoBench': 'public',
+  },
   events: {
     'server/live/gateway.ts#command': 'enrolled-bench',
     'server/live/gateway.ts#hands': 'enrolled-bench',

@@ -28,7 +28,51 @@ describe('ScaledClock', () => {
     expect(Math.abs(new ScaledClock(100).wallTimeMs() - Date.now())).toBeLessThan(50);
   });
 
+  it('serves a near timer at once though a far one was set before', async () => {
+    const clock = new ScaledClock(1);
+    const far = new AbortController();
+    const sleeping = clock.sleep(60_000, far.signal).catch(() => undefined);
+    await new Promise((resolve) => setTimeout(resolve, 5));
+    const before = performance.now();
+    await clock.sleep(2);
+    expect(performance.now() - before).toBeLessThan(18);
+    far.abort();
+    await sleeping;
+  });
+
+  it('fires timers in order after a stall of the machine, none early', async () => {
+    const clock = new ScaledClock(20);
+    const heard: number[] = [];
+    const start = clock.now();
+    for (const ms of [400, 100, 250]) clock.after(ms, () => heard.push(Math.round(clock.now() - start)));
+    const until = performance.now() + 80;
+    while (performance.now() < until);
+    await clock.sleep(600);
+    expect(heard).toEqual([100, 250, 400]);
+  });
+
   it('refuses a factor that is not above zero', () => {
     expect(() => new ScaledClock(0)).toThrow(RangeError);
+  });
+});
+
+describe('ScaledClock on a busy machine', () => {
+  it('lets an answer that comes before the deadline be heard before it, however long the machine was away', async () => {
+    const clock = new ScaledClock(20);
+    const heard: string[] = [];
+    clock.after(200, () => heard.push('deadline'));
+    clock.after(20, () => void Promise.resolve().then(() => clock.after(20, () => heard.push('answer'))));
+    const until = performance.now() + 100;
+    while (performance.now() < until);
+    await clock.sleep(400);
+    expect(heard).toEqual(['answer', 'deadline']);
+  });
+
+  it('does not count what the machine spent elsewhere', () => {
+    const clock = new ScaledClock(20);
+    const before = clock.now();
+    const until = performance.now() + 300;
+    while (performance.now() < until);
+    expect(clock.now() - before).toBeLessThan(300 * 20);
   });
 });
