@@ -37,7 +37,8 @@ export function dialShape(turns: number, sense: Sense, labelled: boolean): DialS
   const pitch = small ? 0 : Math.min(64, (bezel - (many ? 38 : 50) - inner) / Math.max(turns, 1.2));
   const thick = many ? pitch * 0.6 : 46;
   const thin = many ? pitch * 0.34 : small ? 46 : 18;
-  const headWidth = many ? pitch * 0.72 : thick * 1.08;
+  const room = bezel - inner - pitch * turns - 2;
+  const headWidth = Math.min(many ? pitch * 0.72 : thick * 1.08, room);
   return {
     bezel,
     screw,
