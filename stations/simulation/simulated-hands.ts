@@ -49,6 +49,7 @@ export class SimulatedHands {
 
   view(): HandsView {
     const { fixture, ports } = this.options.bench;
+    fixture.advance();
     const board = fixture.seated;
     return {
       boardSerial: this.serial,

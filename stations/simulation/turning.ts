@@ -8,14 +8,17 @@ interface Screw {
   clock: Clock;
 }
 
-/** Turns a second: brisk, and slowly towards the second beep. A single-turn part is turned by degrees. */
+/** Turns a second: brisk, and slowly towards the second beep or the dial's end mark. A single-turn part is turned by degrees. */
 const paceOf = (travelTurns: number) =>
   travelTurns > 1 ? { brisk: 0.5, slow: 0.1 } : { brisk: 30 / 360, slow: 10 / 360 };
 const freeTurnsPerSecond = 1;
 /** From the beep to the hand standing still. */
-const reaction = { meanMs: 200, sdMs: 40 };
+const reaction = { meanMs: 200, sdMs: 40, leastMs: 80 };
 /** About as asked: a few per cent, plus a few degrees. */
 const turnError = { relative: 0.03, turns: 4 / 360 };
+/** Where a hand that follows the dial slows down and lets go, in seconds of turning at the brisk and at the slow pace. */
+const easeSeconds = 0.6;
+const letGoSeconds = 0.15;
 const watchEveryMs = 20;
 const patienceMs = 60_000;
 
@@ -27,8 +30,8 @@ export async function turnScrew({ fixture, clock }: Screw, turns: number): Promi
 }
 
 /**
- * Does what the screen asks as a person does: a stated turn with a person's error, or towards a beep until the screen
- * says it came, plus the time to react.
+ * Does what the screen asks as a person does: towards a beep until the screen says it came, plus the time to react; after
+ * a dial that counts down until it shows the end; or, where the dial stands still, a stated turn with a person's error.
  */
 export async function turnAsPrompted(
   job: Screw & { random: Random; prompt(): TrimView | null; onMove(): void },
@@ -37,23 +40,33 @@ export async function turnAsPrompted(
   const asked = prompt();
   const board = fixture.seated;
   if (!asked?.direction || !board) return;
-  const { stage } = asked;
+  const { stage, direction } = asked;
   const listening = stage === 'beep-1' || stage === 'beep-2';
-  const pace = paceOf(board.truth.trimmer.turns);
-  const turnsPerSecond = (stage === 'beep-2' ? pace.slow : pace.brisk) * (1 + 0.1 * random.normal());
-  const wanted = (asked.turns ?? 0) * (1 + turnError.relative * random.normal()) + turnError.turns * random.normal();
-  const turns = listening ? board.truth.trimmer.turns * 2 : Math.max(0, wanted);
-  const way = asked.direction === 'clockwise' ? 1 : -1;
+  const { brisk, slow } = paceOf(board.truth.trimmer.turns);
+  const way = direction === 'clockwise' ? 1 : -1;
+  const haste = 1 + 0.1 * random.normal();
+  const estimate = (asked.turns ?? 0) * (1 + turnError.relative * random.normal()) + turnError.turns * random.normal();
+  const farthest = board.truth.trimmer.turns * 2;
+  const isLive = (view: TrimView) => !listening && view.liveTripVolts !== null && view.turns !== null;
 
-  fixture.startTurning(way * turns, turnsPerSecond);
-  const doneAt = clock.now() + Math.min(patienceMs, (turns / turnsPerSecond) * 1000);
+  let pace = (stage === 'beep-2' ? slow : brisk) * haste;
+  const turns = listening || isLive(asked) ? farthest : Math.max(0, estimate);
+  fixture.startTurning(way * turns, pace);
+  const doneAt = clock.now() + Math.min(patienceMs, (turns / pace) * 1000);
   while (clock.now() < doneAt) {
     await clock.sleep(Math.min(watchEveryMs, doneAt - clock.now()));
     onMove();
-    const now = prompt();
-    if (now?.stage === stage && now.direction === asked.direction) continue;
-    await clock.sleep(Math.max(80, reaction.meanMs + reaction.sdMs * random.normal()));
-    break;
+    const view = prompt();
+    if (view?.stage !== stage || view.direction !== direction) {
+      await clock.sleep(Math.max(reaction.leastMs, reaction.meanMs + reaction.sdMs * random.normal()));
+      break;
+    }
+    if (!isLive(view)) continue;
+    if (view.turns! < slow * letGoSeconds) break;
+    if (pace > slow * haste && view.turns! < brisk * easeSeconds) {
+      pace = slow * haste;
+      fixture.startTurning(way * farthest, pace);
+    }
   }
   fixture.stopTurning();
 }
