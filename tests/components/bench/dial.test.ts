@@ -28,7 +28,8 @@ describe('the trim dial', () => {
           }
         },
       ),
-    , { numRuns: 40 });
+      { numRuns: 40 },
+    );
   });
 
   it('numbers whole turns, but not under the arrowhead', () => {
