@@ -91,10 +91,16 @@ export class ScreenInTest {
   /** One board from the box through a whole run. Returns its serial once the run is over. */
   async testNextBoard(): Promise<string> {
     await this.act({ kind: 'lid', closed: false });
-    if (this.hands?.boardSerial) await this.act({ kind: 'remove-board' });
+    if (this.hands?.boardSerial) {
+      const removed = await this.act({ kind: 'remove-board' });
+      if (!removed.ok) throw new Error(`remove-board: ${removed.code}`);
+      await this.until(({ hands }) => hands?.boardSerial === null);
+    }
     await this.until(({ view }) => view?.screen.kind === 'idle' || view?.screen.kind === 'run');
     await this.until(({ hands }) => hands?.nextSerial !== null);
-    await this.act({ kind: 'place-board' });
+    const placed = await this.act({ kind: 'place-board' });
+    if (!placed.ok) throw new Error(`place-board: ${placed.code}`);
+    await this.until(({ hands }) => hands?.boardSerial !== null);
     const serial = this.hands!.boardSerial!;
     let reply = await this.scan(serial);
     // The controller has to see the fixture empty first, which takes a poll.
