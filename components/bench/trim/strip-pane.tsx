@@ -20,7 +20,6 @@ export function StripPane({ trim }: { trim: TrimView }) {
     <div className="relative flex h-full">
       <svg
         viewBox="0 0 1080 734"
-        preserveAspectRatio="none"
         aria-hidden="true"
         className="absolute inset-0 h-full w-full max-[900px]:hidden"
       >
