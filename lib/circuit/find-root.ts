@@ -11,14 +11,15 @@ export function findRoot(f: (x: number) => number, low: number, high: number, to
   let [fa, fb] = [f(a), f(b)];
   if (fa === 0) return { kind: 'found', x: a };
   if (fb === 0) return { kind: 'found', x: b };
-  if (!(fa * fb < 0)) return { kind: 'notBracketed' };
+  // Signs, not products: a product of tiny values is zero.
+  if (Math.sign(fa) * Math.sign(fb) !== -1) return { kind: 'notBracketed' };
   let stale = 0;
   for (let step = 0; step < mostSteps; step++) {
     // Every fourth step halves the bracket, so that flat exponentials cannot stall it.
     const x = step % 4 === 3 ? (a + b) / 2 : (a * fb - b * fa) / (fb - fa);
     const fx = f(x);
     if (fx === 0 || Math.abs(b - a) <= tolerance) return { kind: 'found', x };
-    if (fx * fb < 0) {
+    if (Math.sign(fx) !== Math.sign(fb)) {
       [a, fa] = [b, fb];
       stale = 0;
     } else if (++stale > 1) fa /= 2;
