@@ -3,7 +3,8 @@ export interface Figure {
   name: string;
   /** What it shows, in a line. */
   title: string;
-  run(progress: (line: string) => void): Promise<FigureReport>;
+  /** `share` of the boards, 1 for the figure as published; less to try something out. */
+  run(progress: (line: string) => void, share: number): Promise<FigureReport>;
 }
 
 export type FigureRow = Record<string, string | number | null>;

@@ -22,19 +22,35 @@ async function timeCommands(baudRate: 9600 | 115200): Promise<CommandMs> {
   return times;
 }
 
-async function searchRow(row: SearchRow): Promise<SearchedOne[]> {
-  const jobs: SearchJob[] = [];
-  for (let from = 0; from < row.boards; from += boardsPerJob)
-    jobs.push({ row, seed, from, count: Math.min(boardsPerJob, row.boards - from), baudRate: 115200 });
-  const answers = new Map<number, SearchedOne[]>();
-  await runJobs<SearchJob, SearchAnswer>(worker, jobs, (job, answer) => answers.set(job.from, answer.boards));
-  return jobs.flatMap((job) => answers.get(job.from)!);
+/** Searches the boards of every row, calling back as each row is done. */
+async function searchRows(share: number, onRow: (row: SearchRow, boards: SearchedOne[]) => void): Promise<void> {
+  const jobs = rows.flatMap((row) => {
+    const boards = Math.ceil(row.boards * share);
+    return Array.from({ length: Math.ceil(boards / boardsPerJob) }, (_, i): SearchJob => {
+      const from = i * boardsPerJob;
+      return { row, seed, from, count: Math.min(boardsPerJob, boards - from), baudRate: 115200 };
+    });
+  });
+  const waiting = new Map(rows.map((row) => [row, jobs.filter((job) => job.row === row).length]));
+  const answers = new Map<SearchJob, SearchedOne[]>();
+  await runJobs<SearchJob, SearchAnswer>(worker, jobs, (job, answer) => {
+    answers.set(job, answer.boards);
+    const left = waiting.get(job.row)! - 1;
+    waiting.set(job.row, left);
+    if (left === 0) {
+      const own = jobs.filter((each) => each.row === job.row);
+      onRow(
+        job.row,
+        own.flatMap((each) => answers.get(each)!),
+      );
+    }
+  });
 }
 
 export const search: Figure = {
   name: 'search',
   title: 'finding trip and release: settles, seconds and errors, against ramps and bisection, through the whole stack',
-  async run(progress) {
+  async run(progress, share) {
     const at9600 = await timeCommands(9600);
     const at115200 = await timeCommands(115200);
     const ms = (times: CommandMs) => `${round(times.settle, 1)} ms a settle, ${round(times.waypoint, 1)} a waypoint`;
@@ -43,12 +59,12 @@ export const search: Figure = {
     progress(`choosing a command: ${round(commandMs, 3)} ms median`);
 
     const summaries = new Map<SearchRow, ReturnType<typeof summarise>>();
-    for (const [i, row] of rows.entries()) {
-      const summary = summarise(row, await searchRow(row), at9600, at115200);
+    await searchRows(share, (row, boards) => {
+      const summary = summarise(row, boards, at9600, at115200);
       summaries.set(row, summary);
-      const { mean, check } = summary.columns;
-      progress(`${i + 1}/${rows.length} ${row.name}, noise ${row.noiseMillivolts} mV: ${mean} settles, check ${check}`);
-    }
+      const done = `${summaries.size}/${rows.length}`;
+      progress(`${done} ${row.name}, noise ${row.noiseMillivolts} mV: ${summary.columns.mean} settles`);
+    });
     const fine = summaries.get(targetRows.fine)!;
     const quick = summaries.get(targetRows.quick)!;
     const prior = summaries.get(targetRows.prior)!;

@@ -2,6 +2,7 @@ import { Worker } from 'node:worker_threads';
 
 /** Two cores are what a figure may count on. */
 const workers = 2;
+const entry = new URL('./worker-entry.mjs', import.meta.url);
 
 /**
  * Runs jobs in worker threads, each thread taking the next job when it is done with one. The worker module answers each
@@ -15,7 +16,7 @@ export async function runJobs<Job, Answer>(
   let next = 0;
   const work = () =>
     new Promise<void>((resolve, reject) => {
-      const worker = new Worker(module, { execArgv: ['--import', 'tsx'] });
+      const worker = new Worker(entry, { workerData: { module: module.href } });
       let job: Job;
       const give = () => {
         if (next >= jobs.length) return void worker.terminate().then(() => resolve());
