@@ -7,6 +7,9 @@ export const permissions = {
   /** Run, stop, print a label again, enter a serial by hand, call an engineer. */
   'test-boards': ['operator'],
 
+  /** One more label of a board that passed, from a desk. */
+  'print-labels': ['operator', 'test-engineer', 'quality-manager'],
+
   'edit-board-types': ['test-engineer'],
   'edit-sequences': ['test-engineer'],
   /** Another engineer, or quality; never the maker. */

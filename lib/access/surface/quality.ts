@@ -7,9 +7,15 @@ export const qualitySurface: Surface = {
     '/lots/[code]': 'signed-in',
     /** Printed for the bench, with the lot's barcode. */
     '/lots/[code]/sheet': 'signed-in',
+    '/units': 'signed-in',
+    '/units/[serial]': 'signed-in',
+    '/search': 'signed-in',
   },
   handlers: {
     'GET /api/lots/[code]': 'signed-in',
+    'GET /api/units/[serial]': 'signed-in',
+    /** All readings of a board as CSV. */
+    'GET /api/units/[serial]/readings': 'signed-in',
   },
   actions: {
     'app/(quality)/lots/actions.ts#checkLotSerialsAction': 'manage-lots',
@@ -18,6 +24,9 @@ export const qualitySurface: Surface = {
     'app/(quality)/lots/actions.ts#holdLotAction': 'hold-lots',
     'app/(quality)/lots/actions.ts#releaseLotAction': 'hold-lots',
     'app/(quality)/lots/actions.ts#recordComponentBatchAction': 'manage-lots',
+    'app/(quality)/units/actions.ts#signDispositionAction': 'sign-dispositions',
+    'app/(quality)/units/actions.ts#orderRetestAction': 'order-retests',
+    'app/(quality)/units/actions.ts#printLabelAgainAction': 'print-labels',
   },
   events: {},
 };

@@ -1,0 +1,20 @@
+import type { ComponentProps } from 'react';
+import { TextField } from '@/components/ui/text-field';
+
+/** Signing: the password once more. Enter does not sign; the button does. */
+export function SignatureField({
+  signer,
+  ...input
+}: Omit<ComponentProps<typeof TextField>, 'label'> & { signer: string }) {
+  return (
+    <TextField
+      {...input}
+      label={`Password of ${signer}`}
+      type="password"
+      autoComplete="current-password"
+      onKeyDown={(event) => {
+        if (event.key === 'Enter') event.preventDefault();
+      }}
+    />
+  );
+}

@@ -1,0 +1,188 @@
+'use client';
+
+import { useQuery } from '@tanstack/react-query';
+import Link from 'next/link';
+import { useState } from 'react';
+import { Button } from '@/components/ui/button';
+import { EmptyState } from '@/components/ui/empty-state';
+import { SerialStrip } from '@/components/ui/serial-strip';
+import { useToast } from '@/components/ui/toast';
+import { VerdictMark, type VerdictShape } from '@/components/ui/verdict-mark';
+import type { Outcome } from '@/lib/contracts/outcome';
+import type { UnitPage } from '@/lib/contracts/unit-page';
+import { fetchJson } from '../fetch-json';
+import { standingWords } from '../words';
+import { DispositionDialog, RetestDialog } from './decision-forms';
+import { RunBlock } from './run-block';
+import { UnitHistory } from './unit-history';
+import { UnitLabel } from './unit-label';
+import { UnitRails } from './unit-rails';
+
+interface UnitLiveProps {
+  initial: UnitPage;
+  signer: string;
+  may: { print: boolean; decide: boolean; order: boolean };
+  actions: Record<'print' | 'decide' | 'order', (input: unknown) => Promise<Outcome>>;
+}
+
+const refreshMs = 2_500;
+const moves = (unit: UnitPage) =>
+  unit.standing.kind === 'in-test' || unit.labels[0]?.state === 'waiting' || unit.labels[0]?.state === 'failed';
+
+/** Everything on record of one board; fetched again while it is in test or its label is on the way. */
+export function UnitLive({ initial, signer, may, actions }: UnitLiveProps) {
+  const toast = useToast();
+  const query = useQuery({
+    queryKey: ['unit', initial.serial],
+    queryFn: ({ signal }) => fetchJson<UnitPage>(`/api/units/${encodeURIComponent(initial.serial)}`, signal),
+    initialData: initial,
+    refetchInterval: ({ state }) => (state.data && moves(state.data) ? refreshMs : false),
+  });
+  const unit = query.data;
+  const [asking, setAsking] = useState<'decide' | 'order' | null>(null);
+  const [printing, setPrinting] = useState(false);
+  const { kind } = unit.standing;
+  const decidable = kind === 'needs-disposition' || kind === 'waits-for-quality' || kind === 'attempts-used';
+  const orderable = kind === 'passed' || kind === 'waits-for-quality';
+  const dialog = {
+    unitId: unit.id,
+    serial: unit.serial,
+    signer,
+    onClose: () => setAsking(null),
+    onDone: (said: string) => {
+      setAsking(null);
+      toast(said);
+      void query.refetch();
+    },
+  };
+
+  async function printAgain(): Promise<void> {
+    setPrinting(true);
+    const outcome = await actions.print({ unitId: unit.id }).catch(() => null);
+    setPrinting(false);
+    toast(
+      outcome?.ok ? 'One more label is on its way' : (outcome?.sentence ?? 'The server did not answer. Try again.'),
+    );
+    void query.refetch();
+  }
+
+  return (
+    <>
+      <header className="sw-screen-only mb-4 flex flex-wrap items-end justify-between gap-x-8 gap-y-3 border-b-2 border-ink pb-3">
+        <div className="flex flex-wrap items-baseline gap-x-7 gap-y-2">
+          <h1 className="text-[40px] leading-none max-sm:text-[26px]">
+            <SerialStrip serial={unit.serial} boardTypeCode={unit.boardTypeCode} />
+          </h1>
+          <Standing unit={unit} />
+          <span>
+            Lot{' '}
+            <Link className="sw-link font-num" href={`/lots/${encodeURIComponent(unit.lotCode)}`}>
+              {unit.lotCode}
+            </Link>
+            {unit.lotHeld ? ', on hold' : ''}
+          </span>
+        </div>
+        <div className="flex flex-wrap gap-3">
+          {may.order && orderable ? <Button onClick={() => setAsking('order')}>Test it again</Button> : null}
+          {may.decide && decidable ? (
+            <Button kind="filled" onClick={() => setAsking('decide')}>
+              Decide
+            </Button>
+          ) : null}
+          {unit.label ? <Button onClick={() => window.print()}>Print on this computer</Button> : null}
+          {unit.label && may.print ? (
+            <Button kind="filled" onClick={() => void printAgain()} pending={printing ? 'Sending' : null}>
+              Print label again
+            </Button>
+          ) : null}
+        </div>
+      </header>
+      <div className="grid items-start gap-x-9 gap-y-8 lg:grid-cols-[minmax(0,10fr)_minmax(0,21fr)_minmax(0,8fr)]">
+        <div className="sw-screen-only max-lg:max-w-[420px]">
+          <UnitRails unit={unit} />
+          <UncertaintyNote unit={unit} />
+        </div>
+        <div className="sw-screen-only">
+          {unit.runs.length === 0 ? (
+            <EmptyState title="Not tested yet.">
+              The first attempt appears here as soon as the board is scanned.
+            </EmptyState>
+          ) : (
+            <Runs unit={unit} />
+          )}
+        </div>
+        <aside>
+          <h2 className="sw-screen-only mb-1.5 font-bold">Label, 40 × 20 mm</h2>
+          <UnitLabel unit={unit} />
+          <div className="sw-screen-only">
+            <h2 className="mt-4 border-t-2 border-ink pt-2.5 font-bold">History</h2>
+            <UnitHistory unit={unit} />
+          </div>
+        </aside>
+      </div>
+      {asking === 'decide' ? (
+        <DispositionDialog {...dialog} attemptsUsed={kind === 'attempts-used'} sign={actions.decide} />
+      ) : null}
+      {asking === 'order' ? <RetestDialog {...dialog} order={actions.order} /> : null}
+    </>
+  );
+}
+
+function Runs({ unit }: { unit: UnitPage }) {
+  const longest = Math.max(
+    ...unit.runs.flatMap((run) => run.traces.map((trace) => (trace.atMs.at(-1) ?? 0) / 1000)),
+    1,
+  );
+  return (
+    <>
+      {unit.runs.map((run) => (
+        <RunBlock key={run.id} run={run} mostSeconds={longest} />
+      ))}
+      <p className="flex flex-wrap justify-between gap-4 border-t-2 border-ink pt-2 text-ink-2">
+        <span>▽ trip seen while trimming, ▼ ▲ recorded points</span>
+        <a className="sw-link" href={`/api/units/${encodeURIComponent(unit.serial)}/readings`} download>
+          Export the readings
+        </a>
+      </p>
+    </>
+  );
+}
+
+function Standing({ unit }: { unit: UnitPage }) {
+  const { kind } = unit.standing;
+  const decided = unit.runs.find((run) => run.verdict === 'pass' || run.verdict === 'reject');
+  const shape: VerdictShape | null =
+    kind === 'passed'
+      ? 'pass'
+      : kind === 'needs-disposition' || kind === 'scrapped' || kind === 'attempts-used'
+        ? 'reject'
+        : kind === 'waits-for-quality'
+          ? 'check'
+          : null;
+  const tone = shape === 'pass' ? 'text-pass' : shape === 'reject' ? 'text-reject' : '';
+  const words =
+    kind === 'passed'
+      ? `Passed on attempt ${decided?.attempt ?? 1}`
+      : kind === 'needs-disposition'
+        ? 'Rejected, needs a decision'
+        : kind === 'may-be-tested' && unit.runs.length > 0
+          ? 'To be tested again'
+          : standingWords[kind];
+  return (
+    <span className={`inline-flex items-center gap-2.5 text-lede font-bold ${tone}`}>
+      {shape ? <VerdictMark shape={shape} size={26} /> : null}
+      {words}
+    </span>
+  );
+}
+
+function UncertaintyNote({ unit }: { unit: UnitPage }) {
+  const measured = unit.runs
+    .flatMap((run) => run.measurements)
+    .find((m) => m.quantity === 'trip-volts' && m.phase === 'verified' && m.expandedUncertainty !== null);
+  if (!measured?.expandedUncertainty) return null;
+  const millivolts = Math.ceil(measured.expandedUncertainty * 10_000) / 10;
+  return (
+    <p className="mt-2 text-cap text-ink-2">Uncertainty of the trip point {millivolts.toFixed(1)} mV, about 95 %.</p>
+  );
+}

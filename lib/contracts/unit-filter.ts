@@ -1,0 +1,8 @@
+import { z } from 'zod';
+
+/** The query part of the address of the list of boards; anything unknown falls back to the first choice. */
+export const unitFilterSchema = z.object({
+  show: z.enum(['undecided', 'reject', 'no-verdict', 'pass', 'all']).catch('undecided'),
+  station: z.string().min(1).max(20).nullable().catch(null),
+});
+export type UnitFilter = z.infer<typeof unitFilterSchema>;
