@@ -10,7 +10,7 @@ import {
   type SupplyCommandSet,
 } from '../scpi/command-set';
 import { ScpiSession, type SessionWords } from '../scpi/scpi-session';
-import { scpiSync } from '../scpi/scpi-sync';
+import { scpiSync, scpiSyncByLines } from '../scpi/scpi-sync';
 import { simulateBench, type SimulatedBench } from '../simulation/simulated-bench';
 import type { FixtureController } from './fixture-controller';
 import { InstrumentError, type InstrumentName } from './instrument-error';
@@ -76,6 +76,7 @@ export async function openBench(config: BenchConfig, clock: Clock): Promise<Benc
 
   const sessions = new Map<InstrumentName, ScpiSession>();
   const open = async (instrument: InstrumentName, port: Port, words: SessionWords) => {
+    const sync = words.compound ? scpiSync : scpiSyncByLines;
     const serial = new SerialLink({
       instrument,
       path: port.path,

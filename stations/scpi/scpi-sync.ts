@@ -1,6 +1,8 @@
 import type { SyncWords } from '../link/sync-words';
 
+/** Requests in a row that differ from each other. */
 const distinct = 4;
+const onesOf = (n: number) => (n % distinct) + 2;
 
 /**
  * `*OPC?;*IDN?`, with more `*OPC?` each time: the answers `1;…`, `1;1;…` tell which request they belong to, so neither
@@ -8,7 +10,7 @@ const distinct = 4;
  * answer is arbitrary text (IEEE 488.2 10.14.3). The first starts with two, unlike any single answer.
  */
 export const scpiSync: SyncWords = (n) => {
-  const ones = (n % distinct) + 2;
+  const ones = onesOf(n);
   const start = '1;'.repeat(ones);
   return {
     message: `${'*OPC?;'.repeat(ones)}*IDN?`,
@@ -16,7 +18,25 @@ export const scpiSync: SyncWords = (n) => {
   };
 };
 
+/** The same line by line, for an instrument that takes one query a message: an identity after just so many ones. */
+export const scpiSyncByLines: SyncWords = (n) => {
+  const wanted = onesOf(n);
+  let ones = 0;
+  return {
+    message: `${'*OPC?\n'.repeat(wanted)}*IDN?`,
+    isAnswer(line) {
+      if (line === '1') {
+        ones++;
+        return false;
+      }
+      const answered = ones === wanted && isIdentity(line);
+      ones = 0;
+      return answered;
+    },
+  };
+};
+
 /** Manufacturer, model, serial number, firmware: four fields (IEEE 488.2 10.14). */
-export function isIdentity(text: string): boolean {
+function isIdentity(text: string): boolean {
   return text.split(',').length >= 4 && !text.startsWith('1;');
 }

@@ -1,7 +1,7 @@
 import { beforeEach, describe, expect, it } from 'vitest';
 import { VirtualClock } from '@/stations/clock/virtual-clock';
 import { SerialLink, type LinkState } from '@/stations/link/serial-link';
-import { scpiSync } from '@/stations/scpi/scpi-sync';
+import { scpiSync, scpiSyncByLines } from '@/stations/scpi/scpi-sync';
 import { ScpiInstrument, type CommandTable } from '@/stations/simulation/scpi-instrument';
 import { SimulatedPort } from '@/stations/simulation/simulated-binding';
 
@@ -19,7 +19,7 @@ let instrument: Counter;
 let port: SimulatedPort;
 let link: SerialLink;
 
-beforeEach(async () => {
+async function openLink(sync = scpiSync): Promise<void> {
   clock = new VirtualClock();
   instrument = new Counter(clock, 'MAKER,COUNTER,1,1');
   port = new SimulatedPort(instrument);
@@ -29,11 +29,13 @@ beforeEach(async () => {
     binding: port.binding,
     baudRate: 9600,
     clock,
-    sync: scpiSync,
+    sync,
     reopenDelaysMs: [100, 100, 100],
   });
   await link.open();
-});
+}
+
+beforeEach(() => openLink());
 
 describe('SerialLink', () => {
   it('sends one command at a time, in the order they were asked', async () => {
@@ -64,32 +66,6 @@ describe('SerialLink', () => {
     });
     expect(clock.now() - before).toBe(500);
     expect(await link.exchange('COUN?', 500)).toBe('3');
-  });
-
-  it.each([120, 480, 700, 900, 1500, 2400, 3600])(
-    'never takes an answer that is %i ms late for the answer to another command',
-    async (lateMs) => {
-      await link.exchange('COUN?', 1000);
-      instrument.spoil({ kind: 'late', count: 1, lateMs });
-      await link.exchange('COUN?', 100).catch(() => undefined);
-      while (clock.now() < lateMs + 2000) {
-        const text = `x${Math.round(clock.now())}`;
-        const answer = await link.exchange(`ECHO? ${text}`, 400).catch((error: { code: string }) => error.code);
-        expect([text, 'instrument-timeout']).toContain(answer);
-      }
-      expect(await link.exchange('ECHO? end', 400)).toBe('end');
-    },
-  );
-
-  it('never takes the late answer to a synchronisation for the answer to a later one', async () => {
-    await link.exchange('COUN?', 1000);
-    instrument.spoil({ kind: 'late', count: 3, lateMs: 1600 });
-    await link.exchange('COUN?', 100).catch(() => undefined);
-    await link.exchange('COUN?', 100).catch(() => undefined);
-    for (let i = 0; i < 10; i++) {
-      const answer = await link.exchange(`ECHO? y${i}`, 300).catch((error: { code: string }) => error.code);
-      expect([`y${i}`, 'instrument-timeout']).toContain(answer);
-    }
   });
 
   it('reports bytes that are no text as instrument-garbled and synchronises before the next command', async () => {
@@ -154,5 +130,38 @@ describe('SerialLink', () => {
     await expect(link.exchange('COUN?', 1000)).rejects.toMatchObject({ code: 'link-closed' });
     await clock.sleep(1000);
     expect(link.state).toBe('closed');
+  });
+});
+
+describe.each([
+  ['one message', scpiSync],
+  ['line by line', scpiSyncByLines],
+])('SerialLink synchronising by %s', (_name, sync) => {
+  beforeEach(() => openLink(sync));
+
+  it.each([120, 480, 700, 900, 1500, 2400, 3600])(
+    'never takes an answer that is %i ms late for the answer to another command',
+    async (lateMs) => {
+      await link.exchange('COUN?', 1000);
+      instrument.spoil({ kind: 'late', count: 1, lateMs });
+      await link.exchange('COUN?', 100).catch(() => undefined);
+      while (clock.now() < lateMs + 2000) {
+        const text = `x${Math.round(clock.now())}`;
+        const answer = await link.exchange(`ECHO? ${text}`, 400).catch((error: { code: string }) => error.code);
+        expect([text, 'instrument-timeout']).toContain(answer);
+      }
+      expect(await link.exchange('ECHO? end', 400)).toBe('end');
+    },
+  );
+
+  it('never takes the late answer to a synchronisation for the answer to a later one', async () => {
+    await link.exchange('COUN?', 1000);
+    instrument.spoil({ kind: 'late', count: 3, lateMs: 1600 });
+    await link.exchange('COUN?', 100).catch(() => undefined);
+    await link.exchange('COUN?', 100).catch(() => undefined);
+    for (let i = 0; i < 10; i++) {
+      const answer = await link.exchange(`ECHO? y${i}`, 300).catch((error: { code: string }) => error.code);
+      expect([`y${i}`, 'instrument-timeout']).toContain(answer);
+    }
   });
 });
