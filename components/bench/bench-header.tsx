@@ -29,10 +29,10 @@ export function BenchHeader({ tools }: { tools?: ReactNode }) {
   const mono = (chunks: ReactNode) => <b className="font-num text-ink">{chunks}</b>;
   return (
     <header className="relative flex min-[900px]:h-36.5 items-start justify-between gap-8 px-12 pt-9 max-[900px]:flex-wrap max-[900px]:gap-3">
-      <div className="flex min-h-18 items-center gap-9">
+      <div className="flex min-h-18 items-center gap-9 max-[900px]:gap-5">
         <Mark size="calc(76 * var(--sw-b))" title="Sillwright" />
         {run ? (
-          <p className="text-b-serial leading-none [&_.text-ink-2]:text-[0.76em]">
+          <p className="text-b-serial leading-none max-[900px]:text-[calc(74*var(--sw-b))] [&_.text-ink-2]:text-[0.76em]">
             <SerialStrip serial={run.serial} boardTypeCode={lot?.boardTypeCode} />
           </p>
         ) : signedIn ? (

@@ -14,7 +14,10 @@ export function FindingBand({ finding, trim }: { finding: TrimFinding; trim: Tri
     rounds: trim.round,
   });
   return (
-    <div role="status" className="flex min-h-37.5 flex-none items-center gap-8 bg-attn px-12 py-3 text-on-attn">
+    <div
+      role="status"
+      className="flex min-h-37.5 flex-none items-center max-[900px]:flex-wrap gap-8 bg-attn px-12 py-3 text-on-attn"
+    >
       <BandTriangle size={110} />
       <Fitted text={t(`${finding}.title`)} most={98} width={540} as="h2" className="flex-none !font-extrabold" />
       <p className="text-b-line leading-tight font-bold">{fact}</p>

@@ -17,14 +17,14 @@ export function BeepFlood({ beep }: { beep: Beep }) {
       data-flood={beep}
       className="absolute inset-0 z-20 flex flex-col bg-accent text-on-accent [&_.text-ink-2]:text-on-accent"
     >
-      <div className="flex min-h-27 items-center gap-9 px-12 pt-9">
+      <div className="flex min-h-27 items-center gap-9 max-[900px]:gap-5 px-12 pt-9">
         <Mark size="calc(76 * var(--sw-b))" />
         {view.run && (
-          <p className="text-b-serial leading-none [&_.text-ink-2]:text-[0.76em]">
+          <p className="text-b-serial leading-none max-[900px]:text-[calc(74*var(--sw-b))] [&_.text-ink-2]:text-[0.76em]">
             <SerialStrip serial={view.run.serial} boardTypeCode={view.lot?.boardTypeCode} />
           </p>
         )}
-        <p className="ml-auto text-end text-b-label leading-[1.28]">
+        <p className="ml-auto text-end max-[900px]:hidden text-b-label leading-[1.28]">
           <b>{view.station.name}</b>, {view.station.fixture}
           <br />
           {view.lot && <b className="font-num">{view.lot.code}</b>}

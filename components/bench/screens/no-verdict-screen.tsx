@@ -42,7 +42,14 @@ export function NoVerdictScreen({ screen, run }: { screen: NoVerdictView; run: R
         <div className="flex min-h-75 flex-none items-center gap-12 bg-attn px-15 py-8 text-on-attn">
           <BandTriangle size={202} />
           <div className="min-w-0">
-            <Fitted as="h1" text={words(`${screen.reason}.title`)} most={140} width={860} className="!font-extrabold" />
+            <Fitted
+              as="h1"
+              text={words(`${screen.reason}.title`)}
+              most={140}
+              width={860}
+              narrow={520}
+              className="!font-extrabold"
+            />
             <p className="mt-4 text-[calc(40*var(--sw-b))] leading-tight font-bold">
               {screen.detail ? say(screen.detail) : words(`${screen.reason}.text`)}{' '}
               {screen.code && <span className="font-num">{screen.code}</span>}

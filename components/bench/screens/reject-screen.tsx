@@ -25,7 +25,7 @@ export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode:
               <rect width={200} height={200} fill="var(--sw-on-flood)" />
               <path d="M44 44l112 112M156 44 44 156" stroke="var(--sw-reject-flood)" strokeWidth={34} />
             </svg>
-            <Fitted as="h1" text={t('title')} most={224} width={860} className="!font-extrabold" />
+            <Fitted as="h1" text={t('title')} most={224} width={860} narrow={590} className="!font-extrabold" />
           </div>
           <div className="flex min-h-0 flex-1 gap-12 max-[900px]:flex-col">
             <div className="flex min-w-0 flex-1 flex-col">

@@ -18,11 +18,7 @@ export function StripPane({ trim }: { trim: TrimView }) {
   const note = live ? t('now') : trim.stage === 'beep-2' ? t('afterBeep1') : t('before');
   return (
     <div className="relative flex h-full">
-      <svg
-        viewBox="0 0 1080 734"
-        aria-hidden="true"
-        className="absolute inset-0 h-full w-full max-[900px]:hidden"
-      >
+      <svg viewBox="0 0 1080 734" aria-hidden="true" className="absolute inset-0 h-full w-full max-[900px]:hidden">
         <path d={`M${railsBox.tripX + 12} ${y}L669 76V670Z`} fill="var(--sw-sheet)" />
       </svg>
       <div className="relative h-full w-166.75 flex-none max-[900px]:w-[60%]">
