@@ -104,6 +104,7 @@ export function beginSearch(settings: SearchSettings, start: { volts: number; ou
     settings,
     supply: beginSupplyModel(settings.supplyMinVolts, settings.supplyMaxVolts),
     level: start.volts,
+    lastReading: null,
     output: start.output,
     sides,
     assumptions: 0,
@@ -130,15 +131,17 @@ export function observeSearch(state: SearchState, seen: SearchObservation): Sear
   if (command.kind === 'finished') return state;
   const armed = state.output === 'on' ? 'trip' : 'release';
   const sign = armed === 'trip' ? 1 : -1;
+  // The last reading still held some ring of its step; where none was taken since, the supply went on to its level.
+  const before = seen.voltsBefore === state.lastReading ? state.level : seen.voltsBefore;
   const learnt = learnSupplyLevel(state.supply, {
     setpoint: command.volts,
-    before: seen.voltsBefore,
+    before,
     reading: seen.volts,
     dwell: command.dwell,
   });
   const flipped = seen.output !== state.output;
   const probe: Probe = {
-    from: sign * seen.voltsBefore,
+    from: sign * before,
     to: sign * learnt.level,
     flipped,
     extraVariance: learnt.extraVariance,
@@ -161,6 +164,7 @@ export function observeSearch(state: SearchState, seen: SearchObservation): Sear
     ...state,
     supply: learnt.model,
     level: learnt.level,
+    lastReading: seen.volts,
     output: seen.output,
     sides: { ...sides, [armed]: updated },
     counts: {

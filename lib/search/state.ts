@@ -18,6 +18,8 @@ export interface SearchState {
   readonly supply: SupplyModel;
   /** Where the supply is believed to stand. */
   readonly level: number;
+  /** The meter's reading after the last command; null before the first. */
+  readonly lastReading: number | null;
   readonly output: OutputState;
   readonly sides: Pair<Side>;
   readonly assumptions: Level;

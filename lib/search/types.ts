@@ -34,7 +34,10 @@ export interface SearchSettings {
 export type SearchCommand =
   { kind: 'apply'; volts: number; dwell: 'settle' | 'waypoint' } | { kind: 'finished'; result: SearchResult };
 
-/** What was seen after a command: the meter's reading at the board before and after, and the output's state. */
+/**
+ * What was seen after a command: the meter's reading at the board before and after, and the output's state. `voltsBefore`
+ * is a reading taken just before the command, or the last observation's `volts` where none was.
+ */
 export interface SearchObservation {
   voltsBefore: number;
   volts: number;
@@ -47,6 +50,7 @@ export interface PointEstimate {
 }
 
 export interface SearchCounts {
+  /** Commands of the search, waypoints included, the end check apart. */
   settles: number;
   waypoints: number;
   endCheckSettles: number;
