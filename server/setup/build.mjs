@@ -56,5 +56,6 @@ export async function build() {
     sourcemap: true,
     logLevel: 'warning',
   });
+  await esbuild.stop();
   writeFileSync(stamp, made);
 }

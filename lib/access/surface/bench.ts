@@ -3,6 +3,7 @@ import type { Surface } from '../surface';
 export const benchSurface: Surface = {
   pages: {
     '/bench': 'public',
+    '/bench/[station]': 'bench',
   },
   handlers: {},
   actions: {
