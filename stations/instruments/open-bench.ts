@@ -76,14 +76,14 @@ export async function openBench(config: BenchConfig, clock: Clock): Promise<Benc
 
   const sessions = new Map<InstrumentName, ScpiSession>();
   const open = async (instrument: InstrumentName, port: Port, words: SessionWords) => {
-    const sync = words.compound ? scpiSync : scpiSyncByLines;
     const serial = new SerialLink({
       instrument,
       path: port.path,
       binding: port.binding,
       baudRate: link.baudRate,
       clock,
-      sync: scpiSync,
+      sync: words.compound ? scpiSync : scpiSyncByLines,
+      terminator: words.terminator,
     });
     const session = new ScpiSession(serial, words);
     sessions.set(instrument, session);

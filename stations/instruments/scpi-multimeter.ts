@@ -10,6 +10,7 @@ const cycleMs = 20;
 export class ScpiMultimeter implements Multimeter {
   private closed: Channel | null = null;
   private cycles: number | null = null;
+  private turn: Promise<unknown> = Promise.resolve();
 
   constructor(
     private readonly session: ScpiSession,
@@ -32,7 +33,14 @@ export class ScpiMultimeter implements Multimeter {
     await this.session.command(configure);
   }
 
-  async readVolts(channel: Channel, integrationCycles: number): Promise<number> {
+  /** Readings take turns: a relay closed for one must not move before it is read. */
+  readVolts(channel: Channel, integrationCycles: number): Promise<number> {
+    const reading = this.turn.then(() => this.read(channel, integrationCycles));
+    this.turn = reading.catch(() => undefined);
+    return reading;
+  }
+
+  private async read(channel: Channel, integrationCycles: number): Promise<number> {
     const { setIntegrationCycles, closeChannel, relaySettleMs, read } = this.commands;
     try {
       if (this.cycles !== integrationCycles) {

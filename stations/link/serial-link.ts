@@ -12,6 +12,8 @@ export interface LinkOptions {
   binding: Binding;
   clock: Clock;
   sync: SyncWords;
+  /** What ends a line sent. A received line may end with either. */
+  terminator: '\n' | '\r\n';
   /** Waits before each attempt to reopen after an unplug; after the last one the link is lost. */
   reopenDelaysMs?: readonly number[];
 }
@@ -62,15 +64,22 @@ export class SerialLink {
     return () => this.watchers.delete(watcher);
   }
 
+  /** Rejects with `link-lost` and is lost when the port cannot be opened; may be tried again. */
   async open(): Promise<void> {
-    await this.openPort();
+    try {
+      await this.openPort();
+    } catch (error) {
+      this.become('lost');
+      throw error;
+    }
     this.become('open');
   }
 
   /** Sends a line and resolves with the line that answers it. */
   exchange(message: string, deadlineMs: number): Promise<string> {
     return this.inTurn(async () => {
-      if (this.suspect) await this.synchronise();
+      // Half a line means that the rest of something late is still on its way.
+      if (this.lines.clear() || this.suspect) await this.synchronise();
       return this.transfer(message, deadlineMs, () => true);
     });
   }
@@ -100,7 +109,6 @@ export class SerialLink {
   }
 
   private async transfer(message: string, deadlineMs: number, isAnswer: (line: string) => boolean): Promise<string> {
-    if (this.lines.clear()) this.suspect = true;
     const { clock } = this.options;
     return new Promise<string>((resolve, reject) => {
       const cancel = clock.after(deadlineMs, () =>
@@ -126,7 +134,7 @@ export class SerialLink {
     const { port } = this;
     if (this.current !== 'open' || !port?.isOpen) return Promise.reject(this.lost());
     return new Promise((resolve, reject) => {
-      port.write(`${message}\n`, 'latin1', (error) => (error ? reject(this.lost()) : resolve()));
+      port.write(message + this.options.terminator, 'latin1', (error) => (error ? reject(this.lost()) : resolve()));
     });
   }
 

@@ -11,6 +11,8 @@ const session = z.object({
   nextError: message,
   /** Whether a command and the error query may share one message. */
   compound: z.boolean(),
+  /** What ends a line sent to it. */
+  terminator: z.enum(['\n', '\r\n']).default('\n'),
   deadlineMs: z.number().positive().max(30_000),
   identify: message,
 });

@@ -10,6 +10,7 @@ export interface SessionWords {
   nextError: string;
   /** Whether a command and the error query may share one message, which saves a turn-around. */
   compound: boolean;
+  terminator: '\n' | '\r\n';
   deadlineMs: number;
 }
 
@@ -17,14 +18,14 @@ const mostQueuedErrors = 30;
 
 /** SCPI over a link: queries, and commands whose errors are read back at once. */
 export class ScpiSession {
-  private opened = false;
+  private opening: Promise<void> | null = null;
 
   constructor(
     readonly link: SerialLink,
     readonly words: SessionWords,
   ) {
     link.watch((state) => {
-      if (state !== 'open') this.opened = false;
+      if (state !== 'open') this.opening = null;
     });
   }
 
@@ -112,12 +113,15 @@ export class ScpiSession {
   }
 
   private async openSession(): Promise<void> {
-    if (this.opened) return;
-    this.opened = true;
+    const { opening } = this.words;
+    if (opening.length === 0) return;
+    this.opening ??= (async () => {
+      for (const message of opening) await this.commandOnly(message);
+    })();
     try {
-      for (const message of this.words.opening) await this.commandOnly(message);
+      await this.opening;
     } catch (error) {
-      this.opened = false;
+      this.opening = null;
       throw error;
     }
   }

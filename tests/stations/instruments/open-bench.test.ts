@@ -66,7 +66,15 @@ describe('a simulated bench', () => {
     await clock.sleep(500);
     const { path, binding } = bench.simulation!.ports.meter;
     await bench.close();
-    const serial = new SerialLink({ instrument: 'meter', path, binding, baudRate: 115_200, clock, sync: scpiSync });
+    const serial = new SerialLink({
+      instrument: 'meter',
+      path,
+      binding,
+      baudRate: 115_200,
+      clock,
+      sync: scpiSync,
+      terminator: '\n',
+    });
     await serial.open();
     const commands = knownCommandSets.meter[defaultCommandSet]!;
     const read = async (relaySettleMs: number) => {
@@ -76,6 +84,18 @@ describe('a simulated bench', () => {
     };
     expect(Math.abs((await read(commands.relaySettleMs)) - board.referenceVolts(11))).toBeLessThan(0.005);
     expect(Math.abs((await read(0)) - board.referenceVolts(11))).toBeGreaterThan(0.02);
+  });
+
+  it('keeps readings of two channels apart when they are asked for at once', async () => {
+    await energise(11);
+    const [first, second, third] = await Promise.all([
+      bench.meter.readVolts(101, 1),
+      bench.meter.readVolts(103, 1),
+      bench.meter.readVolts(101, 0.2),
+    ]);
+    expect(first).toBeCloseTo(11, 1);
+    expect(second).toBeCloseTo(board.referenceVolts(11), 2);
+    expect(third).toBeCloseTo(11, 1);
   });
 
   it('overshoots on every step by a few per cent, which a later reading no longer shows', async () => {
@@ -160,7 +180,7 @@ describe('openBench', () => {
       ['meter', false],
       ['controller', true],
     ]);
-    expect(health[1]!.problem).toMatch(/meter/);
+    expect(health[1]).toMatchObject({ state: 'lost', problem: expect.stringMatching(/meter is no longer connected/) });
     simulation!.ports.meter.setPlugged(true);
     await bench.reopen();
     expect((await bench.health())[1]).toMatchObject({ state: 'open', problem: null });

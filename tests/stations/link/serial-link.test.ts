@@ -30,6 +30,7 @@ async function openLink(sync = scpiSync): Promise<void> {
     baudRate: 9600,
     clock,
     sync,
+    terminator: '\n',
     reopenDelaysMs: [100, 100, 100],
   });
   await link.open();
@@ -87,6 +88,14 @@ describe('SerialLink', () => {
     instrument.spoil({ kind: 'cut-short', count: 1 });
     await expect(link.exchange('ECHO? abcdef', 500)).rejects.toMatchObject({ code: 'instrument-timeout' });
     expect(await link.exchange('ECHO? whole', 500)).toBe('whole');
+  });
+
+  it('never puts the rest of a late line in front of, or for, an answer', async () => {
+    await link.exchange('COUN?', 1000);
+    instrument.babble(Buffer.from('+1.2345'));
+    await clock.sleep(10);
+    clock.after(1, () => instrument.babble(Buffer.from('678E+00\n')));
+    expect(await link.exchange('ECHO? mine', 500)).toBe('mine');
   });
 
   it('fails the outstanding command with link-lost as soon as the cable is pulled', async () => {

@@ -19,7 +19,7 @@ class Device extends ScpiInstrument {
   };
 }
 
-const words: SessionWords = { opening: [], nextError: 'SYST:ERR?', compound: true, deadlineMs: 500 };
+const words: SessionWords = { opening: [], nextError: 'SYST:ERR?', compound: true, terminator: '\n', deadlineMs: 500 };
 let clock: VirtualClock;
 let device: Device;
 let port: SimulatedPort;
@@ -36,6 +36,7 @@ async function open(changed: Partial<SessionWords> = {}): Promise<void> {
     baudRate: 115_200,
     clock,
     sync: scpiSync,
+    terminator: '\n',
   });
   await link.open();
   session = new ScpiSession(link, { ...words, ...changed });
@@ -79,6 +80,12 @@ describe('ScpiSession', () => {
     await clock.sleep(500);
     await session.queryNumber('READ?');
     expect(device.heard).toEqual(['remote', 'remote']);
+  });
+
+  it('sends nothing before all opening commands are through, however many ask at once', async () => {
+    await open({ opening: ['SYST:REM', 'VAL 7'] });
+    await Promise.all([session.command('VAL 1'), session.command('VAL 2')]);
+    expect(device.heard).toEqual(['remote', 'value 7', 'value 1', 'value 2']);
   });
 
   it('asks once more after a garbled answer, and gives up after the second', async () => {
