@@ -86,6 +86,20 @@ function settle(state: SearchState, startOver: Pair<boolean>): SearchState {
 }
 
 /**
+ * The joint threshold search. Trip is only found from the ON side, falling, and release from the OFF side, rising; so the
+ * supply alternates, and every command is chosen for the most information per settle (greedy maximisation of mutual
+ * information, the Bayesian form of probabilistic bisection), waypoints and the way back included.
+ *
+ * - Each threshold has a posterior of its own on a grid, by overshoot as a nuisance parameter (`grid-posterior.ts`).
+ * - A large step toward an armed threshold undershoots and trips falsely: 5 % of 1 V is 50 mV. Waypoints are therefore
+ *   part of the plan (`plan-move.ts`); without regard to overshoot bisection misjudges nearly every board.
+ * - Ranges, coupling and lot prior only speed it up and are dropped on evidence (`level-drop.ts`).
+ * - The meter's reading is the value; the supply's own errors are learnt on the way (`supply-level.ts`).
+ * - A result is told only after its end check (`end-check.ts`).
+ *
+ * Bounds (own study, simulation): telling 3000 x 1300 cells of 1 mV takes 21.9 settles of one bit; with 1 mV of noise an
+ * ideal supply needs 30 settles for 0.5 mV.
+ *
  * Begins a search from where the supply stands. `start.volts` is the meter's reading at the board, or the setpoint
  * when there is none; `start.output` the output's state there.
  */

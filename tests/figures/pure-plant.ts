@@ -13,7 +13,6 @@ export interface PurePlantOptions {
   waypointMs?: number;
   /** Time between a reading and the next step, in which the supply goes on settling. */
   linkMs?: number;
-  carryVelocity?: boolean;
   offsetVolts?: number;
   gain?: number;
   resolutionVolts?: number;
@@ -57,7 +56,7 @@ export class PurePlant implements Plant {
     const s = Math.sin(turn);
     let y = this.volts - this.level;
     // (y, z) turns by a fixed angle and shrinks each millisecond; z is the quadrature of the ring.
-    let z = ((options.carryVelocity === false ? 0 : this.velocity) + decay * y) / turn;
+    let z = (this.velocity + decay * y) / turn;
     let reading = 0;
     const readAt = dwell === 'settle' ? (options.settleMs ?? 40) : (options.waypointMs ?? 30);
     for (let i = 1; i <= readAt + (options.linkMs ?? 10); i++) {
