@@ -1,7 +1,5 @@
-import { createReadStream } from 'node:fs';
-import { mkdir, open, readdir, rm, type FileHandle } from 'node:fs/promises';
+import { mkdir, open, readdir, readFile, rm, type FileHandle } from 'node:fs/promises';
 import { join } from 'node:path';
-import { createInterface } from 'node:readline';
 import type { EventBatch, RunRecord } from '../operations/runs/run-record';
 
 type Line = { batch: EventBatch } | { close: Omit<RunRecord, 'runId' | 'batches'> };
@@ -35,7 +33,7 @@ export class Journal {
 
   async read(runId: string): Promise<JournalledRun> {
     const run: JournalledRun = { runId, batches: [], ending: null };
-    for await (const text of createInterface({ input: createReadStream(this.pathOf(runId)) })) {
+    for (const text of (await readFile(this.pathOf(runId), 'utf8')).split('\n')) {
       const line = parse(text);
       if (!line) break;
       if ('batch' in line) run.batches.push(line.batch);

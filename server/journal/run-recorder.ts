@@ -19,6 +19,7 @@ const gatherMs = 200;
  */
 export class RunRecorder {
   private readonly open = new Set<string>();
+  private storing: Promise<number> | null = null;
 
   constructor(
     private readonly db: Database,
@@ -31,8 +32,13 @@ export class RunRecorder {
     return new RecordedRun(plan.runId, this.db, this.journal, this.log, () => this.open.delete(plan.runId));
   }
 
-  /** Stores every ended run that only the journal has. Rejects while the database is away. */
-  async storeEnded(): Promise<number> {
+  /** Stores every ended run that only the journal has; how many. Rejects while the database is away. */
+  storeEnded(): Promise<number> {
+    this.storing ??= this.storeAllEnded().finally(() => (this.storing = null));
+    return this.storing;
+  }
+
+  private async storeAllEnded(): Promise<number> {
     let stored = 0;
     for (const { runId, batches, ending } of await this.journal.list()) {
       if (this.open.has(runId) || !ending) continue;
