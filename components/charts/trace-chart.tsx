@@ -15,8 +15,8 @@ interface TraceChartProps {
   mostSeconds?: number;
 }
 
-const width = 560;
-const height = 270;
+const width = 440;
+const height = 320;
 const margin = { top: 10, right: 14, bottom: 28, left: 38 };
 
 /** Supply at the board over time: limits as bands, hollow marks where the output changed, solid ones at the recorded points. */
@@ -57,7 +57,7 @@ export function TraceChart({ traces, limits, tripVolts, releaseVolts, label, mos
           })
         : null}
       <VoltAxis ticks={y.ticks(6)} y={y} />
-      <TimeAxis ticks={x.ticks(width > 400 ? 10 : 5)} labelled={x.ticks(5)} x={x} />
+      <TimeAxis ticks={x.ticks(width > 400 ? 10 : 5)} labelled={x.ticks(4)} x={x} />
       <path d={path ?? ''} fill="none" stroke="var(--sw-ink)" strokeWidth={1.6} strokeLinejoin="round" />
       {marks.map((mark, i) => (
         <PointTriangle key={i} mark={mark} x={x(mark.seconds)} y={y(mark.volts)} />

@@ -24,8 +24,8 @@ export function joinTraces(traces: readonly TraceStretch[]): Reading[] {
 }
 
 /**
- * Where the output was seen to change while trimming, and both recorded points at the moment when the supply last came
- * nearest to them with the output changing; without such a change they are not drawn.
+ * Where the output was seen to go off while trimming, and both recorded points at the last change of the output, of the
+ * verification where there was one; without a change they are not drawn.
  */
 export function recordedPoints(
   readings: readonly Reading[],
@@ -45,12 +45,12 @@ export function recordedPoints(
       });
     before = reading;
   }
-  const trims = changes.filter(
-    (change) => change.side === 'trip' && readings.some((r) => r.kind === 'trim' && r.seconds === change.seconds),
-  );
+  const kindAt = (seconds: number) => readings.find((reading) => reading.seconds === seconds)?.kind;
+  const trims = changes.filter((change) => change.side === 'trip' && kindAt(change.seconds) === 'trim');
   const recordedAt = (side: RecordedPoint['side'], volts: number | null): RecordedPoint[] => {
     const crossed = changes.filter((change) => change.side === side);
-    const last = crossed.at(-1);
+    const verified = crossed.filter((change) => kindAt(change.seconds) === 'verify');
+    const last = (verified.length > 0 ? verified : crossed).at(-1);
     if (volts === null || !last) return [];
     return [{ side, seconds: last.seconds, volts, recorded: true }];
   };

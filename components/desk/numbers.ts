@@ -18,7 +18,7 @@ export function inSpokenUnit(
     : quantity.endsWith('-seconds')
       ? [1_000, 1, 'ms']
       : quantity.endsWith('-milliohms')
-        ? [1, 0, 'milliohms']
+        ? [1, 0, '']
         : quantity === 'trip-spread-volts'
           ? [1_000, 1, 'mV']
           : [1, 2, 'V'];

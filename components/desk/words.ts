@@ -16,13 +16,13 @@ export const noVerdictWords = (reason: NoVerdictReason): string => en.noVerdict[
 export const verdictWords: Record<Verdict, string> = { pass: 'Passed', reject: 'Rejected', 'no-verdict': 'No verdict' };
 
 export const quantityWords: Record<Measurement['quantity'], string> = {
-  'contact-milliohms': 'Contact resistance',
+  'contact-milliohms': 'Contact, milliohms',
   'reference-volts': 'Reference',
   'trip-volts': 'Trip',
   'release-volts': 'Release',
   'hysteresis-volts': 'Hysteresis',
-  'trip-spread-volts': 'Trip, spread of repeats',
-  'output-high-drop-volts': 'High output, below supply',
+  'trip-spread-volts': 'Trip spread',
+  'output-high-drop-volts': 'High output, drop',
   'output-low-volts': 'Low output',
   'quiescent-amps': 'Quiescent current',
   'ride-through-seconds': 'Ride-through',

@@ -27,12 +27,13 @@ export function lastOfEach(measurements: readonly UnitMeasurement[]): UnitMeasur
   return order.map((quantity) => measurements.findLast((m) => m.quantity === quantity)).filter((m) => m !== undefined);
 }
 
-/** U to two digits, rounded up, in the unit of the value. */
+/** U, rounded up, one unit finer than the value where that is a voltage. */
 function uncertaintyText({ quantity, expandedUncertainty }: UnitMeasurement): string {
   if (expandedUncertainty === null) return '';
-  const { scale, digits } = inSpokenUnit(quantity, 0);
-  const places = digits + 2;
-  return `±${(Math.ceil(expandedUncertainty * scale * 10 ** places - 1e-9) / 10 ** places).toFixed(places)}`;
+  const up = (value: number, digits: number) => (Math.ceil(value * 10 ** digits - 1e-9) / 10 ** digits).toFixed(digits);
+  if (quantity.endsWith('-volts')) return `${up(expandedUncertainty * 1_000, 1)} mV`;
+  const { scale, digits, unit } = inSpokenUnit(quantity, 0);
+  return `${up(expandedUncertainty * scale, digits + 1)} ${unit}`;
 }
 
 function Name({ quantity }: { quantity: UnitMeasurement['quantity'] }) {
@@ -51,7 +52,7 @@ export function MeasuredValue({ measurement }: { measurement: UnitMeasurement })
   return (
     <span className={`inline-flex items-center gap-1.5 font-bold ${measurement.passed === false ? 'text-reject' : ''}`}>
       {measurement.passed === false ? <VerdictMark shape="reject" size={13} label="outside its limits" /> : null}
-      {text} {unit}
+      {unit ? `${text} ${unit}` : text}
     </span>
   );
 }
@@ -62,7 +63,11 @@ export function MeasuredTable({ run }: { run: UnitRun }) {
   if (rows.length === 0) return <p className="text-ink-2">Nothing was measured.</p>;
   const { adjustments, turnsAdvised } = run;
   return (
-    <Table stacks={false} aria-label={`Measured values of attempt ${run.attempt}`}>
+    <Table
+      stacks={false}
+      aria-label={`Measured values of attempt ${run.attempt}; U is the expanded uncertainty, about 95 %`}
+      className="[&_.num]:whitespace-nowrap"
+    >
       <thead>
         <tr>
           <Th />
@@ -73,14 +78,14 @@ export function MeasuredTable({ run }: { run: UnitRun }) {
             <span className="font-text">Measured</span>
           </Th>
           <Th className="num">
-            <span className="font-text">U, about 95 %</span>
+            <span className="font-text">U</span>
           </Th>
         </tr>
       </thead>
       <tbody>
         {rows.map((measurement) => (
           <tr key={measurement.quantity}>
-            <Td>
+            <Td className="whitespace-nowrap">
               <Name quantity={measurement.quantity} />
             </Td>
             <Td number>
@@ -99,7 +104,7 @@ export function MeasuredTable({ run }: { run: UnitRun }) {
         {turnsAdvised ? (
           <tr>
             <Td>Trim</Td>
-            <Td number>≤ 4 turns at once</Td>
+            <Td number>≤ 4 turns</Td>
             <Td number>
               <b>{adjustments.length === 1 ? turnText(adjustments[0]!) : `${turnsAdvised.toFixed(2)} turns`}</b>
             </Td>

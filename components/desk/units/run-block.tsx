@@ -38,7 +38,7 @@ export function RunBlock({ run, mostSeconds }: { run: UnitRun; mostSeconds: numb
         </span>
       </h2>
       <RunNotes run={run} />
-      <div className="mt-1 grid items-start gap-x-8 gap-y-3 xl:grid-cols-[minmax(0,9fr)_minmax(0,11fr)]">
+      <div className="mt-1 grid items-start gap-y-3 xl:grid-cols-[minmax(0,432px)_minmax(0,1fr)] gap-x-6">
         <MeasuredTable run={run} />
         {run.traces.length > 0 ? (
           <TraceChart

@@ -89,7 +89,6 @@ export function UnitLive({ initial, signer, may, actions }: UnitLiveProps) {
               Decide
             </Button>
           ) : null}
-          {unit.label ? <Button onClick={() => window.print()}>Print on this computer</Button> : null}
           {unit.label && may.print ? (
             <Button kind="filled" onClick={() => void printAgain()} pending={printing ? 'Sending' : null}>
               Print label again
@@ -97,7 +96,7 @@ export function UnitLive({ initial, signer, may, actions }: UnitLiveProps) {
           ) : null}
         </div>
       </header>
-      <div className="grid items-start gap-x-9 gap-y-8 lg:grid-cols-[minmax(0,10fr)_minmax(0,21fr)_minmax(0,8fr)]">
+      <div className="grid items-start gap-x-9 gap-y-8 lg:grid-cols-[minmax(0,280px)_minmax(0,1fr)_minmax(0,240px)]">
         <div className="sw-screen-only max-lg:max-w-[420px]">
           <UnitRails unit={unit} />
           <UncertaintyNote unit={unit} />
@@ -114,6 +113,11 @@ export function UnitLive({ initial, signer, may, actions }: UnitLiveProps) {
         <aside>
           <h2 className="sw-screen-only mb-1.5 font-bold">Label, 40 × 20 mm</h2>
           <UnitLabel unit={unit} />
+          {unit.label ? (
+            <button type="button" className="sw-link sw-screen-only mt-1" onClick={() => window.print()}>
+              Print on this computer
+            </button>
+          ) : null}
           <div className="sw-screen-only">
             <h2 className="mt-4 border-t-2 border-ink pt-2.5 font-bold">History</h2>
             <UnitHistory unit={unit} />
