@@ -23,10 +23,14 @@ export interface LiveGuide {
 const noEffectAfterMs = 6000;
 const noEffectWithFetchAfterMs = 12_000;
 const wrongWayPauseMs = 4000;
-/** Rest that counts as stopped: on target at once, elsewhere longer than a regrip or a look around. */
-const restOnTargetMs = 300;
-const restElsewhereMs = 2500;
-const restBelowMs = 8000;
+/**
+ * Rest that counts as stopped: on target just longer than a regrip, elsewhere longer than a look around; longer still
+ * where the dial asks to go on below the target first.
+ */
+const restMsOf = {
+  target: { onTarget: 500, elsewhere: 2500 },
+  below: { onTarget: 1500, elsewhere: 8000 },
+} as const;
 const leastReadings = 5;
 /** A point that never rests is measured all the same. */
 const longestPromptMs = 120_000;
@@ -72,7 +76,10 @@ export interface LiveReading {
 
 /** Takes in a live trip point. May end the trim. */
 export function guide(state: TrimState, before: LiveGuide, { volts, sdVolts, quiet }: LiveReading): Guided {
-  const recent = [...before.recent.filter((r) => state.atMs - r.atMs <= restBelowMs), { atMs: state.atMs, volts }];
+  const recent = [
+    ...before.recent.filter((r) => state.atMs - r.atMs <= restMsOf.below.elsewhere),
+    { atMs: state.atMs, volts },
+  ];
   const told = tellMovement({ ...state, liveTripVolts: volts }, { ...before, recent }, volts, sdVolts);
   if (told.state.phase.kind === 'over') return { ...told, stopped: false };
   const turned = turnAim(told.state, told.guide, volts);
@@ -127,22 +134,30 @@ function tellMovement(
   return { state: foundNoEffect(state, Math.round(waited / 1000)), guide: { ...guide, noEffectAtMs: atMs } };
 }
 
-/** Two agreeing readings at least: all of the last while within a few millivolts, after a movement or on target. */
+/** Two agreeing readings within the last while, after a movement or on target. */
 function hasStopped(state: TrimState, guide: LiveGuide, volts: number, sdVolts: number): boolean {
   const { targetVolts, toleranceVolts } = state.settings;
   const off = Math.abs(volts - targetVolts);
   const onTarget = off <= Math.min(0.75 * toleranceVolts, toleranceVolts - 2 * sdVolts);
   const idle = off < 2 * state.pace.peekVolts && state.atMs - guide.fromMs > noEffectWithFetchAfterMs;
   if (!onTarget && !guide.moved && !idle) return false;
-  const restMs = onTarget ? restOnTargetMs : guide.aim === 'target' ? restElsewhereMs : restBelowMs;
+  const restMs = restMsOf[guide.aim][onTarget ? 'onTarget' : 'elsewhere'];
+  // A movement just told is no rest, however short beside the rest before it.
+  if (state.atMs - guide.fromMs < restMs) return false;
   // The last `restMs`, or as far back as it takes for enough readings.
   const tail = guide.recent.filter(
     (reading, i) => state.atMs - reading.atMs <= restMs || i >= guide.recent.length - leastReadings,
   );
   if (tail.length < leastReadings || state.atMs - guide.recent[0]!.atMs < restMs) return false;
-  const span = Math.max(...tail.map((r) => r.volts)) - Math.min(...tail.map((r) => r.volts));
-  return span < (onTarget ? Math.max(0.003, Math.min(0.006, 0.4 * toleranceVolts)) : 0.006);
+  // The two readings that have to agree are the means of the earlier and the later half.
+  const half = tail.length >> 1;
+  const earlier = meanVolts(tail.slice(0, half));
+  const later = meanVolts(tail.slice(tail.length - half));
+  return Math.abs(later - earlier) < (onTarget ? Math.max(0.002, Math.min(0.004, 0.3 * toleranceVolts)) : 0.003);
 }
+
+const meanVolts = (readings: { volts: number }[]) =>
+  readings.reduce((sum, reading) => sum + reading.volts, 0) / readings.length;
 
 /** The operator found the screw after no effect was told. */
 export function foundScrew(state: TrimState, guide: LiveGuide): { state: TrimState; guide: LiveGuide } {

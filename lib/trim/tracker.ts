@@ -33,7 +33,7 @@ export interface TrackerLook {
   atMs: number;
 }
 
-const particles = 1000;
+const particles = 600;
 /** Mean times until a still hand turns and a turning one rests, and the pull of the rate's wander a second. */
 const startSeconds = 1.5;
 const restSeconds = 0.7;
@@ -107,8 +107,8 @@ function drift(tracker: Tracker, model: TrackerModel, seconds: number, random: G
         rates[i] = sign * model.briskVoltsPerSecond * 1.5 * Math.exp(-4 * random.uniform());
       }
     } else if (draw < rests) rates[i] = 0;
-    else rates[i] = rates[i]! * Math.exp(wander * random.normal());
-    trips[i] = trips[i]! + rates[i]! * seconds + 0.0003 * random.normal();
+    else rates[i] = rates[i]! * (1 + wander * random.bell());
+    trips[i] = trips[i]! + rates[i]! * seconds + 0.0003 * random.bell();
   }
 }
 
@@ -157,6 +157,8 @@ function redraw(tracker: Tracker, weights: Float64Array, random: Generator): voi
 interface Generator {
   uniform(): number;
   normal(): number;
+  /** Nearly normal, mean 0 and standard deviation 1, within ±2.45: the sum of two uniforms. */
+  bell(): number;
   seed(): number;
 }
 
@@ -173,6 +175,7 @@ function generator(from: { seed: number }): Generator {
   return {
     uniform,
     normal: () => Math.sqrt(-2 * Math.log(1 - uniform())) * Math.cos(2 * Math.PI * uniform()),
+    bell: () => Math.sqrt(6) * (uniform() + uniform() - 1),
     seed: () => state,
   };
 }
