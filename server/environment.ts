@@ -83,7 +83,7 @@ export function readEnvironment(
   return {
     ok: false,
     sentences: parsed.error.issues.map((issue) =>
-      issue.code === 'invalid_type' ? `${issue.path.join('.')} is missing.` : issue.message,
+      issue.path[0] !== undefined && !(issue.path[0] in given) ? `${issue.path.join('.')} is missing.` : issue.message,
     ),
   };
 }

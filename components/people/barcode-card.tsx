@@ -21,7 +21,7 @@ export function BarcodeCard({ title, lines, code }: BarcodeCardProps) {
   const moduleMm = Math.min(0.5, barsMm.widest / modules);
   const width = modules * moduleMm;
   return (
-    <article className="flex h-[54mm] w-[86mm] flex-col justify-between border border-black bg-white p-[4mm] text-black">
+    <article className="flex h-[54mm] w-[86mm] flex-col justify-between border border-[#000] bg-[#fff] p-[4mm] text-[#000]">
       <header className="flex items-start justify-between gap-3">
         <div className="leading-tight">
           <p className="text-[19px] font-bold">{title}</p>

@@ -59,6 +59,7 @@ export async function listStationsOfPrinter(tx: Transaction, printerId: string):
   const rows = await tx
     .select({ code: stations.code })
     .from(stations)
-    .where(and(eq(stations.printerId, printerId), isNull(stations.retiredAt)));
+    .where(and(eq(stations.printerId, printerId), isNull(stations.retiredAt)))
+    .orderBy(asc(stations.code));
   return rows.map((row) => row.code);
 }

@@ -1,10 +1,11 @@
-import { and, isNull, like } from 'drizzle-orm';
+import { and, eq, isNull, like, or } from 'drizzle-orm';
 import type { Database } from '@/db/client';
 import { insertTrail } from '@/db/queries/trail';
 import { accounts } from '@/db/schema/accounts';
+import { printCode } from '@/lib/bench/scan-code';
 import { seedBenches } from './benches';
 import { seedLots } from './boxes';
-import { demoMailDomain } from './demo-accounts';
+import { demoAccounts, demoMailDomain } from './demo-accounts';
 import { seedPeople, seedTrainings } from './people';
 import { seedProducts } from './products';
 
@@ -13,9 +14,13 @@ export async function isEmpty(db: Database): Promise<boolean> {
   return (await db.$count(accounts)) === 0;
 }
 
-/** Whether accounts with known passwords still work here. */
+/** Whether accounts with known passwords or PINs still work here. */
 export async function hasDemoAccounts(db: Database): Promise<boolean> {
-  return (await db.$count(accounts, and(like(accounts.email, `%@${demoMailDomain}`), isNull(accounts.disabledAt)))) > 0;
+  const byBadge = demoAccounts.map(({ name, badgeNumber }) =>
+    and(eq(accounts.name, name), eq(accounts.badgeCode, printCode('badge', badgeNumber ?? ''))),
+  );
+  const known = or(like(accounts.email, `%@${demoMailDomain}`), ...byBadge);
+  return (await db.$count(accounts, and(known, isNull(accounts.disabledAt)))) > 0;
 }
 
 /** Fills an empty database with the demo: all of it or nothing. Says whether it did. */

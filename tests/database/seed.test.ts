@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { eq, isNotNull } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { boardTypes } from '@/db/seed/board-types';
 import { hasDemoAccounts, isEmpty, seedDemo } from '@/db/seed/demo';
@@ -114,5 +114,12 @@ describe('the demo', () => {
       expect(tripVolts).toBeGreaterThanOrEqual(specification.limits.tripVolts.min);
       expect(tripVolts).toBeLessThanOrEqual(specification.limits.tripVolts.max);
     }
+  });
+
+  test('counts as holding demo accounts while one of them still works, at a desk or at a bench', async () => {
+    await open.db.update(accounts).set({ disabledAt: now }).where(isNotNull(accounts.email));
+    expect(await hasDemoAccounts(open.db)).toBe(true);
+    await open.db.update(accounts).set({ disabledAt: now });
+    expect(await hasDemoAccounts(open.db)).toBe(false);
   });
 });

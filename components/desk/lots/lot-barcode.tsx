@@ -13,7 +13,7 @@ export function LotBarcode({ code }: { code: string }) {
   if (!barcode) return null;
   const width = widthInModules(barcode) * moduleMm;
   return (
-    <figure className="inline-block bg-white p-2 text-black">
+    <figure className="inline-block bg-[#fff] p-2 text-[#000]">
       <svg
         viewBox={`0 0 ${width} ${height}`}
         style={{ width: `${width}mm`, height: `${height}mm` }}

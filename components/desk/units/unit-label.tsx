@@ -19,7 +19,7 @@ export function UnitLabel({ unit }: { unit: UnitPage }) {
   return (
     <div className="grid gap-2">
       {drawn.ok ? (
-        <div className="border border-ink bg-white p-1 print:border-0 print:p-0">
+        <div className="border border-ink bg-[#fff] p-1 print:border-0 print:p-0">
           <LabelDrawing layout={drawn.layout} serial={unit.serial} />
         </div>
       ) : (

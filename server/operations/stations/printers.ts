@@ -12,6 +12,8 @@ import type { Actor } from '@/lib/access/actor';
 import { done, refusal, type Outcome } from '@/lib/contracts/outcome';
 import { database } from '@/server/postgres';
 
+const words = new Intl.ListFormat('en-GB', { type: 'conjunction' });
+
 export interface PrinterListItem {
   printerId: string;
   name: string;
@@ -64,7 +66,7 @@ export async function retirePrinter(actor: Actor, form: { printerId: string }): 
     if (!printer) return refusal('printer-unknown', 'This printer does not exist.');
     const users = await listStationsOfPrinter(tx, printer.id);
     if (users.length > 0)
-      return refusal('printer-in-use', `${users.join(' and ')} print here. Choose another printer for them first.`);
+      return refusal('printer-in-use', `${words.format(users)} print here. Choose another printer for them first.`);
     if (printer.retiredAt) return done;
     await updatePrinter(tx, printer.id, { retiredAt: new Date() });
     await insertTrail(tx, actor, {

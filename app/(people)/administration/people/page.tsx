@@ -76,7 +76,7 @@ export default async function PeoplePage({ searchParams }: Props) {
       <PeopleToolbar filter={filter} shown={shown.length} all={people.length} />
       <div className="mt-2 grid items-start gap-x-9 gap-y-8 xl:grid-cols-[minmax(0,1fr)_330px]">
         <PeopleTable rows={shown.map((person) => rowOf(person, now.getTime()))} chosen={filter.who} />
-        <aside className="grid gap-2 pt-3">
+        <aside className={`grid gap-2 pt-3 ${chosen ? 'max-xl:order-first' : ''}`}>
           {chosen ? (
             <PersonPanel
               key={chosen.accountId}
