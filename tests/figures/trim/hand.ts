@@ -38,13 +38,14 @@ export class Hand {
   private sign = 1;
   /** What the eyes had seen a reaction ago: (seconds, signed raising turns still to make). */
   private seen: { at: number; turns: number }[] = [];
-  private view: TrimView | null = null;
 
   constructor(
     private readonly habits: HandHabits,
     private readonly clockwiseRaises: boolean,
     private readonly random: Random,
     private readonly mode: 'beeps' | 'count' | 'dial',
+    /** Nearer than this the dial looks as if it stood on its mark. */
+    private readonly markTurns: number,
   ) {}
 
   get isTurning(): boolean {
@@ -53,7 +54,6 @@ export class Hand {
 
   /** A view appears at `at`; `prompts` counts the prompts so far. */
   see(view: TrimView, prompts: number, at: number): void {
-    this.view = view;
     const turning = view.stage === 'turn' || view.stage === 'beep-1' || view.stage === 'beep-2';
     if (turning && view.turns !== null && view.direction !== null) {
       const raises = (view.direction === 'clockwise') === this.clockwiseRaises;
@@ -127,20 +127,10 @@ export class Hand {
         const past = this.seen.findLast((glance) => glance.at <= at - habits.reactionSeconds) ?? this.seen[0];
         if (!past) return 0;
         const left = Math.abs(past.turns);
-        if (left < this.restTurns()) return 0;
+        if (left < this.markTurns) return 0;
         const speed = Math.min(plan.speed, Math.max(habits.slowestTurnsPerSecond, left * 1.5));
         return (this.sign > 0 === past.turns > 0 || plan.speed > 0 ? Math.sign(past.turns) : 0) * speed * seconds;
       }
     }
-  }
-
-  /** On the dial a quarter of the tolerance either way looks like the mark. */
-  private restTurns(): number {
-    const view = this.view!;
-    const live = view.liveTripVolts;
-    if (live === null || view.turns === null || view.turns === 0) return 0;
-    const voltsLeft = Math.abs(view.targetVolts - live);
-    const perTurn = voltsLeft / view.turns;
-    return perTurn > 0 ? (view.toleranceVolts * 0.25) / perTurn : 0;
   }
 }

@@ -1,4 +1,5 @@
 import { referenceAt } from '../../../lib/circuit/soft-knee';
+import { paceOf } from '../../../lib/trim/pace';
 import { seededRandom } from '../random';
 import { serveJobs } from '../serve-jobs';
 import { fixedSlope, secant } from './baselines';
@@ -35,8 +36,10 @@ function trimOne(row: TrimRow, seed: number): TrimRun {
     const node = referenceAt(board.design.reference, board.tripVolts);
     if (node.kind === 'found') settings.referenceVolts = node.x + random.normal(0, 0.001);
   }
+  const { voltsPerTurn } = paceOf(settings);
+  const markTurns = (0.25 * settings.toleranceVolts) / voltsPerTurn;
   const habits = { ...type.hand, wrongWayShare: row.wrongWayShare };
-  const hand = new Hand(habits, true, random, handMode(row));
+  const hand = new Hand(habits, true, random, handMode(row), markTurns);
   if (row.procedure === 'fixed V/turn') return runTrim(fixedSlope, settings, board, hand, link, random);
   if (row.procedure === 'secant') return runTrim(secant, settings, board, hand, link, random);
   return runTrim(productTrim, settings, board, hand, link, random);
