@@ -3,38 +3,34 @@ import '@fontsource-variable/atkinson-hyperlegible-mono';
 import '@/app/globals.css';
 import { NextIntlClientProvider } from 'next-intl';
 import { createRoot } from 'react-dom/client';
+import { flushSync } from 'react-dom';
 import { BenchProvider } from '@/components/bench/bench-context';
 import { BenchScreen, heardBeep } from '@/components/bench/bench-screen';
+import { HandsDrawer } from '@/components/bench/hands/hands-drawer';
 import { createReadingStore } from '@/components/bench/live/reading-store';
-import { showScheme } from '@/components/ui/scheme';
+import { showScheme, type Scheme } from '@/components/ui/scheme';
 import { benchCatalogue } from '@/lib/messages/bench-locales';
 import { Kit } from './kit';
-import { galleryViews } from './views';
+import { galleryViews, practiceHands, type GalleryView } from './views';
 
-/** One screen of the gallery: ?screen=02-idle&scheme=night&locale=de. Without a screen, a list of all. */
-const query = new URLSearchParams(location.search);
-const scheme = query.get('scheme');
-showScheme(scheme === 'night' ? 'night' : 'day');
+/** One screen of the gallery. Another is shown by `showScreen`, without loading the page again. */
+export interface Shown {
+  screen: string;
+  scheme?: Scheme;
+  locale?: string;
+}
+declare global {
+  interface Window {
+    showScreen: (shown: Shown) => void;
+  }
+}
 
-function Shown() {
-  const name = query.get('screen');
-  const { locale, messages } = benchCatalogue(query.get('locale') ?? 'en');
-  if (name === 'kit') return <Kit />;
-  const shown = name ? galleryViews[name] : undefined;
-  if (!shown)
-    return (
-      <ul>
-        {['kit', ...Object.keys(galleryViews)].map((key) => (
-          <li key={key}>
-            <a href={`?screen=${key}`}>{key}</a>
-          </li>
-        ))}
-      </ul>
-    );
+function Bench({ shown, locale }: { shown: GalleryView; locale: string }) {
   const readings = createReadingStore();
   readings.push(shown.reading ?? null);
+  const answer = async () => ({ ok: true }) as const;
   return (
-    <NextIntlClientProvider locale={locale} messages={messages} timeZone="UTC">
+    <NextIntlClientProvider {...benchCatalogue(locale)} timeZone="UTC">
       <BenchProvider
         value={{
           view: shown.view,
@@ -47,13 +43,43 @@ function Shown() {
           toggleSound: () => {},
         }}
       >
-        <div className="sw-stage min-[900px]:h-dvh">
-          <BenchScreen flood={heardBeep(shown.view)} />
+        <div className="flex min-h-dvh max-[900px]:flex-col min-[900px]:h-dvh">
+          <div className="sw-stage min-w-0 flex-1">
+            <BenchScreen flood={heardBeep(shown.view)} />
+          </div>
+          {shown.practice && <HandsDrawer hands={practiceHands} view={shown.view} send={answer} scan={() => {}} />}
         </div>
       </BenchProvider>
     </NextIntlClientProvider>
   );
 }
 
-document.documentElement.lang = query.get('locale') ?? 'en';
-createRoot(document.getElementById('root')!).render(<Shown />);
+function Screens() {
+  return (
+    <ul>
+      {['kit', ...Object.keys(galleryViews)].map((key) => (
+        <li key={key}>
+          <a href={`?screen=${key}`}>{key}</a>
+        </li>
+      ))}
+    </ul>
+  );
+}
+
+const root = createRoot(document.getElementById('root')!);
+window.showScreen = ({ screen, scheme = 'day', locale = 'en' }) => {
+  showScheme(scheme);
+  document.documentElement.lang = locale;
+  const shown = galleryViews[screen];
+  const key = `${screen} ${locale}`;
+  flushSync(() =>
+    root.render(screen === 'kit' ? <Kit /> : shown ? <Bench key={key} shown={shown} locale={locale} /> : <Screens />),
+  );
+};
+
+const query = new URLSearchParams(location.search);
+window.showScreen({
+  screen: query.get('screen') ?? '',
+  scheme: query.get('scheme') === 'night' ? 'night' : 'day',
+  locale: query.get('locale') ?? 'en',
+});

@@ -1,21 +1,34 @@
+import tailwindcss from '@tailwindcss/postcss';
+import { mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { createServer, type ViteDevServer } from 'vite';
+import { build, preview } from 'vite';
 
-const root = fileURLToPath(new URL('../../../', import.meta.url));
+const root = fileURLToPath(new URL('../../../', import.meta.url)).replace(/\/$/, '');
 
-/** Serves the gallery on a free port of loopback. Close the server when done. */
-export async function serveGallery(): Promise<{ server: ViteDevServer; address: string }> {
-  const server = await createServer({
-    configFile: false,
-    root,
-    logLevel: 'warn',
-    resolve: { alias: { '@': root.replace(/\/$/, '') } },
-    define: { 'process.env': {} },
-    server: { host: '127.0.0.1', port: 0, hmr: false, watch: null },
-    optimizeDeps: { entries: ['tests/browser/gallery/main.tsx'] },
-    cacheDir: 'node_modules/.vite-gallery',
+/** Builds the gallery once and serves it on a free port of loopback. */
+export async function serveGallery(): Promise<{ address: string; close: () => Promise<void> }> {
+  const folder = mkdtempSync(join(tmpdir(), 'sillwright-gallery-'));
+  const shared = {
+    configFile: false as const,
+    root: join(root, 'tests/browser/gallery'),
+    logLevel: 'warn' as const,
+    build: { outDir: folder, emptyOutDir: true, minify: false, reportCompressedSize: false },
+  };
+  await build({
+    ...shared,
+    resolve: { alias: { '@': root } },
+    define: { 'process.env': {}, 'process.env.NODE_ENV': '"production"' },
+    css: { postcss: { plugins: [tailwindcss()] } },
   });
-  await server.listen();
-  const { port } = server.httpServer!.address() as { port: number };
-  return { server, address: `http://127.0.0.1:${port}/tests/browser/gallery/index.html` };
+  const server = await preview({ ...shared, preview: { host: '127.0.0.1', port: 0 } });
+  const { port } = server.httpServer.address() as { port: number };
+  return {
+    address: `http://127.0.0.1:${port}/`,
+    close: async () => {
+      await server.close();
+      rmSync(folder, { recursive: true, force: true });
+    },
+  };
 }

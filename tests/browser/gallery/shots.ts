@@ -8,9 +8,9 @@ import { galleryViews } from './views';
  * With no size all three are taken, with no scheme day and night.
  */
 const sizes = { bench: [1920, 1080], desk: [1440, 900], phone: [390, 844] } as const;
-const [folder = 'gallery-shots', part = '', size = '', scheme = '', locale = 'en'] = process.argv.slice(2);
+const [folder = 'gallery-shots', part = '', size = '', only = '', locale = 'en'] = process.argv.slice(2);
 
-const { server, address } = await serveGallery();
+const gallery = await serveGallery();
 const browser = await launchChromium();
 await mkdir(folder, { recursive: true });
 const names = ['kit', ...Object.keys(galleryViews)].filter((name) => name.includes(part));
@@ -18,19 +18,18 @@ for (const [sizeName, [width, height]] of Object.entries(sizes)) {
   if (size && size !== sizeName) continue;
   const page = await browser.newPage({ viewport: { width, height } });
   page.on('pageerror', (error) => console.log(`page error: ${error.message}`));
-  page.on('console', (message) => message.type() === 'error' && console.log(`console: ${message.text()}`));
-  for (const schemeName of ['day', 'night']) {
-    if (scheme && scheme !== schemeName) continue;
-    for (const name of names) {
-      await page.goto(`${address}?screen=${name}&scheme=${schemeName}&locale=${locale}`);
-      await page.waitForSelector('main');
+  await page.goto(gallery.address);
+  for (const scheme of ['day', 'night'] as const) {
+    if (only && only !== scheme) continue;
+    for (const screen of names) {
+      await page.evaluate((shown) => window.showScreen(shown), { screen, scheme, locale });
       await page.evaluate(() => document.fonts.ready);
-      const file = `${folder}/${name}-${sizeName}-${schemeName}-${locale}.png`;
-      await page.screenshot({ path: file, fullPage: sizeName === 'phone' });
+      const path = `${folder}/${screen}-${sizeName}-${scheme}-${locale}.png`;
+      await page.screenshot({ path, fullPage: sizeName === 'phone' });
     }
   }
   await page.close();
 }
 console.log(`${names.length} screens in ${folder}`);
 await browser.close();
-await server.close();
+await gallery.close();

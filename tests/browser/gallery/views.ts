@@ -1,3 +1,4 @@
+import type { HandsView } from '@/lib/contracts/bench-command';
 import type { BenchView, RailFlag, RailsView, ReadinessItem, RunView } from '@/lib/contracts/bench-view';
 import type { StepGroup } from '@/lib/sequence/step';
 import type { TrimView } from '@/lib/trim/types';
@@ -181,7 +182,19 @@ export interface GalleryView {
   lost?: boolean;
   reading?: { volts: number; output: 'on' | 'off' | null; rail: 'falling' | 'rising' | 'off' };
   sound?: 'locked' | 'on' | 'muted';
+  /** With the practice bench beside it. */
+  practice?: boolean;
 }
+
+export const practiceHands: HandsView = {
+  boardSerial: 'CB1210264800184',
+  lidClosed: true,
+  screwTurns: 11.32,
+  travelTurns: 25,
+  defect: 'none',
+  cables: { supply: true, meter: true, controller: false },
+  nextSerial: 'CB1210264800185',
+};
 
 const shown = (view: BenchView, more: Omit<GalleryView, 'view'> = {}): GalleryView => ({ view, ...more });
 
@@ -460,6 +473,7 @@ export const galleryViews: Record<string, GalleryView> = {
     },
   }),
   lost: shown(trim({ stage: 'beep-1', ...twoBeep }, held(10.75)), { lost: true }),
+  practice: shown(trim({ stage: 'beep-1', ...twoBeep }, held(10.75)), { practice: true }),
   watching: shown(trim({ stage: 'beep-1', ...twoBeep }, held(10.75)), { leads: false }),
   '24-volt': shown(
     running(
