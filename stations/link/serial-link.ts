@@ -28,6 +28,7 @@ interface Pending {
 const defaultReopenDelaysMs = [200, 300, 500, 1000, 1000, 2000, 2000, 3000];
 const syncAttempts = 3;
 const syncDeadlineMs = 1000;
+const quietMs = 20;
 
 /**
  * Lines over a serial port, one exchange at a time, each with a deadline. After a missing, broken or unasked answer
@@ -146,13 +147,16 @@ export class SerialLink {
       try {
         await this.transfer(request.message, syncDeadlineMs, request.isAnswer);
         this.suspect = false;
-        return;
+        // Whatever still comes was not asked for and makes the link suspect again.
+        await this.options.clock.sleep(quietMs);
+        if (!this.suspect && !this.lines.clear()) return;
       } catch (error) {
         failure = error;
         if (this.current !== 'open') break;
       }
     }
-    throw failure;
+    this.suspect = true;
+    throw failure ?? this.doubt('instrument-garbled', 'keeps sending what nobody asked for.');
   }
 
   private hear(line: string | null): void {

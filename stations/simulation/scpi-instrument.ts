@@ -60,7 +60,7 @@ export abstract class ScpiInstrument {
   }
 
   spoil(fault: AnswerFault | null): void {
-    this.fault = fault;
+    this.fault = fault && { ...fault };
   }
 
   /** Bytes that nobody asked for, such as a disturbed line brings. */
