@@ -1,12 +1,14 @@
 import type { CSSProperties, ReactNode } from 'react';
 
-/** Average width of a character of our bold face, as a share of the size. */
-const characterWidth = 0.56;
+/** Widths of our bold face as shares of the size, a little generous. */
+const widthOf = (character: string) =>
+  /[A-ZÄÖÜ]/.test(character) ? 0.63 : /[\s.,;:il’']/.test(character) ? 0.34 : 0.56;
+const widthOfLine = (line: string) => [...line].reduce((sum, character) => sum + widthOf(character), 0);
 
 /** Largest size up to `most` at which the longest line of `text` fits `width`. Pixels of the bench drawing. */
 export function fittedSize(text: string, most: number, width: number): number {
-  const longest = Math.max(...text.split('\n').map((line) => line.length), 1);
-  return Math.round(Math.min(most, width / (longest * characterWidth)));
+  const longest = Math.max(...text.split('\n').map(widthOfLine), 0.5);
+  return Math.round(Math.min(most, width / longest));
 }
 
 interface FittedProps {

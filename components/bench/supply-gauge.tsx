@@ -25,10 +25,14 @@ export function SupplyGauge({ supply }: { supply: SupplyView }) {
     <div>
       <p className="text-b-label text-ink-2">{t('atFixture')}</p>
       <p className="leading-none">
-        <span className="font-num text-[calc(100*var(--sw-b))] font-bold">{oneDigit(supply.volts)}</span>
+        <span className="font-num text-[calc(88*var(--sw-b))] font-bold">{oneDigit(supply.volts)}</span>
         <span className="ml-2 text-[calc(54*var(--sw-b))]">V</span>
       </p>
-      <svg viewBox={`0 0 ${width} 78`} aria-hidden="true" className="mt-1 block h-auto w-full overflow-visible">
+      <svg
+        viewBox={`0 0 ${width} 78`}
+        aria-hidden="true"
+        className="mt-1 block h-auto w-full max-w-80 overflow-visible"
+      >
         <path d={`M${x(supply.volts) - 10} 0h20l-10 20z`} fill="var(--sw-ink)" />
         <rect x={x(0)} y={16} width={x(2) - x(0)} height={16} fill="none" stroke="var(--sw-ink)" strokeWidth={3} />
         <path d={`M${x(0)} 33H${x(10)}`} stroke="var(--sw-ink)" strokeWidth={3} />

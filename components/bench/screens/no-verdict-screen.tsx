@@ -56,25 +56,26 @@ export function NoVerdictScreen({ screen, run }: { screen: NoVerdictView; run: R
             </p>
           </div>
         </div>
-        <div className="flex min-h-0 flex-1 justify-between gap-12 px-14 py-7 pr-16 max-[900px]:flex-col">
-          <div className="flex min-w-0 flex-1 flex-col gap-6">
-            <p
-              className={`leading-[1.14] font-bold whitespace-pre-line ${off ? 'text-b-next' : 'text-[calc(52*var(--sw-b))]'}`}
-              role="alert"
-            >
-              {t(off ? 'supplyOff' : 'supplyMaybeOn')}
-            </p>
-            <p className="text-[calc(38*var(--sw-b))] leading-[1.34] text-ink-2">
+        <div className="flex min-h-0 flex-1 justify-between gap-12 px-14 py-6 pr-12 max-[900px]:flex-col">
+          <div className="flex min-w-0 flex-1 flex-col gap-4.5">
+            <div role="alert">
+              {off ? (
+                <Fitted text={t('supplyOff')} most={62} width={740} className="!leading-[1.14]" />
+              ) : (
+                <p className="text-[calc(52*var(--sw-b))] leading-[1.14] font-bold">{t('supplyMaybeOn')}</p>
+              )}
+            </div>
+            <p className="text-b-line leading-[1.3] text-ink-2">
               {t.rich('notJudged', { serial, b: bold })} {off && words(`${screen.reason}.next`)}
               {screen.failingWhenStopped && <b className="block text-ink">{t('failing')}</b>}
             </p>
             {!stopped && !screen.failingWhenStopped && (
-              <p className="text-[calc(38*var(--sw-b))] leading-[1.34] text-ink-2">{t('again')}</p>
+              <p className="text-b-line leading-[1.3] text-ink-2">{t('again')}</p>
             )}
           </div>
-          <div className="w-80 flex-none max-[900px]:w-full">
+          <div className="w-100 flex-none max-[900px]:w-full">
             <SupplyGauge supply={supply} />
-            <Cautions which={['supply-off', 'eyes', 'site-rules']} className="mt-5" />
+            <Cautions which={['supply-off', 'eyes', 'site-rules']} className="mt-3" />
           </div>
         </div>
       </Panes>

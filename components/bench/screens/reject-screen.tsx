@@ -37,11 +37,17 @@ export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode:
               <ol className="mt-6 grid gap-4 border-t-4 border-on-flood pt-7 text-[calc(48*var(--sw-b))] leading-tight font-bold">
                 <li className="flex gap-9">
                   <span>1</span>
-                  {t('putInBin')}
+                  <Fitted text={t('putInBin')} most={48} width={660} as="span" className="!leading-tight" />
                 </li>
                 <li className="flex gap-9">
                   <span>2</span>
-                  {binCode === null ? t('binScanned') : t('scanBin', { bin: binCode })}
+                  <Fitted
+                    text={binCode === null ? t('binScanned') : t('scanBin', { bin: binCode })}
+                    most={48}
+                    width={660}
+                    as="span"
+                    className="!leading-tight"
+                  />
                 </li>
               </ol>
             </div>

@@ -38,7 +38,7 @@ export function PromptedScreen({ trim }: { trim: TrimView }) {
                   <TurnNumber words={words} />
                 </p>
                 {words.unit === 'turns' && (
-                  <p className="text-b-dir leading-none font-bold">{t(isOneTurn(words) ? 'turn' : 'turns')}</p>
+                  <Fitted text={t(isOneTurn(words) ? 'turn' : 'turns')} most={104} width={556} />
                 )}
                 <p className="text-b-line leading-[1.3] text-ink">{t(counts ? 'countsDown' : 'thenLetGo')}</p>
               </div>
