@@ -56,7 +56,7 @@ export function PrintersPanel({ rows, save, retire }: PrintersPanelProps) {
     }),
     helper.display({
       id: 'change',
-      header: '',
+      header: 'Changes',
       cell: ({ row: { original } }) =>
         original.retiredIso ? (
           'out of use'

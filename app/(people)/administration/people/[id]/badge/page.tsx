@@ -3,6 +3,7 @@ import { notFound } from 'next/navigation';
 import { PrintButton } from '@/components/desk/print-button';
 import { BarcodeCard } from '@/components/people/barcode-card';
 import { ButtonLink } from '@/components/ui/button';
+import { PageHead } from '@/components/ui/page-head';
 import { roleWords } from '@/lib/access/role-words';
 import { authorise } from '@/server/auth/authorise';
 import { listPersons } from '@/server/operations/people/list-people';
@@ -17,6 +18,9 @@ export default async function BadgePage({ params }: { params: Promise<{ id: stri
   const roles = person.roles.map((role) => roleWords[role].name).join(', ');
   return (
     <div className="grid gap-6">
+      <div className="sw-screen-only">
+        <PageHead title={`Badge of ${person.name}`} />
+      </div>
       <BarcodeCard
         title={person.name}
         lines={person.operatorNumber ? [`No. ${person.operatorNumber}`, roles] : [roles]}
