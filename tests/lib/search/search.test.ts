@@ -100,6 +100,22 @@ describe('a defective board', () => {
   });
 });
 
+describe('without assumptions, as a search is repeated that did not resolve', () => {
+  const settings = { tripMinVolts: 6, tripMaxVolts: 12, hysteresisMinVolts: 0, hysteresisMaxVolts: 6 };
+
+  test.each([
+    ['an ordinary board', 9.312, 9.934, 'found'],
+    ['a hysteresis of 2 V', 8.6, 10.6, 'found'],
+    ['no hysteresis', 9.4, 9.4, 'chatter'],
+    ['a trip point near the lowest supply', 6.3, 6.9, 'found'],
+  ])('finds %s', (_, trip, release, kind) => {
+    const { result } = searchInTest({ trip, release }, { settings });
+    expect(result.kind).toBe(kind);
+    expect(millivolts(pointsOf(result).trip.volts, trip)).toBeLessThan(5);
+    expect(millivolts(pointsOf(result).release.volts, release)).toBeLessThan(5);
+  });
+});
+
 describe('the lot prior', () => {
   const prior = { tripMeanVolts: 9.5, tripSdVolts: 0.03, hysteresisMeanVolts: 0.6, hysteresisSdVolts: 0.02 };
 
