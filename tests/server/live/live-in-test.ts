@@ -21,6 +21,8 @@ export interface LiveInTest {
   dataFolder: string;
   /** Starts the stations and the gateway, as after a start of the server. */
   start(): Promise<Live>;
+  /** Lets another process listen where this one did. */
+  freePort(): Promise<void>;
   enrol(stationCode: string): Promise<string>;
   screen(stationCode: string, cookie: string, origin?: string): Promise<ScreenInTest>;
   close(): Promise<void>;
@@ -52,6 +54,9 @@ export async function liveInTest(clockRate: number): Promise<LiveInTest> {
         await new Promise<void>((resolve) => httpServer.listen(port, '127.0.0.1', resolve));
       }
       return (live = await startLive({ httpServer, log: pino({ level: process.env.LOG_LEVEL ?? 'silent' }) }));
+    },
+    async freePort() {
+      await new Promise((resolve) => httpServer.close(resolve));
     },
     async enrol(stationCode) {
       const token = makeToken();
