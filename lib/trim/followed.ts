@@ -4,7 +4,7 @@ import { adviseLive, beginGuide, foundScrew, guide, type LiveGuide } from './liv
 import { prompt } from './prompts';
 import { nearTarget, type TrimState } from './state';
 import { armOnThenHold, moveWithoutPassing } from './supply-path';
-import { beginTracker, track, trackedRelease, trackedTrip, type Tracker } from './tracker';
+import { beginTracker, track, trackedRelease, type Tracker } from './tracker';
 import type { TrimCommand, TrimObservation } from './types';
 import { askVerify, judgeVerify, relearn } from './verify';
 
@@ -64,7 +64,7 @@ function promptTurn(state: TrimState, seen: { volts: number; output: OutputState
 
 /** The next look is where the output flips as likely as not. */
 function look(state: TrimState, phase: Looking): TrimState {
-  const { volts: trip, movingShare } = trackedTrip(phase.tracker);
+  const { volts: trip, movingShare } = phase.tracker.trip;
   const at = phase.output === 'on' ? trip : trackedRelease(phase.tracker, releaseFor(state, trip) - trip);
   const wide = Math.abs(at - phase.fromVolts) > wideMoveVolts;
   const path = moveWithoutPassing(phase.fromVolts, at, supplyLimits(state));
@@ -76,7 +76,7 @@ function look(state: TrimState, phase: Looking): TrimState {
 function looked(state: TrimState, phase: Looking, seen: { volts: number; output: OutputState }): TrimState {
   const { settings, pace, command } = state;
   const last = command.kind === 'hold' ? command.waypointsVolts.at(-1) : undefined;
-  const { volts: before } = trackedTrip(phase.tracker);
+  const { volts: before } = phase.tracker.trip;
   const tracker = track(
     phase.tracker,
     {
@@ -94,7 +94,7 @@ function looked(state: TrimState, phase: Looking, seen: { volts: number; output:
       atMs: state.atMs,
     },
   );
-  const { volts, sdVolts, movingShare } = trackedTrip(tracker);
+  const { volts, sdVolts, movingShare } = tracker.trip;
   const guided = guide(state, phase.guide, { volts, sdVolts, quiet: movingShare < stoppedShare });
   if (guided.state.phase.kind === 'over') return guided.state;
   if (guided.stopped) {

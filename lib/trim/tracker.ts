@@ -6,13 +6,24 @@ import type { OutputState } from '../search/types';
  * with a still and a moving mode, after the bootstrap filter of Gordon, Salmond and Smith (1993). Deterministic: its random
  * numbers come from a seed inside the state.
  */
-export interface Tracker {
+export interface Tracker extends Particles {
+  trip: TrackedTrip;
+  atMs: number;
+  seed: number;
+}
+
+/** Median trip point with its standard deviation, and the share of particles that move. */
+export interface TrackedTrip {
+  volts: number;
+  sdVolts: number;
+  movingShare: number;
+}
+
+interface Particles {
   /** Volts; volts a second, 0 while still; volts. */
   trips: Float64Array;
   rates: Float64Array;
   hysteresisErrors: Float64Array;
-  atMs: number;
-  seed: number;
 }
 
 export interface TrackerModel {
@@ -40,49 +51,46 @@ const restSeconds = 0.7;
 const rateWander = 0.8;
 /** Share of starts against the way asked. */
 const contraryShare = 0.15;
+/** Any seed will do; a fixed one makes every run repeat. */
+const firstSeed = 0x2545f491;
 /** An outcome that the model did not foresee still has this likelihood. */
 const surprise = 0.01;
 
 export function beginTracker(tripVolts: number, sdVolts: number, hysteresisSdVolts: number, atMs: number): Tracker {
-  const tracker: Tracker = {
+  const tracker: Particles = {
     trips: new Float64Array(particles),
     rates: new Float64Array(particles),
     hysteresisErrors: new Float64Array(particles),
-    atMs,
-    seed: 0x2545f491,
   };
-  const random = generator(tracker);
+  const random = generator(firstSeed);
   for (let i = 0; i < particles; i++) {
     tracker.trips[i] = tripVolts + sdVolts * random.normal();
     tracker.hysteresisErrors[i] = hysteresisSdVolts * random.normal();
   }
-  return { ...tracker, seed: random.seed() };
+  return { ...tracker, trip: summarise(tracker), atMs, seed: random.seed() };
 }
 
 /** The filter after one look: moved on in time, weighed by the outcome, drawn anew. */
 export function track(tracker: Tracker, model: TrackerModel, look: TrackerLook): Tracker {
-  const next: Tracker = {
+  const next: Particles = {
     trips: tracker.trips.slice(),
     rates: tracker.rates.slice(),
     hysteresisErrors: tracker.hysteresisErrors.slice(),
-    atMs: look.atMs,
-    seed: tracker.seed,
   };
-  const random = generator(next);
+  const random = generator(tracker.seed);
   drift(next, model, Math.max(0, look.atMs - tracker.atMs) / 1000, random);
   const weights = weigh(next, model, look);
   redraw(next, weights, random);
-  return { ...next, seed: random.seed() };
+  return { ...next, trip: summarise(next), atMs: look.atMs, seed: random.seed() };
 }
 
-/** Median trip point with its standard deviation, and the share of particles that move. */
-export function trackedTrip(tracker: Tracker): { volts: number; sdVolts: number; movingShare: number } {
-  const volts = tracker.trips.slice().sort()[particles >> 1]!;
+function summarise({ trips, rates }: Particles): TrackedTrip {
+  const volts = trips.slice().sort()[particles >> 1]!;
   let moving = 0;
   let squares = 0;
   for (let i = 0; i < particles; i++) {
-    if (tracker.rates[i] !== 0) moving++;
-    squares += (tracker.trips[i]! - volts) ** 2;
+    if (rates[i] !== 0) moving++;
+    squares += (trips[i]! - volts) ** 2;
   }
   return { volts, sdVolts: Math.sqrt(squares / particles), movingShare: moving / particles };
 }
@@ -93,7 +101,7 @@ export function trackedRelease(tracker: Tracker, hysteresisVolts: number): numbe
   return releases[particles >> 1]!;
 }
 
-function drift(tracker: Tracker, model: TrackerModel, seconds: number, random: Generator): void {
+function drift(tracker: Particles, model: TrackerModel, seconds: number, random: Generator): void {
   const starts = 1 - Math.exp(-seconds / startSeconds);
   const rests = 1 - Math.exp(-seconds / restSeconds);
   const wander = rateWander * Math.sqrt(seconds);
@@ -112,7 +120,7 @@ function drift(tracker: Tracker, model: TrackerModel, seconds: number, random: G
   }
 }
 
-function weigh(tracker: Tracker, model: TrackerModel, look: TrackerLook): Float64Array {
+function weigh(tracker: Particles, model: TrackerModel, look: TrackerLook): Float64Array {
   const step = Math.abs(look.volts - look.fromVolts);
   // The commissioned overshoot is a bound; what happens is somewhat less, and known no better than that.
   const beyond = 0.7 * model.overshoot * step;
@@ -136,7 +144,7 @@ function weigh(tracker: Tracker, model: TrackerModel, look: TrackerLook): Float6
 }
 
 /** Systematic redrawing in proportion to the weights. */
-function redraw(tracker: Tracker, weights: Float64Array, random: Generator): void {
+function redraw(tracker: Particles, weights: Float64Array, random: Generator): void {
   let total = 0;
   for (const weight of weights) total += weight;
   const step = total / particles;
@@ -163,8 +171,8 @@ interface Generator {
 }
 
 /** Mulberry32, a small generator with its state in one integer; normal deviates by Box and Muller. */
-function generator(from: { seed: number }): Generator {
-  let state = from.seed >>> 0;
+function generator(seed: number): Generator {
+  let state = seed >>> 0;
   const uniform = () => {
     state = (state + 0x6d2b79f5) >>> 0;
     let t = state;

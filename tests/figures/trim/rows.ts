@@ -23,10 +23,16 @@ const row = (
   wrongWayShare = 0,
 ): TrimRow => ({ type, procedure, toleranceMillivolts, link, boards, wrongWayShare });
 
+/** A dial that follows corrects itself, so channel 103 is shown where the turn is made as told, and in the target's row. */
+const isWorthShowing = ({ type, procedure, toleranceMillivolts, link }: TrimRow) =>
+  procedure !== 'prompted, 103 read' || link === '9600' || (type === 'multi' && toleranceMillivolts === 20);
+
 const grid = (type: TrimRow['type'], tolerances: readonly number[]): TrimRow[] =>
-  tolerances.flatMap((tolerance) =>
-    links.flatMap((link) => procedures.map((procedure) => row(type, procedure, tolerance, link))),
-  );
+  tolerances
+    .flatMap((tolerance) =>
+      links.flatMap((link) => procedures.map((procedure) => row(type, procedure, tolerance, link))),
+    )
+    .filter(isWorthShowing);
 
 export const rows: readonly TrimRow[] = [
   ...grid('multi', [20, 10, 5]),
