@@ -3,7 +3,12 @@
  * `below` takes `1 - p`, whichever is the smaller tail. Bisection: the bracket is certain, so it always ends, at
  * neighbouring numbers or at 1e-15 relative.
  */
-export function invertTail(below: (x: number) => number, above: (x: number) => number, p: number, end = Infinity): number {
+export function invertTail(
+  below: (x: number) => number,
+  above: (x: number) => number,
+  p: number,
+  end = Infinity,
+): number {
   if (!(p >= 0 && p <= 1)) throw new RangeError(`A probability of ${p}.`);
   if (p === 0) return 0;
   if (p === 1) return end;

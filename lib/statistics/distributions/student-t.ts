@@ -25,4 +25,3 @@ export function tQuantile(p: number, degrees: number): number {
     p,
   );
 }
-

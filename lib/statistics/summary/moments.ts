@@ -28,6 +28,7 @@ export function pooledDeviation(sds: readonly number[], degrees: readonly number
 export function lagOneAutocorrelation(values: readonly number[]): number | null {
   const squares = squaresAboutMean(values);
   if (values.length < 3 || !(squares > 0)) return null;
-  const centre = meanOf(values);
-  return exactSum(values.slice(1).map((value, i) => (value - centre) * (values[i]! - centre))) / squares;
+  const fromFirst = values.map((value) => value - values[0]!);
+  const centre = meanOf(fromFirst);
+  return exactSum(fromFirst.slice(1).map((value, i) => (value - centre) * (fromFirst[i]! - centre))) / squares;
 }
