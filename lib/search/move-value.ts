@@ -1,4 +1,4 @@
-import { type Belief, massBelow } from './belief';
+import type { Belief } from './belief';
 import { edgeSd, lapseRate } from './grid-posterior';
 import { binaryEntropy, normalCdf } from './normal-distribution';
 
@@ -79,6 +79,3 @@ export function furthestQuietMove(belief: Belief, from: number, lowest: number, 
   }
   return good;
 }
-
-/** Mass of the belief below `x`. */
-export const beliefBelow = (belief: Belief, x: number) => massBelow(belief.low, belief.cell, belief.cumulative, x);

@@ -1,88 +1,33 @@
-import { type Level, type Pair, assumedMass, coupledWeights } from './assumptions';
-import { type Belief, weighBelief } from './belief';
+import { type Pair, assumedMass } from './assumptions';
+import type { Belief } from './belief';
 import { atBottom, atTop, decide } from './decide';
 import { freshCheck, observeCheck } from './end-check';
-import { type Probe, absorbProbe, flatPosterior, rebuildPosterior } from './grid-posterior';
-import { allowedLevel } from './level-drop';
+import { fitSides, gridsOf, weighSides } from './fit-sides';
+import { type Probe, absorbProbe, flatPosterior } from './grid-posterior';
+import { levelRanges, wideWindow } from './level-ranges';
 import { type MoveValue, valueMove } from './move-value';
 import { overshootPrior } from './overshoot-range';
 import type { SearchState, Side } from './state';
 import { beginSupplyModel, learnSupplyLevel } from './supply-level';
 import type { OutputState, PointEstimate, SearchCommand, SearchObservation, SearchSettings } from './types';
-import { betterWindow, windowAround, windowOver } from './window';
-import { levelRanges, wideWindow } from './level-ranges';
+import { windowOver } from './window';
 
 export type { SearchState } from './state';
 
 /** An outcome less likely than this means that the fine window lost the threshold. */
 const surprising = 0.015;
-const mostResizings = 4;
-
-const pointNames = ['trip', 'release'] as const;
-
-const windowsOf = (sides: Pair<Side>, which: 'wide' | 'fine') => ({
-  trip: sides.trip[which],
-  release: sides.release[which],
-});
-
-function weighSides(settings: SearchSettings, level: Level, sides: Pair<Side>, which: 'wide' | 'fine'): Pair<Belief> {
-  const pair = windowsOf(sides, which);
-  const weights = coupledWeights(settings, level, pair);
-  return { trip: weighBelief(pair.trip, weights.trip), release: weighBelief(pair.release, weights.release) };
-}
 
 const pointOf = (belief: Belief, sign: number): PointEstimate => ({
   volts: sign * belief.mean,
   standardUncertaintyVolts: belief.sd,
 });
 
-/** Completes a state: windows that suit the beliefs, assumptions the outcomes allow, estimates and the next command. */
-function settle(state: SearchState, startOver: Pair<boolean>): SearchState {
-  const { settings, overshoot } = state;
-  const noise = settings.noiseVolts;
-  let { sides, assumptions } = state;
-  let lost = startOver;
-  let beliefs: Pair<Belief>;
-  for (;;) {
-    const ranges = levelRanges(settings, assumptions);
-    if (lost.trip || lost.release) {
-      const wide = weighSides(settings, assumptions, sides, 'wide');
-      sides = { ...sides };
-      for (const name of pointNames)
-        if (lost[name]) {
-          const window = windowAround(wide[name], ranges[name], noise);
-          const { history } = sides[name];
-          sides[name] = { ...sides[name], fine: rebuildPosterior(window, history, noise, overshoot) };
-        }
-    }
-    beliefs = weighSides(settings, assumptions, sides, 'fine');
-    for (let i = 0; i < mostResizings; i++) {
-      let changed = false;
-      for (const name of pointNames) {
-        const window = betterWindow(beliefs[name], ranges[name], noise);
-        if (!window) continue;
-        const { history } = sides[name];
-        sides = {
-          ...sides,
-          [name]: { ...sides[name], fine: rebuildPosterior(window, history, noise, overshoot) },
-        };
-        changed = true;
-      }
-      if (!changed) break;
-      beliefs = weighSides(settings, assumptions, sides, 'fine');
-    }
-    const allowed = allowedLevel(settings, assumptions, windowsOf(sides, 'wide'), beliefs, state.unseenMass);
-    if (allowed === assumptions) break;
-    assumptions = allowed;
-    lost = { trip: true, release: true };
-  }
-  const settled = {
-    ...state,
-    sides,
-    assumptions,
-    estimates: { trip: pointOf(beliefs.trip, 1), release: pointOf(beliefs.release, -1) },
-  };
-  return { ...settled, ...decide(settled, beliefs) };
+/** Completes a state whose outcomes are in: windows and assumptions that fit them, estimates and the next command. */
+function complete(state: SearchState, lost: Pair<boolean>): SearchState {
+  const { sides, assumptions, beliefs } = fitSides(state, lost);
+  const estimates = { trip: pointOf(beliefs.trip, 1), release: pointOf(beliefs.release, -1) };
+  const fitted = { ...state, sides, assumptions, estimates };
+  return { ...fitted, ...decide(fitted, beliefs) };
 }
 
 /**
@@ -123,7 +68,7 @@ export function beginSearch(settings: SearchSettings, start: { volts: number; ou
     sides,
     assumptions: 0,
     overshoot,
-    unseenMass: assumedMass(settings, 0, windowsOf(sides, 'wide')),
+    unseenMass: assumedMass(settings, 0, gridsOf(sides, 'wide')),
     counts: { settles: 0, waypoints: 0, endCheckSettles: 0 },
     settlesAtTop: 0,
     settlesAtBottom: 0,
@@ -131,7 +76,7 @@ export function beginSearch(settings: SearchSettings, start: { volts: number; ou
     estimates: { trip: nowhere, release: nowhere },
     command: { kind: 'apply', volts: start.volts, dwell: 'settle' },
   };
-  return settle(state, { trip: false, release: false });
+  return complete(state, { trip: false, release: false });
 }
 
 /** The next command; the same one until its outcome is observed. */
@@ -186,11 +131,10 @@ export function observeSearch(state: SearchState, seen: SearchObservation): Sear
       waypoints: state.counts.waypoints + (checking || isSettle ? 0 : 1),
       endCheckSettles: state.counts.endCheckSettles + (checking ? 1 : 0),
     },
-    settlesAtTop: state.settlesAtTop + (isSettle && seen.output === 'off' && atTop(state, learnt.level) ? 1 : 0),
-    settlesAtBottom:
-      state.settlesAtBottom + (isSettle && seen.output === 'on' && atBottom(state, command.volts) ? 1 : 0),
+    settlesAtTop: seen.output === 'on' ? 0 : state.settlesAtTop + (isSettle && atTop(state, learnt.level) ? 1 : 0),
+    settlesAtBottom: isSettle && seen.output === 'on' && atBottom(state, command.volts) ? 1 : 0,
     check: observeCheck(state.check, armed, flipped),
   };
   const surprised = predicted < surprising;
-  return settle(next, { trip: surprised && armed === 'trip', release: surprised && armed === 'release' });
+  return complete(next, { trip: surprised && armed === 'trip', release: surprised && armed === 'release' });
 }

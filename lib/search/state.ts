@@ -28,7 +28,7 @@ export interface SearchState {
   /** Mass that the first level's assumptions held before any outcome. */
   readonly unseenMass: number;
   readonly counts: SearchCounts;
-  /** Settles at the highest level allowed with the output off, and at the lowest with it on. */
+  /** Settles in which the output stayed off at the highest level allowed, or on at the lowest. */
   readonly settlesAtTop: number;
   readonly settlesAtBottom: number;
   readonly check: EndCheck;

@@ -1,0 +1,77 @@
+import { type Level, type Pair, coupledWeights } from './assumptions';
+import { type Belief, weighBelief } from './belief';
+import { type Window, rebuildPosterior } from './grid-posterior';
+import { allowedLevel } from './level-drop';
+import { levelRanges } from './level-ranges';
+import type { OvershootPrior } from './overshoot-range';
+import type { Side } from './state';
+import type { SearchSettings } from './types';
+import { betterWindow, windowAround } from './window';
+
+export const pointNames = ['trip', 'release'] as const;
+/** Windows move by their own width at most, so a few rounds reach any threshold. */
+const mostResizings = 4;
+
+export const gridsOf = (sides: Pair<Side>, which: 'wide' | 'fine') => ({
+  trip: sides.trip[which],
+  release: sides.release[which],
+});
+
+/** Both posteriors under the assumptions of a level. */
+export function weighSides(settings: SearchSettings, level: Level, sides: Pair<Side>, which: 'wide' | 'fine') {
+  const grids = gridsOf(sides, which);
+  const weights = coupledWeights(settings, level, grids);
+  return { trip: weighBelief(grids.trip, weights.trip), release: weighBelief(grids.release, weights.release) };
+}
+
+export interface Fitted {
+  sides: Pair<Side>;
+  assumptions: Level;
+  beliefs: Pair<Belief>;
+}
+
+export interface Unfitted extends Omit<Fitted, 'beliefs'> {
+  settings: SearchSettings;
+  overshoot: OvershootPrior;
+  unseenMass: number;
+}
+
+/**
+ * Fits windows and assumptions to the outcomes. A `lost` threshold's window is placed anew from its wide grid; every
+ * changed window is filled from the whole history, so that nothing depends on where the window was before.
+ */
+export function fitSides(unfitted: Unfitted, lost: Pair<boolean>): Fitted {
+  const { settings, overshoot, unseenMass } = unfitted;
+  const noise = settings.noiseVolts;
+  const refilled = (side: Side, window: Window): Side => ({
+    ...side,
+    fine: rebuildPosterior(window, side.history, noise, overshoot),
+  });
+  let { sides, assumptions } = unfitted;
+  let placeAnew = lost;
+  for (;;) {
+    const ranges = levelRanges(settings, assumptions);
+    if (placeAnew.trip || placeAnew.release) {
+      const wide = weighSides(settings, assumptions, sides, 'wide');
+      const placed = { ...sides };
+      for (const name of pointNames)
+        if (placeAnew[name]) placed[name] = refilled(sides[name], windowAround(wide[name], ranges[name], noise));
+      sides = placed;
+    }
+    let beliefs = weighSides(settings, assumptions, sides, 'fine');
+    for (let i = 0; i < mostResizings; i++) {
+      const resized = { ...sides };
+      for (const name of pointNames) {
+        const window = betterWindow(beliefs[name], ranges[name], noise);
+        if (window) resized[name] = refilled(sides[name], window);
+      }
+      if (resized.trip === sides.trip && resized.release === sides.release) break;
+      sides = resized;
+      beliefs = weighSides(settings, assumptions, sides, 'fine');
+    }
+    const allowed = allowedLevel(settings, assumptions, gridsOf(sides, 'wide'), beliefs, unseenMass);
+    if (allowed === assumptions) return { sides, assumptions, beliefs };
+    assumptions = allowed;
+    placeAnew = { trip: true, release: true };
+  }
+}
