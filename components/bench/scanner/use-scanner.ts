@@ -36,7 +36,8 @@ export function useScanner(handlers: ScannerHandlers) {
     };
     const onKey = (event: KeyboardEvent) => {
       if (event.isComposing || event.ctrlKey || event.metaKey || event.altKey) return;
-      const now = performance.now();
+      // When the key went down, not when a busy page got round to it.
+      const now = event.timeStamp;
       if (event.key === 'Escape') return newest.current.onStop();
       if (event.key.length === 1) {
         if (event.key === ' ' && !state.held) return;
