@@ -1,7 +1,9 @@
 import { createHash } from 'node:crypto';
 import type { Database } from '@/db/client';
-import { findNextUntested, findSimulatedBoard } from '@/db/queries/station-boxes';
+import { findSimulatedBoard } from '@/db/queries/station-boxes';
 import { findReferenceBoard } from '@/db/queries/station-references';
+import { listUnitRecordsOfLot } from '@/db/queries/unit-records';
+import { boardStanding } from '@/lib/decision/board-standing';
 import type { BoardBox, BoardOrder } from '@/stations/simulation/simulated-hands';
 
 /** The box of boards beside a simulated bench: those of its lot, and the reference boards. */
@@ -9,7 +11,8 @@ export function boardBox(db: Database, lotId: () => string | null): BoardBox {
   return {
     async nextSerial() {
       const lot = lotId();
-      return lot ? findNextUntested(db, lot) : null;
+      const records = lot ? await listUnitRecordsOfLot(db, lot) : [];
+      return records.find((record) => boardStanding(record).kind === 'may-be-tested')?.serial ?? null;
     },
     async orderOf(serial): Promise<BoardOrder | null> {
       const drawn = await findSimulatedBoard(db, serial);

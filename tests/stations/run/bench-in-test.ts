@@ -3,11 +3,13 @@ import { sequences } from '@/db/seed/sequences';
 import type { DefectKind } from '@/lib/contracts/bench-command';
 import type { BenchView } from '@/lib/contracts/bench-view';
 import type { RunPlan } from '@/lib/run/types';
+import type { Clock } from '@/stations/clock/clock';
 import { VirtualClock } from '@/stations/clock/virtual-clock';
 import { openBench, type Bench } from '@/stations/instruments/open-bench';
 import { Station } from '@/stations/run/station';
 import { drawBoard } from '@/stations/simulation/draw-board';
 import { SimulatedBoard } from '@/stations/simulation/simulated-board';
+import type { SimulatedFixture } from '@/stations/simulation/simulated-fixture';
 import { FakePorts } from './fake-ports';
 import { Person } from './person';
 
@@ -32,7 +34,7 @@ export function planFor(serial: string, runId: string, over: Partial<RunPlan> = 
 }
 
 export interface BenchInTest {
-  clock: VirtualClock;
+  clock: Clock;
   bench: Bench;
   ports: FakePorts;
   station: Station;
@@ -48,18 +50,24 @@ export interface BenchInTest {
 export interface BenchInTestOptions {
   hasController?: boolean;
   plan?: Partial<RunPlan>;
+  /** Another bench than the simulated one on a virtual clock; `fixture` is where its board lies. */
+  made?: { clock: Clock; bench: Bench; fixture: SimulatedFixture };
   instead?: (view: BenchView, test: BenchInTest) => boolean;
 }
 
-/** A station with the real engine over real bytes on a virtual clock, a server in memory and an obedient operator. */
-export async function benchInTest(options: BenchInTestOptions = {}): Promise<BenchInTest> {
-  const { hasController = true } = options;
+async function simulatedOnVirtualClock(hasController: boolean) {
   const clock = new VirtualClock();
   const bench = await openBench(
     { link: { kind: 'simulated', seed: 11, baudRate: 115_200, hasController }, hasWiperProbe: false },
     clock,
   );
-  const fixture = bench.simulation!.fixture;
+  return { clock, bench, fixture: bench.simulation!.fixture };
+}
+
+/** A station with the real engine over real bytes on a virtual clock, a server in memory and an obedient operator. */
+export async function benchInTest(options: BenchInTestOptions = {}): Promise<BenchInTest> {
+  const { hasController = true } = options;
+  const { clock, bench, fixture } = options.made ?? (await simulatedOnVirtualClock(hasController));
   const ports = new FakePorts((serial, runId) => planFor(serial, runId, { hasController, ...options.plan }));
   const views: BenchView[] = [];
   const problems: unknown[] = [];
