@@ -75,8 +75,12 @@ export class BenchPerson {
   }
 
   private async emptyFixture(): Promise<void> {
-    await this.pressIfThere('Open lid');
-    await this.pressIfThere('Remove board');
+    const emptied = this.page.getByRole('button', { name: /^Place / }).first();
+    for (let tries = 0; tries < 50 && !(await emptied.isVisible()); tries += 1) {
+      if (!(await this.pressIfThere('Open lid'))) await this.pressIfThere('Remove board');
+      await this.page.waitForTimeout(60);
+    }
+    await this.page.getByRole('button', { name: 'Close lid' }).waitFor();
   }
 
   /** Takes the next board of the lot through the bench, doing at each screen what it asks. `onScreen` may take pictures. */
