@@ -25,7 +25,7 @@ export function SupplyGauge({ supply }: { supply: SupplyView }) {
     <div>
       <p className="text-b-label text-ink-2">{t('atFixture')}</p>
       <p className="leading-none">
-        <span className="font-num text-[calc(88*var(--sw-b))] font-bold">{oneDigit(supply.volts)}</span>
+        <span className="font-num text-[calc(84*var(--sw-b))] font-bold">{oneDigit(supply.volts)}</span>
         <span className="ml-2 text-[calc(54*var(--sw-b))]">V</span>
       </p>
       <svg

@@ -42,14 +42,16 @@ interface Press {
   height: number;
 }
 
-/** Everything that can be pressed, with its place in pixels. */
+/** Everything of the bench that can be pressed, with its place in pixels; the practice tray is not the bench. */
 const presses = (): Promise<Press[]> =>
   page.evaluate(() => {
     const flood = document.querySelector('[data-flood]');
-    return [...(flood ?? document).querySelectorAll('button, a[href], select, input')].map((element) => {
-      const { x, y, width, height } = element.getBoundingClientRect();
-      return { name: element.textContent ?? '', x, y, width, height };
-    });
+    return [...(flood ?? document).querySelectorAll('button, a[href], select, input')]
+      .filter((element) => !element.closest('aside'))
+      .map((element) => {
+        const { x, y, width, height } = element.getBoundingClientRect();
+        return { name: element.textContent ?? '', x, y, width, height };
+      });
   });
 
 describe.each(['day', 'night'] as const)('by %s', (scheme) => {

@@ -15,7 +15,7 @@ export function PinPad({ pin, retryAtIso }: { pin: Pin; retryAtIso: string | nul
   const { clock } = useNumbers();
   const ready = pin.complete && !waiting;
   return (
-    <div className="grid flex-none grid-cols-3 content-start gap-6" role="group" aria-label={t('keys')}>
+    <div className="grid flex-none grid-cols-3 content-start gap-(--sw-bench-gap)" role="group" aria-label={t('keys')}>
       {keys.map((key) => (
         <DigitKey key={key} digit={key} onPress={pin.press} />
       ))}

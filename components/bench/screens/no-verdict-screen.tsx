@@ -56,7 +56,7 @@ export function NoVerdictScreen({ screen, run }: { screen: NoVerdictView; run: R
             </p>
           </div>
         </div>
-        <div className="flex min-h-0 flex-1 justify-between gap-12 px-14 py-6 pr-12 max-[900px]:flex-col">
+        <div className="flex min-h-0 flex-1 justify-between gap-9 px-14 py-5 pr-10 max-[900px]:flex-col">
           <div className="flex min-w-0 flex-1 flex-col gap-4.5">
             <div role="alert">
               {off ? (
@@ -73,7 +73,7 @@ export function NoVerdictScreen({ screen, run }: { screen: NoVerdictView; run: R
               <p className="text-b-line leading-[1.3] text-ink-2">{t('again')}</p>
             )}
           </div>
-          <div className="w-100 flex-none max-[900px]:w-full">
+          <div className="w-108 flex-none max-[900px]:w-full">
             <SupplyGauge supply={supply} />
             <Cautions which={['supply-off', 'eyes', 'site-rules']} className="mt-3" />
           </div>

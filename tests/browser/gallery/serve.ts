@@ -13,11 +13,13 @@ export async function serveGallery(): Promise<{ address: string; close: () => Pr
   const shared = {
     configFile: false as const,
     root: join(root, 'tests/browser/gallery'),
-    logLevel: 'warn' as const,
+    logLevel: 'error' as const,
     build: { outDir: folder, emptyOutDir: true, minify: false, reportCompressedSize: false },
   };
   await build({
     ...shared,
+    // The test runner's environment is not production, and would ask for the development form of JSX.
+    oxc: { jsx: { runtime: 'automatic', development: false } },
     resolve: { alias: { '@': root } },
     define: { 'process.env': {}, 'process.env.NODE_ENV': '"production"' },
     css: { postcss: { plugins: [tailwindcss()] } },
