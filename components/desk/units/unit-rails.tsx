@@ -1,12 +1,11 @@
 'use client';
 
-import { NextIntlClientProvider } from 'next-intl';
 import { useState } from 'react';
 import { createReadingStore } from '@/components/bench/live/reading-store';
 import { Rails } from '@/components/bench/rails/rails';
 import type { RailFlag, RailsView } from '@/lib/contracts/bench-view';
 import type { UnitPage, UnitRun } from '@/lib/contracts/unit-page';
-import en from '@/lib/messages/en.json';
+import { English } from '../english';
 
 type Measured = { trip: number; release: number };
 
@@ -89,9 +88,9 @@ export function UnitRails({ unit }: { unit: UnitPage }) {
   const drawn = railsOfUnit(unit);
   if (!drawn) return null;
   return (
-    <NextIntlClientProvider locale="en" messages={en} timeZone="UTC">
+    <English>
       <Rails rails={drawn.rails} readings={readings} />
       {drawn.hollowIs ? <p className="text-center text-cap text-ink-2">{drawn.hollowIs}</p> : null}
-    </NextIntlClientProvider>
+    </English>
   );
 }
