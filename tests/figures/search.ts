@@ -62,8 +62,12 @@ export const search: Figure = {
     await searchRows(share, (row, boards) => {
       const summary = summarise(row, boards, at9600, at115200);
       summaries.set(row, summary);
-      const done = `${summaries.size}/${rows.length}`;
-      progress(`${done} ${row.name}, noise ${row.noiseMillivolts} mV: ${summary.columns.mean} settles`);
+      const { meanSettles, rmsMillivolts, wrongBy5, wrongClass } = summary;
+      const rms = Number.isNaN(rmsMillivolts) ? '' : `, RMS ${round(rmsMillivolts, 2)} mV`;
+      progress(
+        `${summaries.size}/${rows.length} ${row.name}, noise ${row.noiseMillivolts} mV: ${round(meanSettles, 1)} settles` +
+          `${rms}, ${wrongBy5} by over 5 mV, ${wrongClass} in the wrong class`,
+      );
     });
     const fine = summaries.get(targetRows.fine)!;
     const quick = summaries.get(targetRows.quick)!;
