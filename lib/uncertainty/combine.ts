@@ -1,4 +1,5 @@
 import { coverageFactor } from './student-t';
+import { effectiveDegrees } from './welch-satterthwaite';
 
 /** One line of a budget. `standard` is in the unit of the result, `degrees` its degrees of freedom (Infinity for type B). */
 export interface Contribution {
@@ -15,7 +16,7 @@ export interface CombinedUncertainty {
   expanded: number;
 }
 
-const coverage = 0.9545;
+export const usualCoverage = 0.9545;
 
 /**
  * Law of propagation for uncorrelated contributions of unit sensitivity, effective degrees of freedom by Welch and
@@ -23,9 +24,7 @@ const coverage = 0.9545;
  */
 export function combineContributions(contributions: Contribution[]): CombinedUncertainty {
   const standard = Math.sqrt(contributions.reduce((sum, c) => sum + c.standard ** 2, 0));
-  const inverse = contributions.reduce((sum, c) => sum + c.standard ** 4 / c.degrees, 0);
-  const effective = inverse > 0 ? standard ** 4 / inverse : Infinity;
-  const effectiveDegrees = Number.isFinite(effective) ? Math.max(1, Math.floor(effective)) : Infinity;
-  const k = coverageFactor(coverage, effectiveDegrees);
-  return { standard, effectiveDegrees, coverageFactor: k, expanded: k * standard };
+  const degrees = effectiveDegrees(contributions);
+  const k = coverageFactor(usualCoverage, degrees);
+  return { standard, effectiveDegrees: degrees, coverageFactor: k, expanded: k * standard };
 }
