@@ -11,8 +11,14 @@ import { askVerify, judgeVerify, relearn } from './verify';
 /** Prompted on a fast link: look by look the tracker follows the trip point, and the dial counts down with it. */
 export type FollowedPhase =
   | { kind: 'followed'; step: 'arm' }
-  | { kind: 'followed'; step: 'look'; tracker: Tracker; guide: LiveGuide; output: OutputState; fromVolts: number }
+  | { kind: 'followed'; step: 'look'; tracker: Tracker; guide: LiveGuide; stand: Stand }
   | { kind: 'followed'; step: 'verify' };
+/** Where the last look left the supply and the output, and the hysteresis there. */
+interface Stand {
+  output: OutputState;
+  volts: number;
+  hysteresisVolts: number;
+}
 type Looking = Extract<FollowedPhase, { step: 'look' }>;
 
 /** The first look comes from this far above the trip point, output on. */
@@ -57,26 +63,31 @@ function promptTurn(state: TrimState, seen: { volts: number; output: OutputState
     step: 'look',
     tracker,
     guide: guiding,
-    output: seen.output,
-    fromVolts: seen.volts,
+    stand: { output: seen.output, volts: seen.volts, hysteresisVolts: releaseFor(state, volts) - volts },
   });
 }
 
 /** The next look is where the output flips as likely as not. */
 function look(state: TrimState, phase: Looking): TrimState {
+  const { stand } = phase;
   const { volts: trip, movingShare } = phase.tracker.trip;
-  const at = phase.output === 'on' ? trip : trackedRelease(phase.tracker, releaseFor(state, trip) - trip);
-  const wide = Math.abs(at - phase.fromVolts) > wideMoveVolts;
-  const path = moveWithoutPassing(phase.fromVolts, at, supplyLimits(state));
+  const at = stand.output === 'on' ? trip : trackedRelease(phase.tracker, stand.hysteresisVolts);
+  const limits = supplyLimits(state);
+  const step = at - stand.volts;
+  const precise = Math.abs(step) > wideMoveVolts && movingShare < restingShare;
+  const path = moveWithoutPassing(stand.volts, at, limits);
+  // Waypoints also where a single step would peak above the absolute maximum.
   const command: TrimCommand =
-    wide && movingShare < restingShare ? { kind: 'hold', ...path } : { kind: 'probe', volts: path.volts };
+    precise || at + limits.overshoot * step > limits.maxVolts
+      ? { kind: 'hold', ...path }
+      : { kind: 'probe', volts: path.volts };
   return { ...state, phase, command };
 }
 
 function looked(state: TrimState, phase: Looking, seen: { volts: number; output: OutputState }): TrimState {
   const { settings, pace, command } = state;
   const last = command.kind === 'hold' ? command.waypointsVolts.at(-1) : undefined;
-  const { volts: before } = phase.tracker.trip;
+  const { stand } = phase;
   const tracker = track(
     phase.tracker,
     {
@@ -84,12 +95,12 @@ function looked(state: TrimState, phase: Looking, seen: { volts: number; output:
       askedSign: (state.advice?.raises ?? true) ? 1 : -1,
       noiseVolts: settings.noiseVolts,
       overshoot: settings.overshoot,
-      hysteresisVolts: releaseFor(state, before) - before,
+      hysteresisVolts: stand.hysteresisVolts,
     },
     {
-      fromVolts: last ?? phase.fromVolts,
+      fromVolts: last ?? stand.volts,
       volts: seen.volts,
-      before: phase.output,
+      before: stand.output,
       after: seen.output,
       atMs: state.atMs,
     },
@@ -101,6 +112,13 @@ function looked(state: TrimState, phase: Looking, seen: { volts: number; output:
     const stopped: TrimState = { ...guided.state, stage: 'stop-turning', phase: { kind: 'followed', step: 'verify' } };
     return askVerify(stopped, { ...nearTarget(state), tripMeanVolts: volts });
   }
-  const next: Looking = { ...phase, tracker, guide: guided.guide, output: seen.output, fromVolts: seen.volts };
+  // Only looks from the off side need the hysteresis where the point is now.
+  const hysteresisVolts = seen.output === 'off' ? releaseFor(state, volts) - volts : stand.hysteresisVolts;
+  const next: Looking = {
+    ...phase,
+    tracker,
+    guide: guided.guide,
+    stand: { output: seen.output, volts: seen.volts, hysteresisVolts },
+  };
   return look(guided.state, next);
 }

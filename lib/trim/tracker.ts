@@ -44,7 +44,7 @@ export interface TrackerLook {
   atMs: number;
 }
 
-const particles = 600;
+const particles = 400;
 /** Mean times until a still hand turns and a turning one rests, and the pull of the rate's wander a second. */
 const startSeconds = 1.5;
 const restSeconds = 0.7;
@@ -75,13 +75,12 @@ export function track(tracker: Tracker, model: TrackerModel, look: TrackerLook):
   const next: Particles = {
     trips: tracker.trips.slice(),
     rates: tracker.rates.slice(),
-    hysteresisErrors: tracker.hysteresisErrors.slice(),
+    hysteresisErrors: tracker.hysteresisErrors,
   };
   const random = generator(tracker.seed);
   drift(next, model, Math.max(0, look.atMs - tracker.atMs) / 1000, random);
-  const weights = weigh(next, model, look);
-  redraw(next, weights, random);
-  return { ...next, trip: summarise(next), atMs: look.atMs, seed: random.seed() };
+  const drawn = redraw(next, weigh(next, model, look), random);
+  return { ...drawn, trip: summarise(drawn), atMs: look.atMs, seed: random.seed() };
 }
 
 function summarise({ trips, rates }: Particles): TrackedTrip {
@@ -101,6 +100,7 @@ export function trackedRelease(tracker: Tracker, hysteresisVolts: number): numbe
   return releases[particles >> 1]!;
 }
 
+/** In place, on the trips and rates. */
 function drift(tracker: Particles, model: TrackerModel, seconds: number, random: Generator): void {
   const starts = 1 - Math.exp(-seconds / startSeconds);
   const rests = 1 - Math.exp(-seconds / restSeconds);
@@ -115,7 +115,7 @@ function drift(tracker: Particles, model: TrackerModel, seconds: number, random:
         rates[i] = sign * model.briskVoltsPerSecond * 1.5 * Math.exp(-4 * random.uniform());
       }
     } else if (draw < rests) rates[i] = 0;
-    else rates[i] = rates[i]! * (1 + wander * random.bell());
+    else rates[i] = rates[i]! * Math.max(0.2, 1 + wander * random.bell());
     trips[i] = trips[i]! + rates[i]! * seconds + 0.0003 * random.bell();
   }
 }
@@ -144,22 +144,26 @@ function weigh(tracker: Particles, model: TrackerModel, look: TrackerLook): Floa
 }
 
 /** Systematic redrawing in proportion to the weights. */
-function redraw(tracker: Particles, weights: Float64Array, random: Generator): void {
+function redraw(from: Particles, weights: Float64Array, random: Generator): Particles {
   let total = 0;
   for (const weight of weights) total += weight;
   const step = total / particles;
   let position = random.uniform() * step;
   let sum = weights[0]!;
   let source = 0;
-  const { trips, rates, hysteresisErrors } = tracker;
-  const from = { trips: trips.slice(), rates: rates.slice(), errors: hysteresisErrors.slice() };
+  const drawn: Particles = {
+    trips: new Float64Array(particles),
+    rates: new Float64Array(particles),
+    hysteresisErrors: new Float64Array(particles),
+  };
   for (let i = 0; i < particles; i++) {
     while (sum < position && source < particles - 1) sum += weights[++source]!;
-    trips[i] = from.trips[source]!;
-    rates[i] = from.rates[source]!;
-    hysteresisErrors[i] = from.errors[source]!;
+    drawn.trips[i] = from.trips[source]!;
+    drawn.rates[i] = from.rates[source]!;
+    drawn.hysteresisErrors[i] = from.hysteresisErrors[source]!;
     position += step;
   }
+  return drawn;
 }
 
 interface Generator {
