@@ -61,3 +61,7 @@ export async function findOpenRunOfUnit(db: Reader, unitId: string): Promise<{ s
     .where(and(eq(runs.unitId, unitId), isNull(runs.endedAt)));
   return row ?? null;
 }
+
+export async function isRunOpen(db: Reader, runId: string): Promise<boolean> {
+  return (await db.$count(runs, and(eq(runs.id, runId), isNull(runs.endedAt)))) > 0;
+}

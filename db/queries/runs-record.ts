@@ -6,11 +6,10 @@ import { traces } from '@/db/schema/traces';
 import type { Measurement } from '@/lib/run/types';
 import type { Trace } from '@/lib/run/traces';
 
-/** The run, locked until the transaction ends. Throws when it does not exist. */
-export async function getRunForUpdate(tx: Transaction, runId: string): Promise<typeof runs.$inferSelect> {
+/** The run, locked until the transaction ends. */
+export async function findRunForUpdate(tx: Transaction, runId: string): Promise<typeof runs.$inferSelect | null> {
   const [row] = await tx.select().from(runs).where(eq(runs.id, runId)).for('update');
-  if (!row) throw new Error(`There is no run ${runId}.`);
-  return row;
+  return row ?? null;
 }
 
 /** Before the run is closed: a closed run takes nothing more. */

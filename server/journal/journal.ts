@@ -1,4 +1,4 @@
-import { mkdir, open, readdir, readFile, rm, type FileHandle } from 'node:fs/promises';
+import { mkdir, open, readdir, readFile, rename, rm, type FileHandle } from 'node:fs/promises';
 import { join } from 'node:path';
 import type { EventBatch, RunRecord } from '../operations/runs/run-record';
 
@@ -45,6 +45,11 @@ export class Journal {
   /** The run is stored: its file has done its work. */
   async forget(runId: string): Promise<void> {
     await rm(this.pathOf(runId), { force: true });
+  }
+
+  /** Nobody claims the run, as after the database was replaced: its file is kept under another name, for a person to look at. */
+  async setAside(runId: string): Promise<void> {
+    await rename(this.pathOf(runId), `${this.pathOf(runId)}.unclaimed`);
   }
 
   private pathOf(runId: string): string {

@@ -1,4 +1,5 @@
 import type { Database } from '@/db/client';
+import { isRunOpen } from '@/db/queries/runs-open';
 import type { RunEvent, RunPlan, RunResult } from '@/lib/run/types';
 import type { StepGroup } from '@/lib/sequence/step';
 import { appendEvents } from '../operations/runs/append-events';
@@ -42,9 +43,9 @@ export class RunRecorder {
     let stored = 0;
     for (const { runId, batches, ending } of await this.journal.list()) {
       if (this.open.has(runId) || !ending) continue;
-      await recordRun(this.db, { runId, batches, ...ending }, 'journal');
-      await this.journal.forget(runId);
-      stored++;
+      const recorded = await recordRun(this.db, { runId, batches, ...ending }, 'journal');
+      await (recorded.ok ? this.journal.forget(runId) : this.setAside(runId));
+      if (recorded.ok) stored++;
     }
     return stored;
   }
@@ -53,9 +54,15 @@ export class RunRecorder {
   async handOverBroken(): Promise<void> {
     for (const { runId, batches, ending } of await this.journal.list()) {
       if (ending) continue;
-      await appendEvents(this.db, runId, batches);
-      await this.journal.forget(runId);
+      const open = await isRunOpen(this.db, runId);
+      if (open) await appendEvents(this.db, runId, batches);
+      await (open ? this.journal.forget(runId) : this.setAside(runId));
     }
+  }
+
+  private async setAside(runId: string): Promise<void> {
+    this.log.warn({ runId }, 'the journal has a run that the database does not know');
+    await this.journal.setAside(runId);
   }
 }
 
@@ -95,9 +102,10 @@ export class RecordedRun {
     await this.journalled(() => this.file?.close());
     const record: RunRecord = { runId: this.runId, batches: this.batches, ...ending };
     try {
-      const { validUntilIso } = await recordRun(this.db, record, 'station');
+      const recorded = await recordRun(this.db, record, 'station');
+      if (!recorded.ok) throw new Error(recorded.sentence);
       await this.journalled(() => this.journal.forget(this.runId));
-      return { stored: true, validUntilIso };
+      return { stored: true, ...recorded.value };
     } catch (error) {
       this.log.warn({ error, runId: this.runId }, 'a run waits in the journal until the database is back');
       return { stored: false, validUntilIso: null };

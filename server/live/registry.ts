@@ -16,6 +16,7 @@ const wiring = ({ scheme: _look, ...row }: BenchRow) => row;
 /** The stations of this process: one object a configured station, however its configuration changes. */
 export class Registry {
   private readonly stations = new Map<string, LiveStation>();
+  private stopped = false;
 
   constructor(private readonly options: RegistryOptions) {}
 
@@ -37,6 +38,7 @@ export class Registry {
   /** Follows what the administrator changed. A station that is at work changes when it is free. */
   async follow(): Promise<void> {
     const rows = await listBenches(this.options.db);
+    if (this.stopped) return;
     for (const live of this.all()) {
       const row = rows.find((each) => each.id === live.row.id);
       const unchanged = row && isDeepStrictEqual(wiring(row), wiring(live.row));
@@ -47,6 +49,7 @@ export class Registry {
 
   /** Every supply off with read-back. */
   async stop(): Promise<void> {
+    this.stopped = true;
     await Promise.all(this.all().map((live) => live.station.stop()));
   }
 

@@ -53,7 +53,7 @@ export async function startLive({ httpServer, log }: { httpServer: HttpServer; l
   const supplies = await registry.start();
   await recorder.storeEnded();
   await recorder.handOverBroken();
-  const recovered = await recoverOpenRuns(db, (stationId) => supplies.get(stationId) ?? { confirmed: false });
+  const recovered = await recoverOpenRuns(db, (stationId) => supplies.get(stationId) ?? { confirmed: false }, log);
   if (recovered > 0) log.warn({ recovered }, 'runs left open by a crash were closed without a verdict');
 
   const open = (gateway = new Gateway({ httpServer, log, stationByCode: (code) => registry.byCode(code) }));
@@ -78,9 +78,9 @@ export async function startLive({ httpServer, log }: { httpServer: HttpServer; l
   return {
     async stop() {
       clearInterval(timer);
-      await looking;
       await registry.stop();
-      await open.close();
+      await looking;
+      open.close();
       await sessions.close();
       await enrolments.close();
     },

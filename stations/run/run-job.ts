@@ -1,10 +1,10 @@
 import { compareReference } from '@/lib/bench/reference-check';
 import type { ReferenceCheck, RunEnding } from '@/lib/bench/types';
 import type { RunView } from '@/lib/contracts/bench-view';
+import { brokenRun } from '@/lib/run/broken-run';
 import type { RunPlan, RunResult } from '@/lib/run/types';
 import type { Clock } from '../clock/clock';
 import type { Bench } from '../instruments/open-bench';
-import type { SafeOffReport } from '../instruments/safe-off';
 import { faultOf } from './fault-of';
 import type { RunLog } from './ports';
 import { RunPerformer, type RunPerformerOptions } from './run-performer';
@@ -61,7 +61,7 @@ async function resultOfRun(job: RunJob): Promise<{ result: RunResult; view: RunV
     return { result: await performer.perform(), view: performer.view() };
   } catch (error) {
     onProblem(error);
-    const result = brokenOff(error, bench ? await bench.safeOff() : { confirmed: false });
+    const result = brokenRun(bench ? await bench.safeOff() : { confirmed: false }, faultOf(error));
     return { result, view: performer && brokenView(performer.view(), result) };
   } finally {
     onPerformer(null);
@@ -80,26 +80,5 @@ function brokenView(view: RunView, { faultCode, faultDetail, supplyOff }: RunRes
       failingWhenStopped: false,
       stoppedAtVolts: null,
     },
-  };
-}
-
-/** A run whose engine failed: the station's fault, never the board's. */
-function brokenOff(error: unknown, off: SafeOffReport): RunResult {
-  const { code, detail } = faultOf(error);
-  return {
-    verdict: 'no-verdict',
-    rejectReason: null,
-    likelyCause: null,
-    noVerdictReason: 'interrupted',
-    faultCode: code,
-    faultDetail: detail,
-    failingWhenStopped: false,
-    supplyOff: off.confirmed
-      ? { confirmed: true, volts: off.volts, by: off.by }
-      : { confirmed: false, volts: null, by: null },
-    measurements: [],
-    trimRounds: 0,
-    turnsAdvised: 0,
-    adjustments: [],
   };
 }

@@ -1,39 +1,41 @@
 import type { Database, Transaction } from '@/db/client';
 import { insertRunEvents } from '@/db/queries/runs-open';
-import { closeRun, getRunForUpdate, insertMeasurements, insertTraces } from '@/db/queries/runs-record';
+import { closeRun, findRunForUpdate, insertMeasurements, insertTraces } from '@/db/queries/runs-record';
 import { findStationPrinter } from '@/db/queries/station-benches';
 import { getReferencePoints, insertDailyCheck } from '@/db/queries/station-references';
 import { findDailyCheck } from '@/db/queries/station-readiness';
 import { compareReference } from '@/lib/bench/reference-check';
+import { refusal, success, type Outcome } from '@/lib/contracts/outcome';
 import type { RunCloser } from '@/lib/contracts/stored-states';
 import { tracesOf } from '@/lib/run/traces';
 import { printLabel } from '../labels/print-label';
 import type { RunRecord } from './run-record';
 
-type Run = Awaited<ReturnType<typeof getRunForUpdate>>;
+type Run = NonNullable<Awaited<ReturnType<typeof findRunForUpdate>>>;
 
 /** Hours that a passed daily check lasts where none was made before. */
 const usualValidHours = 12;
 
 /**
  * Stores a run that ended: its events, traces and measurements, its verdict, and the label or daily check that follows from
- * it, all or nothing. Exactly once: a run that is closed already is left as it is.
+ * it, all or nothing. Exactly once: a run that is closed already is left as it is. Codes: run-unknown.
  */
 export async function recordRun(
   db: Database,
   record: RunRecord,
   closedBy: RunCloser,
-): Promise<{ validUntilIso: string | null }> {
+): Promise<Outcome<{ validUntilIso: string | null }>> {
   return db.transaction(async (tx) => {
-    const run = await getRunForUpdate(tx, record.runId);
-    if (run.endedAt) return { validUntilIso: null };
+    const run = await findRunForUpdate(tx, record.runId);
+    if (!run) return refusal('run-unknown', `The database knows nothing of run ${record.runId}.`);
+    if (run.endedAt) return success({ validUntilIso: null });
     await storeResults(tx, record);
     await close(tx, record, closedBy);
     if (run.kind === 'production' && record.result.verdict === 'pass') {
       const printerId = await findStationPrinter(tx, run.stationId);
       await printLabel(tx, { unitId: run.unitId!, runId: run.id, printerId });
     }
-    return { validUntilIso: run.kind === 'daily-check' ? await storeDailyCheck(tx, run, record) : null };
+    return success({ validUntilIso: run.kind === 'daily-check' ? await storeDailyCheck(tx, run, record) : null });
   });
 }
 

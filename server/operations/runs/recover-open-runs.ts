@@ -1,5 +1,6 @@
 import type { Database } from '@/db/client';
 import { listOpenRuns, listRunEvents, type OpenRun } from '@/db/queries/runs-open';
+import { brokenRun } from '@/lib/run/broken-run';
 import { advanceRun, beginRun, resultOf } from '@/lib/run/run';
 import type { RunEvent, RunPlan, RunResult } from '@/lib/run/types';
 import { currentGroup, viewRun } from '@/lib/run/view';
@@ -16,17 +17,34 @@ export type SupplyFound = { confirmed: true; volts: number; by: 'meter' | 'suppl
 export async function recoverOpenRuns(
   db: Database,
   supplyOf: (stationId: string) => SupplyFound,
+  log: Log,
   now = new Date(),
 ): Promise<number> {
   const open = await listOpenRuns(db);
-  for (const run of open) await recover(db, run, supplyOf(run.stationId), now);
+  for (const run of open) await recover(db, run, supplyOf(run.stationId), log, now);
   return open.length;
 }
 
-async function recover(db: Database, run: OpenRun, supply: SupplyFound, now: Date): Promise<void> {
-  const { batches, result } = replayBroken(run.plan, await listRunEvents(db, run.id), supply);
+interface Log {
+  warn(details: object, message: string): void;
+}
+
+async function recover(db: Database, run: OpenRun, supply: SupplyFound, log: Log, now: Date): Promise<void> {
+  const { batches, result } = replayOrClose(run, await listRunEvents(db, run.id), supply, log);
   const record = { runId: run.id, batches, result, seconds: null, endedAtIso: now.toISOString() };
   await recordRun(db, record, 'recovery');
+}
+
+type StoredEvents = readonly { n: number; batch: RunEvent[] }[];
+
+/** A record that this version cannot replay is closed all the same: a station must not be held up by it. */
+function replayOrClose(run: OpenRun, stored: StoredEvents, supply: SupplyFound, log: Log) {
+  try {
+    return replayBroken(run.plan, stored, supply);
+  } catch (error) {
+    log.warn({ error, runId: run.id }, 'an interrupted run cannot be replayed; it is closed without measurements');
+    return { batches: [], result: brokenRun(supply) };
+  }
 }
 
 /**
@@ -35,7 +53,7 @@ async function recover(db: Database, run: OpenRun, supply: SupplyFound, now: Dat
  */
 export function replayBroken(
   plan: RunPlan,
-  stored: readonly { n: number; batch: RunEvent[] }[],
+  stored: StoredEvents,
   supply: SupplyFound,
 ): { batches: EventBatch[]; result: RunResult } {
   let atMs = stored[0]?.batch[0]?.atMs ?? 0;
@@ -56,14 +74,14 @@ export function replayBroken(
   }
   const ended = resultOf(state);
   if (!ended) throw new Error(`Run ${plan.runId} did not end when it was broken off.`);
+  const { measurements, trimRounds, turnsAdvised, adjustments } = ended;
   const result: RunResult = {
-    ...ended,
-    verdict: 'no-verdict',
-    rejectReason: null,
-    likelyCause: null,
-    noVerdictReason: 'interrupted',
+    ...brokenRun(supply),
     failingWhenStopped: ended.failingWhenStopped || ended.verdict === 'reject',
-    supplyOff: supply.confirmed ? supply : { confirmed: false, volts: null, by: null },
+    measurements,
+    trimRounds,
+    turnsAdvised,
+    adjustments,
   };
   return { batches, result };
 }

@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { appendFile, mkdtemp, readdir, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -112,7 +113,7 @@ test('a program killed in the middle leaves its events in the journal: recovery 
   const restarted = new RunRecorder(open.db, new Journal(folder), log);
   expect(await restarted.storeEnded()).toBe(0);
   await restarted.handOverBroken();
-  await recoverOpenRuns(open.db, () => ({ confirmed: true, volts: 0.1, by: 'meter' }));
+  await recoverOpenRuns(open.db, () => ({ confirmed: true, volts: 0.1, by: 'meter' }), log);
   const { run, events } = await stored(plan);
   expect(run).toMatchObject({ verdict: 'no-verdict', noVerdictReason: 'interrupted', closedBy: 'recovery' });
   expect(events).toEqual(board.events);
@@ -126,6 +127,16 @@ test('a program killed between the end of a run and its storing loses neither th
   const restarted = new RunRecorder(open.db, new Journal(folder), log);
   expect(await restarted.storeEnded()).toBe(1);
   await restarted.handOverBroken();
-  expect(await recoverOpenRuns(open.db, () => ({ confirmed: false }))).toBe(0);
+  expect(await recoverOpenRuns(open.db, () => ({ confirmed: false }), log)).toBe(0);
   expect(await stored(plan)).toMatchObject({ run: { verdict: 'pass', closedBy: 'journal' }, labels: 1 });
+});
+
+test('a run that the database does not know is set aside and holds nobody up', async () => {
+  const plan = await opened();
+  const { board, kept } = await keep(new RunRecorder(away.db, journal, log), { ...plan, runId: randomUUID() });
+  await kept.close(board.result, 40);
+  const recorder = new RunRecorder(open.db, journal, log);
+  expect(await recorder.storeEnded()).toBe(0);
+  expect(await readdir(folder)).toEqual([expect.stringMatching(/\.unclaimed$/)]);
+  await recoverOpenRuns(open.db, () => ({ confirmed: false }), log);
 });

@@ -49,7 +49,9 @@ export async function liveInTest(clockRate: number): Promise<LiveInTest> {
     url,
     dataFolder,
     async start() {
-      if (!httpServer.listening) {
+      if (live || !httpServer.listening) {
+        httpServer.closeAllConnections();
+        if (httpServer.listening) await new Promise((resolve) => httpServer.close(resolve));
         httpServer = createServer((_, response) => response.end());
         await new Promise<void>((resolve) => httpServer.listen(port, '127.0.0.1', resolve));
       }
@@ -77,6 +79,7 @@ export async function liveInTest(clockRate: number): Promise<LiveInTest> {
       screens.forEach((screen) => screen.close());
       await live?.stop();
       httpServer.close();
+      httpServer.closeAllConnections();
       await open.close();
       await rm(dataFolder, { recursive: true, force: true });
     },

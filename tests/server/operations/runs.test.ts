@@ -38,6 +38,7 @@ beforeAll(async () => {
 });
 afterAll(() => open.close());
 
+const log = { warn() {} };
 const supplyOff = { confirmed: true, volts: 0.2, by: 'meter' } as const;
 
 let used = 0;
@@ -101,7 +102,7 @@ describe('opening a run', () => {
     const busy = both[0].ok ? benches[0]! : benches[1]!;
     const other = (await open.db.select().from(units).where(eq(units.lotId, lot.id))).at(-1)!.serial;
     expect(await begin(busy, { serial: other })).toMatchObject({ ok: false, refusal: { code: 'station-in-use' } });
-    await recoverOpenRuns(open.db, () => supplyOff);
+    await recoverOpenRuns(open.db, () => supplyOff, log);
   });
 
   test('refuses a passed board with its time, until quality orders a retest, which serves one run', async () => {
@@ -214,7 +215,7 @@ describe('recording a run', () => {
     const plan = await opened();
     expect(plan.prior!.tripMeanVolts).toBeGreaterThan(9);
     expect(plan.prior!.hysteresisMeanVolts).toBeCloseTo(1.5, 0);
-    await recoverOpenRuns(open.db, () => supplyOff);
+    await recoverOpenRuns(open.db, () => supplyOff, log);
   });
 });
 
@@ -224,7 +225,7 @@ describe('after a crash', () => {
     const board = played(plan);
     const upTo = board.events.slice(0, 60);
     await appendEvents(open.db, plan.runId, [{ n: 0, events: upTo.map((event) => ({ event, during: 'find' })) }]);
-    expect(await recoverOpenRuns(open.db, () => ({ confirmed: false }))).toBe(1);
+    expect(await recoverOpenRuns(open.db, () => ({ confirmed: false }), log)).toBe(1);
     expect(await rowOf(plan.runId)).toMatchObject({
       verdict: 'no-verdict',
       noVerdictReason: 'interrupted',
@@ -235,9 +236,9 @@ describe('after a crash', () => {
     });
     expect(await open.db.select().from(measurements).where(eq(measurements.runId, plan.runId))).not.toEqual([]);
     expect(await open.db.select().from(traces).where(eq(traces.runId, plan.runId))).not.toEqual([]);
-    expect(await recoverOpenRuns(open.db, () => supplyOff)).toBe(0);
+    expect(await recoverOpenRuns(open.db, () => supplyOff, log)).toBe(0);
     expect(await begin(benches[0]!)).toMatchObject({ ok: true, value: { plan: { attempt: 2 } } });
-    await recoverOpenRuns(open.db, () => supplyOff);
+    await recoverOpenRuns(open.db, () => supplyOff, log);
   });
 
   test('a reject that was decided but not recorded waits for quality: a power cut launders nothing', async () => {
@@ -245,14 +246,25 @@ describe('after a crash', () => {
     const board = played(plan, { seed: 4, defect: 'feedback-open' });
     const beforeOff = board.events.filter((event) => event.kind !== 'supply-is-off' || event !== board.events.at(-1));
     await appendEvents(open.db, plan.runId, [{ n: 0, events: beforeOff.map((event) => ({ event, during: 'find' })) }]);
-    await recoverOpenRuns(open.db, () => supplyOff);
+    await recoverOpenRuns(open.db, () => supplyOff, log);
     expect(await rowOf(plan.runId)).toMatchObject({ verdict: 'no-verdict', failingWhenStopped: true });
     expect(await begin(benches[0]!)).toMatchObject({ ok: false, refusal: { code: 'board-failing-when-stopped' } });
   });
 
+  test('a record that cannot be replayed is closed all the same', async () => {
+    const plan = await opened();
+    const spoilt = { ...plan, sequence: { ...plan.sequence, steps: [{ kind: 'unheard-of' }] } };
+    await open.db
+      .update(runs)
+      .set({ plan: spoilt as never })
+      .where(eq(runs.id, plan.runId));
+    await recoverOpenRuns(open.db, () => supplyOff, log);
+    expect(await rowOf(plan.runId)).toMatchObject({ verdict: 'no-verdict', noVerdictReason: 'interrupted' });
+  });
+
   test('a run of which nothing was written yet is closed too', async () => {
     const plan = await opened();
-    expect(await recoverOpenRuns(open.db, () => supplyOff)).toBe(1);
+    expect(await recoverOpenRuns(open.db, () => supplyOff, log)).toBe(1);
     expect(await rowOf(plan.runId)).toMatchObject({ verdict: 'no-verdict', supplyOffConfirmed: true });
   });
 });
@@ -270,11 +282,14 @@ describe('the daily check', () => {
     expect(plan.sequence.steps.map((step) => step.kind)).toEqual(['seat', 'power-up', 'verify', 'record']);
     const board = played(plan, { seed: 9, startTripVolts: known!.tripVolts });
     expect(board.result.verdict).toBe('pass');
-    const { validUntilIso } = await recordRun(open.db, recordOf(plan, board), 'station');
+    const recorded = await recordRun(open.db, recordOf(plan, board), 'station');
     const [row] = await open.db.select().from(dailyChecks).where(eq(dailyChecks.runId, plan.runId));
     expect(row).toMatchObject({ passed: true, stationId: benches[1]!.id, validHours: 12 });
     expect(Math.abs(row!.tripVolts! - known!.tripVolts)).toBeLessThan(known!.toleranceVolts);
-    expect(Date.parse(validUntilIso!) - row!.at.getTime()).toBe(12 * 3_600_000);
+    expect(recorded).toEqual({
+      ok: true,
+      value: { validUntilIso: new Date(row!.at.getTime() + 12 * 3_600_000).toISOString() },
+    });
   });
 
   test('fails when a point is out of tolerance, and then the station may not test', async () => {
