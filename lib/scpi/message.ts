@@ -29,11 +29,6 @@ export function parseProgramMessage(message: string): MessageUnit[] {
   return units;
 }
 
-/** The answers in one response message, in the order of their queries. */
-export function parseResponseMessage(response: string): string[] {
-  return splitOutside(response, ';').map((item) => item.trim());
-}
-
 /** Splits at `separator` where it stands outside quotes and parentheses. */
 function splitOutside(text: string, separator: string): string[] {
   if (!text.includes(separator)) return [text];

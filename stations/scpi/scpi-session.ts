@@ -1,5 +1,5 @@
 import { parseScpiNumber } from '@/lib/scpi/number';
-import { parseQueuedError, type QueuedError } from '@/lib/scpi/queued-error';
+import { parseQueuedError, scpiErrorClass, type QueuedError } from '@/lib/scpi/queued-error';
 import { InstrumentError, isInstrumentError } from '../instruments/instrument-error';
 import type { SerialLink } from '../link/serial-link';
 
@@ -71,6 +71,8 @@ export class ScpiSession {
     if (!compound) await this.link.send(message);
     const queued = await this.drain(compound ? `${message};:${nextError}` : nextError);
     if (queued.length === 0) return;
+    // A query error says that answers were dropped or mixed up.
+    if (queued.some(({ code }) => scpiErrorClass(code) === 'query')) this.link.distrust();
     const texts = queued.map(({ code, message: text }) => `${code} ${text}`).join('; ');
     throw new InstrumentError(
       'instrument-error',

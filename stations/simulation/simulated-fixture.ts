@@ -1,6 +1,9 @@
 import type { Clock } from '../clock/clock';
+import { feedAmps, limitedVolts, voltsAtBoard, voltsOnReservoir, type Feed } from './board-feed';
 import type { Random } from './random';
+import { handAt, type ScrewTurning } from './screw-turning';
 import type { SimulatedBoard } from './simulated-board';
+import { ThresholdNoise } from './threshold-noise';
 import { StepResponse, usualStep, type StepCharacter } from './step-response';
 
 export interface FixtureCharacter {
@@ -13,18 +16,6 @@ export const usualFixture: FixtureCharacter = { step: usualStep, contactOhms: 0.
 
 /** How fast the supply's output stage pulls the terminals down once off. */
 const dischargeMs = 15;
-/** Stray capacitance where the reservoir is missing. */
-const strayFarads = 1e-7;
-/** A comparator's noise while the screw moves counts as fresh after this; a worn wiper jumps as often at rest. */
-const freshNoiseMs = 40;
-
-interface Turning {
-  fromTurns: number;
-  toTurns: number;
-  startedMs: number;
-  turnsPerMs: number;
-}
-
 /**
  * The physics of one bench: the supply's output with its ring, nails, the board with its latch, the lid's inhibit and
  * the series switch. Nothing happens between calls; each call first brings everything up to the clock. The latch sees
@@ -43,8 +34,8 @@ export class SimulatedFixture {
   private latched = false;
   private chattering = false;
   private interruption: { fromMs: number; untilMs: number; startVolts: number } | null = null;
-  private turning: Turning | null = null;
-  private noise = { trip: 0, release: 0, atMs: 0 };
+  private turning: ScrewTurning | null = null;
+  private readonly noise: ThresholdNoise;
   private atMs = 0;
 
   constructor(
@@ -53,6 +44,7 @@ export class SimulatedFixture {
     readonly character: FixtureCharacter = usualFixture,
   ) {
     this.step = new StepResponse(character.step);
+    this.noise = new ThresholdNoise(random);
     this.atMs = clock.now();
   }
 
@@ -116,17 +108,14 @@ export class SimulatedFixture {
     this.advance();
     this.goOff();
   }
-
   get isOn(): boolean {
     this.advance();
     return this.output === 'on';
   }
-
   get overvoltageTripped(): boolean {
     this.advance();
     return this.tripped;
   }
-
   clearOvervoltage(): void {
     this.tripped = false;
   }
@@ -178,7 +167,7 @@ export class SimulatedFixture {
     this.advance();
     if (!this.board) return;
     const fromTurns = this.board.screwTurns;
-    this.turning = { fromTurns, toTurns: fromTurns + turns, startedMs: this.atMs, turnsPerMs: turnsPerSecond / 1000 };
+    this.turning = { fromTurns, byTurns: turns, startedMs: this.atMs, turnsPerSecond };
   }
 
   stopTurning(): void {
@@ -228,25 +217,16 @@ export class SimulatedFixture {
     const { turning, board } = this;
     if (!board) return;
     if (turning) {
-      const way = Math.sign(turning.toTurns - turning.fromTurns);
-      const moved = (now - turning.startedMs) * turning.turnsPerMs;
-      const whole = Math.abs(turning.toTurns - turning.fromTurns);
-      board.turnTo(turning.fromTurns + way * Math.min(moved, whole));
-      if (moved >= whole) this.turning = null;
+      const { turns, done } = handAt(turning, now);
+      board.turnTo(turns);
+      if (done) this.turning = null;
     }
     const restless = turning !== null || board.truth.wiperJumpVolts > 0;
-    if (restless && now - this.noise.atMs >= freshNoiseMs) this.drawNoise(now);
+    if (restless && this.noise.isStale(now)) this.drawNoise(now);
   }
 
-  private drawNoise(now = this.atMs): void {
-    const truth = this.board?.truth;
-    if (!truth) return;
-    const jump = truth.wiperJumpVolts === 0 ? 0 : truth.wiperJumpVolts * this.random.normal();
-    this.noise = {
-      trip: jump + truth.noiseVolts * this.random.normal(),
-      release: jump + truth.noiseVolts * this.random.normal(),
-      atMs: now,
-    };
+  private drawNoise(ms = this.atMs): void {
+    if (this.board) this.noise.draw(this.board.truth, ms);
   }
 
   /** Lets the latch see a supply voltage, at the sense point. */
@@ -294,42 +274,26 @@ export class SimulatedFixture {
 
   /** The reservoir feeding the board alone for so long. */
   private decayed(pulse: { startVolts: number }, milliseconds: number): number {
-    const { board } = this;
-    if (!board || pulse.startVolts <= 0) return 0;
-    const farads = Math.max(board.truth.design.reservoirFarads, strayFarads);
-    const ohms = pulse.startVolts / Math.max(1e-6, board.amps(pulse.startVolts, this.latched));
-    return pulse.startVolts * Math.exp(-milliseconds / 1000 / (ohms * farads));
+    const feed = this.feed(this.latched);
+    return feed ? voltsOnReservoir(feed, pulse.startVolts, milliseconds) : 0;
   }
 
   private ampsAt(senseVolts: number, on: boolean): number {
-    return this.board ? this.board.amps(this.atBoard(senseVolts, on), on) : 0;
+    const feed = this.feed(on);
+    return feed ? feedAmps(feed, senseVolts) : 0;
   }
 
-  /** At the board's terminals: the sense point less the drop at the nails. */
   private atBoard(senseVolts: number, on: boolean): number {
-    const { board } = this;
-    if (!board) return 0;
-    const ohms = this.character.contactOhms + board.truth.padOhms;
-    const drop = ohms * board.amps(senseVolts, on);
-    if (drop < 0.02) return senseVolts - drop;
-    return bisect((volts) => volts + ohms * board.amps(volts, on) - senseVolts, senseVolts);
+    const feed = this.feed(on);
+    return feed ? voltsAtBoard(feed, senseVolts) : 0;
   }
 
-  /** What is left at the sense point when the current limit holds. */
   private limited(volts: number): number {
-    if (!this.board || this.ampsAt(volts, this.latched) <= this.limitAmps) return volts;
-    return bisect((lower) => this.ampsAt(lower, this.latched) - this.limitAmps, volts);
+    const feed = this.feed(this.latched);
+    return feed ? limitedVolts(feed, this.limitAmps, volts) : volts;
   }
-}
 
-/** Zero of a rising function between 0 and `high`; the bracket is halved to a microvolt. */
-function bisect(rising: (volts: number) => number, high: number): number {
-  let low = 0;
-  let top = high;
-  while (top - low > 1e-6) {
-    const middle = (low + top) / 2;
-    if (rising(middle) > 0) top = middle;
-    else low = middle;
+  private feed(on: boolean): Feed | null {
+    return this.board && { board: this.board, contactOhms: this.character.contactOhms, on };
   }
-  return (low + top) / 2;
 }

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { parseChannelList } from '@/lib/scpi/channel-list';
-import { parseProgramMessage, parseResponseMessage } from '@/lib/scpi/message';
+import { parseProgramMessage } from '@/lib/scpi/message';
 import { formatQueuedError, parseQueuedError, scpiErrorClass } from '@/lib/scpi/queued-error';
 
 const headers = (message: string) => parseProgramMessage(message).map(({ header }) => header);
@@ -25,16 +25,6 @@ describe('parseProgramMessage', () => {
 
   it('ignores empty units and white space', () => {
     expect(parseProgramMessage(' ; VOLT   9.5 , 2 ;; ')).toEqual([{ header: 'VOLT', parameters: ['9.5', '2'] }]);
-  });
-});
-
-describe('parseResponseMessage', () => {
-  it('splits answers at semicolons outside quotes', () => {
-    expect(parseResponseMessage('1;-113,"Undefined header;VOLX";+9.0E+00')).toEqual([
-      '1',
-      '-113,"Undefined header;VOLX"',
-      '+9.0E+00',
-    ]);
   });
 });
 
