@@ -39,12 +39,12 @@ const finders: Record<RunRule, Finder> = {
     unbroken(
       at,
       9,
-      (i) => z[i]! * z[i - 1]! > 0,
+      (i) => Math.sign(z[i - 1]!) === Math.sign(z[at]!),
       (i) => z[i] !== 0,
     ),
   3: (z, at) => steady(z, at),
   4: (z, at) => {
-    const turns = (i: number) => i < 2 || (z[i]! - z[i - 1]!) * (z[i - 1]! - z[i - 2]!) < 0;
+    const turns = (i: number) => i < 2 || Math.sign(z[i]! - z[i - 1]!) === -Math.sign(z[i - 1]! - z[i - 2]!);
     return unbroken(at, 14, (i) => z[i] !== z[i - 1] && (i === at || turns(i + 1)), always);
   },
   5: (z, at) => ofWindow(z, at, 2, 3, 2),
