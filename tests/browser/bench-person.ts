@@ -81,9 +81,9 @@ export class BenchPerson {
   /** Takes the next board of the lot through the bench, doing at each screen what it asks. `onScreen` may take pictures. */
   async testNextBoard(onScreen: (words: string) => Promise<void> = async () => {}): Promise<Tested> {
     await this.emptyFixture();
-    // A board may follow an idle screen, a pass, or a reject whose bin was scanned.
+    // A board may follow an idle screen or a pass.
     await this.page
-      .getByText(/Scan a board|Scan the next one|Scan the next board/)
+      .getByText(/Scan a board|Scan the next one/)
       .first()
       .waitFor();
     await this.press(/^Place /);
@@ -102,11 +102,11 @@ export class BenchPerson {
       }
       if (words.includes(big.reject)) {
         const bin = /Scan the label on bin (\S+)/.exec(words)?.[1];
-        if (words.includes('ready for the next board')) return { serial, verdict: 'reject', words };
+        if (!bin) continue;
         await this.emptyFixture();
-        if (bin) await this.scan(`SWN-${bin}`);
-        await this.page.waitForTimeout(200);
-        continue;
+        await this.scan(`SWN-${bin}`);
+        await this.page.getByText('waiting for the bin scan').waitFor({ state: 'hidden' });
+        return { serial, verdict: 'reject', words };
       }
       if (words.includes('is not judged')) {
         await this.emptyFixture();

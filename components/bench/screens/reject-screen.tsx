@@ -11,7 +11,7 @@ import { useQuantity } from '../use-quantity';
 
 type RejectView = Extract<RunView['screen'], { kind: 'reject' }>;
 
-/** Reject floods the pane. A new scan is locked until the bin is scanned; `binCode` is null once it was. */
+/** Reject floods the pane. A new scan is locked until the bin is scanned; `binCode` is null until the run is recorded. */
 export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode: string | null }) {
   const t = useTranslations('bench.reject');
   const words = useTranslations();
@@ -39,23 +39,25 @@ export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode:
                   <span>1</span>
                   <Fitted text={t('putInBin')} most={48} width={660} as="span" className="!leading-tight" />
                 </li>
-                <li className="flex gap-9">
-                  <span>2</span>
-                  <Fitted
-                    text={binCode === null ? t('binScanned') : t('scanBin', { bin: binCode })}
-                    most={48}
-                    width={660}
-                    as="span"
-                    className="!leading-tight"
-                  />
-                </li>
+                {binCode !== null && (
+                  <li className="flex gap-9">
+                    <span>2</span>
+                    <Fitted
+                      text={t('scanBin', { bin: binCode })}
+                      most={48}
+                      width={660}
+                      as="span"
+                      className="!leading-tight"
+                    />
+                  </li>
+                )}
               </ol>
             </div>
             {binCode !== null && <BinPicture code={binCode} label={t('bin', { bin: binCode })} />}
           </div>
         </div>
       </Panes>
-      <BenchFooter ending={binCode === null ? t('scanNext') : t('waitingForBin')} actions={<CallButton />} />
+      <BenchFooter ending={binCode === null ? t('recording') : t('waitingForBin')} actions={<CallButton />} />
     </>
   );
 }
