@@ -1,6 +1,7 @@
 'use client';
 
 import { useQuery } from '@tanstack/react-query';
+import { usePathname } from 'next/navigation';
 import { useEffect, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { useToast } from '@/components/ui/toast';
@@ -19,6 +20,7 @@ interface CallBannerProps {
 /** Benches that call an engineer, on every desk page until someone says "I am coming". Timed; it never blinks. */
 export function CallBanner({ acknowledge }: CallBannerProps) {
   const toast = useToast();
+  const path = usePathname();
   const query = useQuery({
     queryKey: ['calls'],
     queryFn: ({ signal }) => fetchJson<EngineerCall[]>('/api/calls', signal),
@@ -26,7 +28,8 @@ export function CallBanner({ acknowledge }: CallBannerProps) {
   });
   const [busy, setBusy] = useState<string | null>(null);
   const calls = query.data ?? [];
-  if (calls.length === 0) return null;
+  // The list of stations shows them itself.
+  if (calls.length === 0 || path === '/stations') return null;
 
   async function come(call: EngineerCall): Promise<void> {
     setBusy(call.id);

@@ -189,10 +189,16 @@ function Readiness({ items }: { items: readonly ReadinessItem[] }) {
                 {say(item.sentence)}
               </span>
             </Td>
-            <Td label="Until">{item.validUntil ? <Time iso={item.validUntil} /> : ''}</Td>
+            <Td label="Until">{item.validUntil ? <Until item={item} until={item.validUntil} /> : ''}</Td>
           </tr>
         ))}
       </tbody>
     </Table>
   );
+}
+
+/** Certificates hold through a day, everything else to a moment. */
+function Until({ item, until }: { item: ReadinessItem; until: string }) {
+  if (item.key !== 'meter' && item.key !== 'supply') return <Time iso={until} />;
+  return <Time iso={new Date(Date.parse(until) - 1).toISOString()} format="day" />;
 }

@@ -19,7 +19,7 @@ export interface SearchResult {
 /** Boards and lots by a part of their number, or by the code that a scanner reads. */
 export async function searchEverywhere(entered: string): Promise<SearchResult> {
   const scanned = readScan(entered);
-  const text = (scanned.kind === 'lot' ? scanned.code : entered.trim().toUpperCase()).replace(/\s+/g, '');
+  const text = (scanned.kind === 'lot' ? scanned.short : entered.trim().toUpperCase()).replace(/\s+/g, '');
   const nothing: SearchResult = { text, exact: null, units: [], lots: [], more: false };
   if (text === '') return nothing;
   const db = database();
