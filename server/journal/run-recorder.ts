@@ -11,6 +11,9 @@ interface Log {
   warn(details: object, message: string): void;
 }
 
+/** A database that does not answer for so long at the end of a run counts as away: the bench goes on. */
+const closeWithinMs = 8_000;
+
 /** Events that come this close together share a batch. */
 const gatherMs = 200;
 
@@ -72,7 +75,9 @@ export class RecordedRun {
   /** Batches from here on are not in the database yet. */
   private stored = 0;
   private timer: NodeJS.Timeout | null = null;
-  private writing: Promise<void>;
+  /** Never waits for the database. */
+  private journalling: Promise<void>;
+  private storing: Promise<void> = Promise.resolve();
   private file: Awaited<ReturnType<Journal['begin']>> | null = null;
 
   constructor(
@@ -82,7 +87,7 @@ export class RecordedRun {
     private readonly log: Log,
     private readonly onClosed: () => void,
   ) {
-    this.writing = journal.begin(runId).then(
+    this.journalling = journal.begin(runId).then(
       (file) => void (this.file = file),
       (error: unknown) => this.log.warn({ error, runId }, 'the journal of a run cannot be written'),
     );
@@ -97,12 +102,16 @@ export class RecordedRun {
   async close(result: RunResult, seconds: number): Promise<{ stored: boolean; validUntilIso: string | null }> {
     const ending = { result, seconds, endedAtIso: new Date().toISOString() };
     this.gather();
-    await this.writing;
-    await this.journalled(() => this.file?.append({ close: ending }));
-    await this.journalled(() => this.file?.close());
+    this.journalling = this.journalling
+      .then(() => this.journalled(() => this.file?.append({ close: ending })))
+      .then(() => this.journalled(() => this.file?.close()));
+    await this.journalling;
     const record: RunRecord = { runId: this.runId, batches: this.batches, ...ending };
     try {
-      const recorded = await recordRun(this.db, record, 'station');
+      const recorded = await within(
+        closeWithinMs,
+        this.storing.then(() => recordRun(this.db, record, 'station')),
+      );
       if (!recorded.ok) throw new Error(recorded.sentence);
       await this.journalled(() => this.journal.forget(this.runId));
       return { stored: true, ...recorded.value };
@@ -116,7 +125,7 @@ export class RecordedRun {
 
   private flush(): void {
     this.gather();
-    this.writing = this.writing.then(() => this.store());
+    this.storing = this.storing.then(() => this.store());
   }
 
   /** Makes a batch of what waits and writes it to the journal. */
@@ -127,7 +136,7 @@ export class RecordedRun {
     const batch: EventBatch = { n: this.batches.length, events: this.waiting };
     this.batches.push(batch);
     this.waiting = [];
-    this.writing = this.writing.then(() => this.journalled(() => this.file?.append({ batch })));
+    this.journalling = this.journalling.then(() => this.journalled(() => this.file?.append({ batch })));
   }
 
   /** What the database does not take now is given to it again with the next batch, or at the end. */
@@ -148,4 +157,12 @@ export class RecordedRun {
       this.log.warn({ error, runId: this.runId }, 'the journal of a run cannot be written');
     }
   }
+}
+
+function within<T>(ms: number, work: Promise<T>): Promise<T> {
+  let timer: NodeJS.Timeout;
+  const late = new Promise<never>((_resolve, reject) => {
+    timer = setTimeout(() => reject(new Error(`The database did not answer within ${ms} ms.`)), ms);
+  });
+  return Promise.race([work, late]).finally(() => clearTimeout(timer));
 }

@@ -61,7 +61,7 @@ export class LiveStation {
       expected: this.expected(),
       clock: this.clock,
       watchdogMs: watchdogMs * rate,
-      ports: stationPorts(context.db, row, context.recorder),
+      ports: stationPorts(context.db, row, context.recorder, context.log),
       commission: (job) => commissionBench(job, this.clock),
       onView: (view) => this.viewChanged(view),
       onReading: context.onReading,

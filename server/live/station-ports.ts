@@ -15,12 +15,23 @@ import { takeLot } from '../operations/bench/take-lot';
 import { recordComponentBatch } from '../operations/lots/record-component-batch';
 import { signOutSession } from '../operations/people/sign-out-session';
 import { openRun } from '../operations/runs/open-run';
+import { closeLostRun } from '../operations/runs/recover-open-runs';
 import { scanBin } from '../operations/runs/scan-bin';
 
+interface Log {
+  warn(details: object, message: string): void;
+}
+
 /** What the server does for one station. */
-export function stationPorts(db: Database, bench: BenchRow, recorder: RunRecorder): StationPorts {
+export function stationPorts(db: Database, bench: BenchRow, recorder: RunRecorder, log: Log): StationPorts {
   return {
-    ask: (ask, who) => answer(db, bench, ask, who),
+    async ask(ask, who) {
+      if (ask.kind === 'board') {
+        await recorder.storeEnded();
+        await closeLostRun(db, bench.id, log);
+      }
+      return answer(db, bench, ask, who);
+    },
     async standing(who) {
       // A reject that only the journal has must be known before the record is asked which bin is owed.
       await recorder.storeEnded();

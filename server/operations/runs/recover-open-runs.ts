@@ -29,6 +29,16 @@ interface Log {
   warn(details: object, message: string): void;
 }
 
+/**
+ * A station that is free has no open run, unless the answer that opened one was lost on the way: such a run never began on a
+ * fixture, and is closed.
+ */
+export async function closeLostRun(db: Database, stationId: string, log: Log): Promise<void> {
+  const open = await listOpenRuns(db);
+  for (const run of open)
+    if (run.stationId === stationId) await recover(db, run, { confirmed: false }, log, new Date());
+}
+
 async function recover(db: Database, run: OpenRun, supply: SupplyFound, log: Log, now: Date): Promise<void> {
   const { batches, result } = replayOrClose(run, await listRunEvents(db, run.id), supply, log);
   const record = { runId: run.id, batches, result, seconds: null, endedAtIso: now.toISOString() };

@@ -105,7 +105,7 @@ test('while the database is away the run finishes into the journal, and is store
 
 test('a program killed in the middle leaves its events in the journal: recovery stores them and closes the run', async () => {
   const plan = await opened();
-  const { board } = await keep(new RunRecorder(away.db, journal, log), plan);
+  const { board, kept } = await keep(new RunRecorder(away.db, journal, log), plan);
   await expect.poll(async () => (await journal.read(plan.runId)).batches.length).toBe(3);
   // A power cut in the middle of a line.
   await appendFile(join(folder, `${plan.runId}.jsonl`), '{"batch":{"n":3,"eve');
@@ -118,6 +118,7 @@ test('a program killed in the middle leaves its events in the journal: recovery 
   expect(run).toMatchObject({ verdict: 'no-verdict', noVerdictReason: 'interrupted', closedBy: 'recovery' });
   expect(events).toEqual(board.events);
   expect(await readdir(folder)).toEqual([]);
+  await kept.close(board.result, 40);
 });
 
 test('a program killed between the end of a run and its storing loses neither the verdict nor the label', async () => {
@@ -129,6 +130,20 @@ test('a program killed between the end of a run and its storing loses neither th
   await restarted.handOverBroken();
   expect(await recoverOpenRuns(open.db, () => ({ confirmed: false }), log)).toBe(0);
   expect(await stored(plan)).toMatchObject({ run: { verdict: 'pass', closedBy: 'journal' }, labels: 1 });
+});
+
+test('a database that hangs delays neither the journal nor the bench for long', async () => {
+  const plan = await opened();
+  const { pool, db } = openDatabase(open.url, 1);
+  const holder = await pool.connect();
+  const { board, kept } = await keep(new RunRecorder(db, journal, log), plan);
+  expect((await journal.read(plan.runId)).batches.flatMap((batch) => batch.events)).toHaveLength(board.events.length);
+  expect(await kept.close(board.result, 40)).toMatchObject({ stored: false });
+  expect((await journal.read(plan.runId)).ending).toMatchObject({ seconds: 40 });
+  holder.release();
+  await new RunRecorder(open.db, journal, log).storeEnded();
+  expect(await stored(plan)).toMatchObject({ run: { verdict: 'pass' }, labels: 1 });
+  await pool.end();
 });
 
 test('a run that the database does not know is set aside and holds nobody up', async () => {

@@ -18,7 +18,7 @@ import { appendEvents } from '@/server/operations/runs/append-events';
 import { readLotStrip } from '@/server/operations/runs/lot-strip';
 import { openRun } from '@/server/operations/runs/open-run';
 import { recordRun } from '@/server/operations/runs/record-run';
-import { recoverOpenRuns } from '@/server/operations/runs/recover-open-runs';
+import { closeLostRun, recoverOpenRuns } from '@/server/operations/runs/recover-open-runs';
 import type { RunRecord } from '@/server/operations/runs/run-record';
 import { scanBin } from '@/server/operations/runs/scan-bin';
 import { temporaryDatabase, type TemporaryDatabase } from '../../database/temporary-postgres';
@@ -260,6 +260,14 @@ describe('after a crash', () => {
       .where(eq(runs.id, plan.runId));
     await recoverOpenRuns(open.db, () => supplyOff, log);
     expect(await rowOf(plan.runId)).toMatchObject({ verdict: 'no-verdict', noVerdictReason: 'interrupted' });
+  });
+
+  test('a run whose opening was never answered is closed when its station asks for the next board', async () => {
+    const plan = await opened();
+    await closeLostRun(open.db, benches[1]!.id, log);
+    expect((await rowOf(plan.runId)).verdict).toBeNull();
+    await closeLostRun(open.db, benches[0]!.id, log);
+    expect(await rowOf(plan.runId)).toMatchObject({ noVerdictReason: 'interrupted', closedBy: 'recovery' });
   });
 
   test('a run of which nothing was written yet is closed too', async () => {
