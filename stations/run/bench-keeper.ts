@@ -88,8 +88,9 @@ export class BenchKeeper {
       const lidClosed = await controller.lidClosed();
       const boardPresent = await controller.boardPresent();
       const { fixture } = state();
-      if (lidClosed !== fixture.lidClosed || boardPresent !== fixture.boardPresent || !fixture.seenEmpty)
-        await tell({ kind: 'fixture', lidClosed, boardPresent });
+      const changed = lidClosed !== fixture.lidClosed || boardPresent !== fixture.boardPresent;
+      const emptied = !lidClosed && !boardPresent && !fixture.seenEmpty;
+      if (changed || emptied) await tell({ kind: 'fixture', lidClosed, boardPresent });
     } catch {
       this.checkedAtMs = -Infinity;
     }
