@@ -29,12 +29,16 @@ export function estimateBoard(settings: TrimSettings, found: FoundPoints): Board
     mean: [inside(wiperFor(settings.design, found.tripVolts)), 0, 0, 0],
     covariance: diagonal([0.09, referenceSd ** 2, trimmerSd ** 2, travelSd ** 2]),
   };
-  const withTrip = observeTrip(start, settings, found.tripVolts, found.tripUncertaintyVolts);
   // The release point adds nothing to it and would mislead it where the feedback resistor is wrong.
-  if (settings.referenceVolts === null) return withTrip;
+  return observeTrip(withReference(start, settings, found), settings, found.tripVolts, found.tripUncertaintyVolts);
+}
+
+/** Before the trip point, whose solution then belongs to the reference as read. */
+function withReference(start: BoardEstimate, settings: TrimSettings, found: FoundPoints): BoardEstimate {
+  if (settings.referenceVolts === null) return start;
   const readAt = settings.referenceAtVolts ?? found.tripVolts;
   const reference = (mean: number[]) => nodeAt(designOf(mean, settings), readAt);
-  return update(withTrip, reference, settings.referenceVolts, 0.002);
+  return update(start, reference, settings.referenceVolts, 0.002);
 }
 
 /** A trip point measured where the screw now stands. */

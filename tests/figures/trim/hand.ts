@@ -37,7 +37,9 @@ export class Hand {
   private prompts = 0;
   private sign = 1;
   /** What the eyes had seen a reaction ago: (seconds, signed raising turns still to make). */
-  private seen: { at: number; turns: number }[] = [];
+  private seen: { at: number; turns: number; wrongWay: boolean }[] = [];
+  /** Turns against the dial until it is told so. */
+  private contrary = false;
 
   constructor(
     private readonly habits: HandHabits,
@@ -57,7 +59,11 @@ export class Hand {
     const turning = view.stage === 'turn' || view.stage === 'beep-1' || view.stage === 'beep-2';
     if (turning && view.turns !== null && view.direction !== null) {
       const raises = (view.direction === 'clockwise') === this.clockwiseRaises;
-      this.seen.push({ at, turns: raises ? view.turns : -view.turns });
+      this.seen.push({
+        at,
+        turns: raises ? view.turns : -view.turns,
+        wrongWay: view.finding === 'wrong-way',
+      });
       if (prompts !== this.prompts) this.start(view, prompts, raises ? 1 : -1, at);
     }
     // Told to stop: only a count goes on to its end.
@@ -72,6 +78,7 @@ export class Hand {
     this.prompts = prompts;
     const wrong = first && random.uniform(0, 1) < habits.wrongWayShare;
     this.sign = wrong ? -sign : sign;
+    this.contrary = wrong;
     const base = first
       ? habits.firstPromptSeconds
       : view.stage === 'beep-2'
@@ -126,10 +133,11 @@ export class Hand {
         // Turns toward what the dial showed a reaction ago, slower as it nears the mark, and rests on it.
         const past = this.seen.findLast((glance) => glance.at <= at - habits.reactionSeconds) ?? this.seen[0];
         if (!past) return 0;
+        if (past.wrongWay) this.contrary = false;
         const left = Math.abs(past.turns);
         if (left < this.markTurns) return 0;
         const speed = Math.min(plan.speed, Math.max(habits.slowestTurnsPerSecond, left * 1.5));
-        return (this.sign > 0 === past.turns > 0 || plan.speed > 0 ? Math.sign(past.turns) : 0) * speed * seconds;
+        return (this.contrary ? -1 : 1) * Math.sign(past.turns) * speed * seconds;
       }
     }
   }
