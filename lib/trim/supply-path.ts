@@ -30,7 +30,8 @@ export function armOnThenHold(
   { minVolts, maxVolts, overshoot }: SupplyLimits,
 ): SupplyPath {
   const up = pathWithin(fromVolts ?? minVolts, Math.min(maxVolts, armVolts), maxVolts, overshoot);
-  return pathOf([...up, ...pathWithin(up.at(-1)!, holdVolts, holdVolts, overshoot)]);
+  const end = Math.min(maxVolts, holdVolts);
+  return pathOf([...up, ...pathWithin(up.at(-1)!, end, end, overshoot)]);
 }
 
 /** Down to `armVolts`, where the output goes off, then up to `holdVolts` without passing it. */
