@@ -12,18 +12,20 @@ const parts = [
  * by distinct multiples, and the first numbers, which still show it, are thrown away.
  */
 export function wichmannHill(seed: number): () => number {
-  const state = parts.map(
+  const state = Int32Array.from(
+    parts,
     ([, , , modulus], i) => (Math.abs(Math.trunc(seed)) * (7 * i + 11) + 104_729 * (i + 1)) % modulus || 1,
   );
   const next = () => {
-    const sum = parts.reduce((total, [multiplier, quotient, remainder, modulus], i) => {
+    let sum = 0;
+    for (let i = 0; i < 4; i++) {
+      const [multiplier, quotient, remainder, modulus] = parts[i]!;
       const x = state[i]!;
-      let moved = multiplier * (x % quotient) - remainder * Math.floor(x / quotient);
-      if (moved < 0) moved += modulus;
-      state[i] = moved;
-      return total + moved / modulus;
-    }, 0);
-    return sum % 1;
+      const moved = multiplier * (x % quotient) - remainder * ((x / quotient) | 0);
+      state[i] = moved < 0 ? moved + modulus : moved;
+      sum += state[i]! / modulus;
+    }
+    return sum - Math.floor(sum);
   };
   for (let i = 0; i < 40; i++) next();
   return next;

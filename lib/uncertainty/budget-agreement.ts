@@ -9,7 +9,7 @@ export interface Agreement {
   highFurther: number;
   /** Half a unit of the second digit of the standard uncertainty. */
   tolerance: number;
-  /** False: too few trials to tell, since the simulation's own error is over a fifth of the tolerance. */
+  /** False: too few trials to tell, since two standard errors of the simulation would turn the answer. */
   enoughTrials: boolean;
 }
 
@@ -27,6 +27,6 @@ export function budgetAgreement(
     lowFurther,
     highFurther,
     tolerance,
-    enoughTrials: simulated.endError <= tolerance / 5,
+    enoughTrials: [lowFurther, highFurther].every((d) => Math.abs(Math.abs(d) - tolerance) > 2 * simulated.endError),
   };
 }

@@ -20,23 +20,23 @@ export function drawChiSquare(degrees: number, uniform: Uniform): number {
 }
 
 /**
- * A deviation of a budget row's contributor from its estimate, in its own unit. `normal` is a standard normal number that
- * carries the row's correlation. Estimated from repeats: a scaled t (JCGM 101:2008, 6.4.9); others 6.4.2 to 6.4.7.
+ * A deviation of a budget row's contributor from its estimate, in its own unit. `correlated` is a standard normal number
+ * that carries the row's correlation, null for an independent row. Estimated from repeats: a scaled t (JCGM 101:2008,
+ * 6.4.9); others 6.4.2 to 6.4.7.
  */
-export function drawDeviation(line: BudgetLine, normal: number, uniform: Uniform): number {
-  const half = line.spread;
+export function drawDeviation(line: BudgetLine, correlated: number | null, uniform: Uniform): number {
+  if (line.distribution === 'normal') {
+    const normal = correlated ?? drawNormal(uniform);
+    const scale = Number.isFinite(line.degrees) ? Math.sqrt(line.degrees / drawChiSquare(line.degrees, uniform)) : 1;
+    return standardOf(line) * normal * scale;
+  }
+  const p = correlated === null ? uniform() : normalBelow(correlated);
   switch (line.distribution) {
-    case 'normal': {
-      const scale = Number.isFinite(line.degrees) ? Math.sqrt(line.degrees / drawChiSquare(line.degrees, uniform)) : 1;
-      return standardOf(line) * normal * scale;
-    }
     case 'rectangular':
-      return half * (2 * normalBelow(normal) - 1);
-    case 'triangular': {
-      const p = normalBelow(normal);
-      return half * (p < 0.5 ? Math.sqrt(2 * p) - 1 : 1 - Math.sqrt(2 * (1 - p)));
-    }
+      return line.spread * (2 * p - 1);
+    case 'triangular':
+      return line.spread * (p < 0.5 ? Math.sqrt(2 * p) - 1 : 1 - Math.sqrt(2 * (1 - p)));
     case 'u-shaped':
-      return -half * Math.cos(Math.PI * normalBelow(normal));
+      return -line.spread * Math.cos(Math.PI * p);
   }
 }

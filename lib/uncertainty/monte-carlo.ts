@@ -11,7 +11,7 @@ export interface MonteCarloQuestion {
   correlations?: readonly Correlation[];
   /** The result for given deviations of the contributors; the sum of sensitivity times deviation where none is given. */
   model?: (deviations: readonly number[]) => number;
-  /** At least 1,000; 200,000 give the ends of the interval to about one part in 200 of U. */
+  /** At least 1,000; a million settle the second digit of U whatever it is, and take a second or two. */
   trials: number;
   uniform: Uniform;
   coverage?: number;
@@ -40,23 +40,28 @@ const blocks = 10;
 export function monteCarloBudget(question: MonteCarloQuestion): MonteCarlo {
   const { value, lines, trials, uniform, coverage = usualCoverage } = question;
   if (!(trials >= 1000)) throw new RangeError(`${trials} trials are too few.`);
-  const factor = choleskyFactor(
-    correlationMatrix(
-      lines.map(({ contributor }) => contributor),
-      question.correlations ?? [],
-    ),
+  const matrix = correlationMatrix(
+    lines.map(({ contributor }) => contributor),
+    question.correlations ?? [],
   );
+  const factor = choleskyFactor(matrix);
   if (!factor) return { kind: 'contradiction' };
   const model = question.model ?? ((d) => value + d.reduce((sum, x, i) => sum + lines[i]!.sensitivity * x, 0));
   const drawn = new Float64Array(trials);
+  const isCorrelated = matrix.map((row, j) => row.some((r, k) => k !== j && r !== 0));
+  const independent = new Float64Array(lines.length);
+  const deviations = new Array<number>(lines.length).fill(0);
   for (let i = 0; i < trials; i++) {
-    const independent = lines.map(() => drawNormal(uniform));
-    drawn[i] = model(
-      lines.map((line, j) => {
-        const normal = factor[j]!.reduce((sum, l, k) => (l === 0 ? sum : sum + l * independent[k]!), 0);
-        return drawDeviation(line, normal, uniform);
-      }),
-    );
+    for (let j = 0; j < lines.length; j++) {
+      let normal: number | null = null;
+      if (isCorrelated[j]) {
+        independent[j] = drawNormal(uniform);
+        normal = 0;
+        for (let k = 0; k <= j; k++) normal += factor[j]![k]! * independent[k]!;
+      }
+      deviations[j] = drawDeviation(lines[j]!, normal, uniform);
+    }
+    drawn[i] = model(deviations);
   }
   const size = Math.floor(trials / blocks);
   const ends = Array.from({ length: blocks }, (_, b) =>
