@@ -6,7 +6,7 @@ export interface Correlation {
 
 /** Coefficients of all pairs, 1 with itself. Throws where a name is in no row. */
 export function correlationMatrix(names: readonly string[], correlations: readonly Correlation[]): number[][] {
-  const matrix = names.map((_, i) => names.map((_, j) => (i === j ? 1 : 0)));
+  const matrix = names.map((_, i) => names.map((_, j): number => (i === j ? 1 : 0)));
   for (const { between, coefficient } of correlations) {
     const [i, j] = between.map((name) => names.indexOf(name)) as [number, number];
     if (i < 0 || j < 0 || i === j) throw new RangeError(`No two rows ${between.join(' and ')} to be correlated.`);

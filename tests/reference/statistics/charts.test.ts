@@ -74,7 +74,11 @@ describe('EWMA', () => {
 
 describe('p chart', () => {
   it('NIST 6.3.3.2, wafers', () => {
-    const { x, n, computed } = reference.p[0] as { x: number[]; n: number; computed: Record<string, number> };
+    const { x, n, computed } = reference.p[0] as unknown as {
+      x: number[];
+      n: number;
+      computed: Record<string, number>;
+    };
     const baseline = shareBaseline(x.map((defective) => ({ defective, tested: n })))!;
     const limits = shareLimits(baseline, n);
     expect(baseline.share).toBeCloseTo(computed.pbar!, 9);
