@@ -17,13 +17,15 @@ export function LotRule({ marks, width = 1180, label, first = 1 }: LotRuleProps)
   const every = [1, 2, 5, 10, 20, 40, 50, 100, 200, 500].find((n) => n * pitch > 150) ?? 1000;
   const x = (i: number) => 1 + i * pitch;
   return (
-    <svg viewBox={`0 -6 ${width} 76`} className="block h-auto w-full" role="img" aria-label={label}>
+    <svg viewBox={`-9 -6 ${width + 18} 76`} className="block h-auto w-full" role="img" aria-label={label}>
       <path d={`M0 ${base}H${width}`} stroke="var(--sw-ink)" strokeWidth={2} />
       {[...marks].map((mark, i) => (
         <BoardTick key={i} mark={mark} x={x(i)} pitch={pitch} />
       ))}
       {Array.from({ length: Math.floor(marks.length / every) + 1 }, (_, k) => {
         const board = k === 0 ? 0 : k * every - 1;
+        // Where every board is numbered, the first one is not numbered twice.
+        if (every === 1 && k === 0) return null;
         const anchor = k === 0 ? 'start' : board >= marks.length - 1 ? 'end' : 'middle';
         return (
           <text

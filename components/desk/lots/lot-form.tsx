@@ -8,6 +8,7 @@ import type { z } from 'zod';
 import { Button, ButtonLink } from '@/components/ui/button';
 import { CheckField } from '@/components/ui/check-field';
 import { ChoiceField } from '@/components/ui/choice-field';
+import { LoadingTicks } from '@/components/ui/loading-ticks';
 import { SelectField } from '@/components/ui/select-field';
 import { TextField } from '@/components/ui/text-field';
 import { useToast } from '@/components/ui/toast';
@@ -54,6 +55,7 @@ export function LotForm({ bases, check, create }: LotFormProps) {
   // Both ways of naming the boards keep what was entered when the other one is looked at.
   const [counted, setCounted] = useState({ firstSerial: '', quantity: '' });
   const kind: Kind = useWatch({ control: form.control, name: 'serials.kind' });
+  const chosen = useWatch({ control: form.control, name: 'sequenceRevisionId' });
   const { send, problem, sending } = useActionForm(form, create, ({ code, size }) => {
     toast(`Lot ${code} made with ${size} ${size === 1 ? 'board' : 'boards'}`);
     router.push(`/lots/${encodeURIComponent(code)}`);
@@ -104,8 +106,9 @@ export function LotForm({ bases, check, create }: LotFormProps) {
           label="Board type and released sequence"
           choices={bases.map((basis) => ({
             value: basis.sequenceRevisionId,
-            label: `${basis.boardTypeCode} r${basis.sequenceNumber}, ${basis.boardTypeName}, ${basis.sequenceName}`,
+            label: `${basis.boardTypeCode} r${basis.sequenceNumber}, ${basis.sequenceName}`,
           }))}
+          hint={bases.find((basis) => basis.sequenceRevisionId === chosen)?.boardTypeName}
           error={errors.sequenceRevisionId?.message}
         />
       </div>
@@ -159,7 +162,7 @@ export function LotForm({ bases, check, create }: LotFormProps) {
           <FormProblem problem={serialErrors?.text?.message ?? null} />
         </div>
       )}
-      {rows ? <SerialPreview rows={rows} /> : null}
+      {checking ? <LoadingTicks label="Checking the serial numbers" /> : rows ? <SerialPreview rows={rows} /> : null}
       {kind === 'listed' && bad > 0 && bad < (rows?.length ?? 0) ? (
         <CheckField
           {...form.register('serials.leaveOutBad')}
