@@ -1,11 +1,12 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Browser, Page } from 'playwright-core';
 import { Pool } from 'pg';
-import { demoAccounts, demoPassword } from '@/db/seed/demo-accounts';
+import { demoAccounts } from '@/db/seed/demo-accounts';
 import type { DefectKind } from '@/lib/contracts/bench-command';
 import type { RejectReason } from '@/lib/run/types';
 import { BenchPerson, type Tested } from './bench-person';
 import { launchChromium } from './chromium';
+import { signInAtDesk } from './desk-person';
 import { startProduct, type Product } from './product';
 
 /** What each defect of the demo lot must be rejected for; the signature table of the trade, common practice, no source. */
@@ -33,16 +34,6 @@ let browser: Browser;
 let page: Page;
 let pool: Pool;
 let lot: string;
-
-async function signInAtDesk(email: string): Promise<Page> {
-  const desk = await (await browser.newContext({ viewport: { width: 1440, height: 900 } })).newPage();
-  await desk.goto(`${product.url}/sign-in`);
-  await desk.getByLabel('E-mail').fill(email);
-  await desk.getByLabel('Password').fill(demoPassword);
-  await desk.getByRole('button', { name: 'Sign in' }).click();
-  await desk.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
-  return desk;
-}
 
 beforeAll(async () => {
   [product, browser] = await Promise.all([startProduct(), launchChromium()]);
@@ -87,7 +78,7 @@ describe('a demo lot of 24 boards with seven defects, at the bench', () => {
 
   it('shows the lot and its boards at the desk', async () => {
     const quality = demoAccounts.find((account) => account.roles.includes('quality-manager'))!;
-    const desk = await signInAtDesk(quality.email!);
+    const desk = await signInAtDesk(browser, product.url, quality.email!);
     await desk.goto(`${product.url}/lots/${lot}`);
     const words = await desk.locator('main').innerText();
     expect(words).toMatch(/17\s+of\s+24\s+boards\s+passed/);

@@ -1,0 +1,2 @@
+export function buildIsCurrent(): boolean;
+export function build(): Promise<void>;

@@ -1,0 +1,66 @@
+// Makes the pictures of the README: takes the first boards of the demo lot through a simulated bench and photographs the screens.
+import { mkdirSync } from 'node:fs';
+import { demoAccounts } from '@/db/seed/demo-accounts';
+import { build, buildIsCurrent } from '@/server/setup/build.mjs';
+import { BenchPerson } from './bench-person';
+import { launchChromium } from './chromium';
+import { signInAtDesk } from './desk-person';
+import { startProduct } from './product';
+
+const folder = 'tests/browser/pictures';
+
+/** Screens worth a picture, by words that only they show; each is taken once. */
+const moments: readonly [name: string, words: RegExp][] = [
+  ['find-points', /Find points[\s\S]*readings/],
+  ['trim-first-beep', /until it beeps/],
+  ['trim-stop', /First beep\./],
+  ['trim-second-beep', /Now slowly/],
+  ['seal', /Seal the screw/],
+  ['pass', /PASS/],
+  ['reject', /REJECT[\s\S]*waiting for the bin scan/],
+];
+
+mkdirSync(folder, { recursive: true });
+if (!buildIsCurrent()) await build();
+const product = await startProduct({ clockRate: 2 });
+const browser = await launchChromium();
+try {
+  const page = await (await browser.newContext({ viewport: { width: 1920, height: 1080 } })).newPage();
+  const taken = new Set<string>();
+  const take = async (name: string) => {
+    if (taken.has(name)) return;
+    taken.add(name);
+    await page.screenshot({ path: `${folder}/${name}.png` });
+    console.log(name);
+  };
+  const person = await BenchPerson.standAt(page, product.url, 'Station 1');
+  await take('badge');
+  const operator = demoAccounts.find((account) => account.badgeNumber && account.pin)!;
+  await person.signIn(operator.badgeNumber!, operator.pin!);
+  const lot = /\d{4}-01/.exec(await person.text())![0];
+  await person.takeLot(lot);
+  await take('idle');
+  const serials: string[] = [];
+  for (let board = 0; board < 3; board += 1) {
+    const tested = await person.testNextBoard(async (words) => {
+      const moment = moments.find(([name, shown]) => !taken.has(name) && shown.test(words));
+      if (moment) await take(moment[0]);
+    });
+    serials.push(tested.serial);
+  }
+
+  const quality = demoAccounts.find((account) => account.roles.includes('quality-manager'))!;
+  const desk = await signInAtDesk(browser, product.url, quality.email!);
+  await desk.goto(`${product.url}/lots/${lot}`);
+  await desk.getByText('of 24 boards tested').waitFor();
+  await desk.screenshot({ path: `${folder}/lot.png` });
+  await desk
+    .getByRole('link', { name: new RegExp(serials[0]!) })
+    .first()
+    .click();
+  await desk.getByText('Label, 40').first().waitFor();
+  await desk.screenshot({ path: `${folder}/unit.png` });
+} finally {
+  await browser.close();
+  await product.stop();
+}
