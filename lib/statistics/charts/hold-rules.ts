@@ -1,4 +1,4 @@
-import { runSignals, type RunRule } from './run-rules';
+import { signalAt, type RunRule, type RunSignal } from './run-rules';
 
 /** Hold when `rule` signals at `times` points among `within` successive boards. */
 export interface HoldRule {
@@ -25,17 +25,15 @@ export interface HoldCause {
  * standard deviations from the frozen centre, from the last release on: a released hold begins afresh.
  */
 export function firstHold(z: readonly number[], holdRules: readonly HoldRule[] = usualHoldRules): HoldCause | null {
-  const signals = runSignals(
-    z,
-    holdRules.map(({ rule }) => rule),
-  );
-  const causes = holdRules.flatMap((holdRule) => {
-    const own = signals.filter(({ rule }) => rule === holdRule.rule);
-    const last = own.findIndex((signal, i) => {
-      const first = own[i - holdRule.times + 1];
-      return first !== undefined && signal.at - first.at < holdRule.within;
-    });
-    return last < 0 ? [] : [{ holdRule, from: own[last - holdRule.times + 1]!.from, at: own[last]!.at }];
-  });
-  return causes.sort((a, b) => a.at - b.at)[0] ?? null;
+  const seen = holdRules.map((): RunSignal[] => []);
+  for (let at = 0; at < z.length; at++) {
+    for (const [i, holdRule] of holdRules.entries()) {
+      const signal = signalAt(z, at, holdRule.rule);
+      if (!signal) continue;
+      seen[i]!.push(signal);
+      const first = seen[i]!.at(-holdRule.times);
+      if (first && at - first.at < holdRule.within) return { holdRule, from: first.from, at };
+    }
+  }
+  return null;
 }

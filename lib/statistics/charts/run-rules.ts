@@ -79,10 +79,11 @@ function steady(z: readonly number[], at: number): number | null {
  */
 export function runSignals(z: readonly number[], rules: Iterable<RunRule> = runRules): RunSignal[] {
   const chosen = [...new Set(rules)].sort();
-  return z.flatMap((_, at) =>
-    chosen.flatMap((rule) => {
-      const from = finders[rule](z, at);
-      return from === null ? [] : [{ rule, from, at }];
-    }),
-  );
+  return z.flatMap((_, at) => chosen.flatMap((rule) => signalAt(z, at, rule) ?? []));
+}
+
+/** Whether `rule` is broken at the point `at`; later points do not matter. */
+export function signalAt(z: readonly number[], at: number, rule: RunRule): RunSignal | null {
+  const from = finders[rule](z, at);
+  return from === null ? null : { rule, from, at };
 }
