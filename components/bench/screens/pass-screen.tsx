@@ -13,6 +13,7 @@ import { useNumbers } from '../use-numbers';
 /** Pass is green on paper. Scanning the next board starts it. */
 export function PassScreen({ seconds }: { seconds: number }) {
   const t = useTranslations('bench.pass');
+  const idle = useTranslations('bench.idle');
   const { send } = useBench();
   const { whole } = useNumbers();
   const bold = (chunks: ReactNode) => <b className="font-num text-ink">{chunks}</b>;
@@ -36,9 +37,14 @@ export function PassScreen({ seconds }: { seconds: number }) {
       <BenchFooter
         ending={t.rich('thisOne', { seconds: whole(seconds), b: bold })}
         actions={
-          <Button size="bench" onClick={() => send({ kind: 'print-label-again' })}>
-            {t('printAgain')}
-          </Button>
+          <>
+            <Button size="bench" onClick={() => send({ kind: 'end-shift' })}>
+              {idle('endShift')}
+            </Button>
+            <Button size="bench" onClick={() => send({ kind: 'print-label-again' })}>
+              {t('printAgain')}
+            </Button>
+          </>
         }
       />
     </>
