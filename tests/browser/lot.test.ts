@@ -50,7 +50,7 @@ afterAll(async () => {
 describe('a demo lot of 24 boards with seven defects, at the bench', () => {
   const tested: Tested[] = [];
 
-  it('takes every board to the verdict and reason that its parts deserve', { timeout: 600_000 }, async () => {
+  it('takes every board to the verdict and reason that its parts deserve', { timeout: process.env.SILLWRIGHT_NIGHTLY ? 3_600_000 : 600_000 }, async () => {
     const operator = demoAccounts.find((account) => account.roles.includes('operator') && account.badgeNumber)!;
     const person = await BenchPerson.standAt(page, product.url, 'Station 1');
     await person.signIn(operator.badgeNumber!, operator.pin!);
