@@ -15,6 +15,7 @@ const programs = [
   ['/usr/bin/ngspice', 'ngspice'],
   ['/usr/bin/zbarimg', 'zbar-tools'],
   ['/usr/lib/postgresql', 'postgresql'],
+  ['/usr/bin/Rscript', 'r-base-core'],
 ];
 const reports = '.sillwright/test-reports';
 const bin = (name) => `node_modules/.bin/${name}`;

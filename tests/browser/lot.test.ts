@@ -50,31 +50,37 @@ afterAll(async () => {
 describe('a demo lot of 24 boards with seven defects, at the bench', () => {
   const tested: Tested[] = [];
 
-  it('takes every board to the verdict and reason that its parts deserve', { timeout: process.env.SILLWRIGHT_NIGHTLY ? 3_600_000 : 600_000 }, async () => {
-    const operator = demoAccounts.find((account) => account.roles.includes('operator') && account.badgeNumber)!;
-    const person = await BenchPerson.standAt(page, product.url, 'Station 1');
-    await person.signIn(operator.badgeNumber!, operator.pin!);
-    await person.takeLot(lot);
-    for (let board = 1; board <= 24; board += 1) tested.push(await person.testNextBoard());
+  it(
+    'takes every board to the verdict and reason that its parts deserve',
+    { timeout: process.env.SILLWRIGHT_NIGHTLY ? 3_600_000 : 600_000 },
+    async () => {
+      const operator = demoAccounts.find((account) => account.roles.includes('operator') && account.badgeNumber)!;
+      const person = await BenchPerson.standAt(page, product.url, 'Station 1');
+      await person.signIn(operator.badgeNumber!, operator.pin!);
+      await person.takeLot(lot);
+      for (let board = 1; board <= 24; board += 1) tested.push(await person.testNextBoard());
 
-    const { rows } = await pool.query<Row>(
-      `select u.serial, s.defect, r.verdict, r.reject_reason as reason, r.supply_off_confirmed as off,
+      const { rows } = await pool.query<Row>(
+        `select u.serial, s.defect, r.verdict, r.reject_reason as reason, r.supply_off_confirmed as off,
          (select count(*)::int from run_events e where e.run_id = r.id) as events
        from units u join lots l on l.id = u.lot_id join simulated_boards s on s.serial = u.serial
        left join runs r on r.unit_id = u.id where l.code = $1 order by u.position, r.started_at`,
-      [lot],
-    );
-    expect(rows).toHaveLength(24);
-    const expected = rows.map(({ serial, defect }) => ({
-      serial,
-      defect,
-      verdict: defect === 'none' ? 'pass' : 'reject',
-      reason: defect === 'none' ? null : reasonOf[defect],
-    }));
-    expect(rows.map(({ serial, defect, verdict, reason }) => ({ serial, defect, verdict, reason }))).toEqual(expected);
-    expect(rows.every((row) => row.off && row.events > 0)).toBe(true);
-    expect(tested.map((board) => board.verdict)).toEqual(expected.map((row) => row.verdict));
-  });
+        [lot],
+      );
+      expect(rows).toHaveLength(24);
+      const expected = rows.map(({ serial, defect }) => ({
+        serial,
+        defect,
+        verdict: defect === 'none' ? 'pass' : 'reject',
+        reason: defect === 'none' ? null : reasonOf[defect],
+      }));
+      expect(rows.map(({ serial, defect, verdict, reason }) => ({ serial, defect, verdict, reason }))).toEqual(
+        expected,
+      );
+      expect(rows.every((row) => row.off && row.events > 0)).toBe(true);
+      expect(tested.map((board) => board.verdict)).toEqual(expected.map((row) => row.verdict));
+    },
+  );
 
   it('shows the lot and its boards at the desk', async () => {
     const quality = demoAccounts.find((account) => account.roles.includes('quality-manager'))!;
