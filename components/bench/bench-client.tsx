@@ -5,9 +5,10 @@ import { useCallback, useEffect, useState } from 'react';
 import type { BenchCommand } from '@/lib/contracts/bench-command';
 import { benchCatalogue } from '@/lib/messages/bench-locales';
 import { showScheme } from '../ui/scheme';
-import { useFlood } from './beep/use-flood';
+import { browserClock } from './beep/browser-clock';
+import { createFloodStore } from './beep/flood-store';
 import { BenchProvider } from './bench-context';
-import { BenchScreen, heardBeep } from './bench-screen';
+import { BenchScreen } from './bench-screen';
 import { ConnectingScreen } from './connecting-screen';
 import { HandsDrawer } from './hands/hands-drawer';
 import { useBenchLink } from './live/use-bench-link';
@@ -19,11 +20,11 @@ const browserTimeZone = () => Intl.DateTimeFormat().resolvedOptions().timeZone;
 
 /** A bench in the browser: connection, scanner, sounds and the screen of its station. */
 export function BenchClient({ station }: { station: string }) {
-  const link = useBenchLink(station);
+  const [flood] = useState(() => createFloodStore(browserClock));
+  const link = useBenchLink(station, flood);
   const { view, command } = link;
   const { refusal, take } = useRefusal(view);
-  const flood = useFlood(view ? heardBeep(view) : null);
-  const { sound, toggle, play } = useBenchSound(view, flood !== null);
+  const { sound, toggle, play } = useBenchSound(view, flood);
   const [timeZone] = useState(browserTimeZone);
   const { locale, messages } = benchCatalogue(view?.operator?.locale);
 

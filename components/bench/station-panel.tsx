@@ -21,7 +21,7 @@ export function StationPanel() {
       <h2 className="text-b-flag leading-tight font-bold">{view.station.name}</h2>
       <ul className="mt-2.5">
         {items.map((item) => (
-          <ReadinessRow key={item.key} item={item} tight={items.length > 4} />
+          <ReadinessRow key={item.key + item.sentence.code} item={item} tight={items.length > 4} />
         ))}
       </ul>
     </section>
@@ -40,7 +40,9 @@ function ReadinessRow({ item, tight }: { item: ReadinessItem; tight: boolean }) 
     <li className={`flex gap-5 border-t-2 border-hair ${tight ? 'py-2' : 'py-3.5'}`}>
       <VerdictMark shape={shapes[state]} size="calc(42 * var(--sw-b))" label={t(`state.${state}`)} />
       <div className="min-w-0 flex-1">
-        <h3 className="text-b-line leading-tight font-bold">{item.label || t(`keys.${item.key}`)}</h3>
+        <h3 className="text-b-line leading-tight font-bold">
+          {[t(`keys.${item.key}`), item.label].filter(Boolean).join(' ')}
+        </h3>
         <p className={`text-b-label leading-snug ${state === 'bad' ? 'font-bold text-reject' : 'text-ink-2'}`}>
           {say(item.sentence)}
           {validUntil && state !== 'bad' ? ` ${t('until', { date: when(validUntil) })}` : null}

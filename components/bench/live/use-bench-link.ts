@@ -1,6 +1,8 @@
 import { useEffect, useRef, useState } from 'react';
 import type { BenchCommand, CommandReply, HandsCommand, HandsView } from '@/lib/contracts/bench-command';
 import type { BenchView } from '@/lib/contracts/bench-view';
+import type { FloodStore } from '../beep/flood-store';
+import { heardBeep } from '../beep/heard-beep';
 import { openBenchSocket, type BenchSocket } from './bench-socket';
 import { createReadingStore, type ReadingStore } from './reading-store';
 
@@ -19,7 +21,7 @@ export interface BenchLink {
 const notYet: CommandReply = { ok: false, code: 'no-connection' };
 
 /** The live connection of a bench screen. What was last seen stays in view when the connection is lost. */
-export function useBenchLink(station: string): BenchLink {
+export function useBenchLink(station: string, flood: FloodStore): BenchLink {
   const [view, setView] = useState<BenchView | null>(null);
   const [hands, setHands] = useState<HandsView | null>(null);
   const [leads, setLeads] = useState(true);
@@ -30,6 +32,8 @@ export function useBenchLink(station: string): BenchLink {
   useEffect(() => {
     const open = openBenchSocket(station, {
       view: (next) => {
+        // Before anything is rendered: the hand on the screw waits for this one.
+        flood.hear(heardBeep(next));
         if (next.run?.supply.state !== 'on' && next.screen.kind !== 'commissioning') readings.push(null);
         setView(next);
       },
@@ -44,7 +48,7 @@ export function useBenchLink(station: string): BenchLink {
       socket.current = null;
       open.close();
     };
-  }, [station, readings]);
+  }, [station, readings, flood]);
   return {
     view,
     hands,

@@ -29,10 +29,14 @@ export function useScanner(handlers: ScannerHandlers) {
       clearTimeout(timer);
       if (seen.typed) typeInto(document.activeElement, seen.typed);
       if (seen.scan !== null) {
-        lastScanMs = performance.now();
+        lastScanMs = state.lastKeyMs;
         newest.current.onScan(seen.scan.trim());
       }
-      if (state.held) timer = setTimeout(() => settle(takeSilence(state, performance.now())), patienceMs(state) + 5);
+      if (state.held)
+        timer = setTimeout(
+          () => settle(takeSilence(state, state.lastKeyMs + patienceMs(state))),
+          patienceMs(state) + 5,
+        );
     };
     const onKey = (event: KeyboardEvent) => {
       if (event.isComposing || event.ctrlKey || event.metaKey || event.altKey) return;

@@ -1,6 +1,7 @@
 import { useCallback, useEffect, useRef, useState, useSyncExternalStore } from 'react';
 import type { BenchView } from '@/lib/contracts/bench-view';
 import type { SoundState } from '../bench-context';
+import type { FloodStore } from '../beep/flood-store';
 import { createBenchSpeaker, type BenchSpeaker } from './bench-speaker';
 import { faultStands, soundBetween, tickIntervalMs } from './sounds-between';
 import type { Tone } from './tones';
@@ -21,8 +22,8 @@ export interface BenchSoundControl {
   play: (tone: Tone) => void;
 }
 
-/** Sounds of the bench by its view. `beep` is the flood that shows now, so that tone and flood start together. */
-export function useBenchSound(view: BenchView | null, beep: boolean): BenchSoundControl {
+/** Sounds of the bench by its view. The beep comes with its flood, so that both start together. */
+export function useBenchSound(view: BenchView | null, flood: FloodStore): BenchSoundControl {
   const [speaker] = useState<BenchSpeaker | null>(() => (typeof window === 'undefined' ? null : createBenchSpeaker()));
   const [allowed, setAllowed] = useState(false);
   const muted = useSyncExternalStore(watchMuted, readMuted, () => false);
@@ -41,9 +42,13 @@ export function useBenchSound(view: BenchView | null, beep: boolean): BenchSound
     before.current = view;
     if (sound && sound !== 'fault') play(sound);
   }, [view, play]);
-  useEffect(() => {
-    if (beep) play('beep');
-  }, [beep, play]);
+  useEffect(
+    () =>
+      flood.subscribe(() => {
+        if (flood.showing() !== null) play('beep');
+      }),
+    [flood, play],
+  );
   useFaultTone(view !== null && faultStands(view) ? runKey(view) : null, play);
   useTicks(view && !muted ? tickIntervalMs(view) : null, play, speaker);
 

@@ -4,7 +4,7 @@ import { useBench } from '../bench-context';
 import { railsBox, heightOf } from '../rails/rails-geometry';
 import { RailsPane } from '../rails-pane';
 import { MagnifiedStrip } from '../strip/magnified-strip';
-import { heldReading } from './trim-inside';
+import { heldReading, isAfterBeep1 } from './trim-inside';
 
 /** Rails and, beside them, the magnified strip, joined by a pale beam from its place on the rail. */
 export function StripPane({ trim }: { trim: TrimView }) {
@@ -15,7 +15,7 @@ export function StripPane({ trim }: { trim: TrimView }) {
   const y = heightOf(rails, trim.targetVolts);
   const volts = trim.liveTripVolts ?? trim.lastTripVolts;
   const live = trim.liveTripVolts !== null;
-  const note = live ? t('now') : trim.stage === 'beep-2' ? t('afterBeep1') : t('before');
+  const note = live ? t('now') : isAfterBeep1(rails, trim) ? t('afterBeep1') : t('before');
   return (
     <div className="relative flex h-full">
       <svg viewBox="0 0 1080 734" aria-hidden="true" className="absolute inset-0 h-full w-full max-[900px]:hidden">

@@ -34,8 +34,14 @@ export function trimRails(rails: RailsView, trim: TrimView): RailsView {
   return { ...rails, flags: [...before, ...now], hysteresisVolts: null };
 }
 
+/** The last trip point was measured after the first beep, and not before the trim. */
+export function isAfterBeep1({ flags }: RailsView, { stage, lastTripVolts }: TrimView): boolean {
+  if (stage !== 'beep-2' || lastTripVolts === null) return false;
+  return !flags.some((flag) => flag.side === 'trip' && alike(flag.volts, lastTripVolts));
+}
+
 function tripNow(rails: RailsView, trim: TrimView, volts: number, stale: boolean): RailFlag {
-  if (stale) return { side: 'trip', volts, hollow: true, note: trim.stage === 'beep-2' ? 'after-beep-1' : 'before' };
+  if (stale) return { side: 'trip', volts, hollow: true, note: isAfterBeep1(rails, trim) ? 'after-beep-1' : 'before' };
   if (trim.finding === 'no-effect') return { side: 'trip', volts, hollow: false, note: 'no-change' };
   const limits = rails.tripLimits;
   const note = !limits ? null : volts < limits.min ? 'too-low' : volts > limits.max ? 'too-high' : null;

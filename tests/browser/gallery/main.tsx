@@ -4,13 +4,15 @@ import '@/app/globals.css';
 import { NextIntlClientProvider } from 'next-intl';
 import { createRoot } from 'react-dom/client';
 import { flushSync } from 'react-dom';
+import { BenchClient } from '@/components/bench/bench-client';
 import { BenchProvider } from '@/components/bench/bench-context';
-import { BenchScreen, heardBeep } from '@/components/bench/bench-screen';
+import { BenchScreen } from '@/components/bench/bench-screen';
 import { HandsDrawer } from '@/components/bench/hands/hands-drawer';
 import { createReadingStore } from '@/components/bench/live/reading-store';
 import { showScheme, type Scheme } from '@/components/ui/scheme';
 import { benchCatalogue } from '@/lib/messages/bench-locales';
 import { Kit } from './kit';
+import { standingFlood } from './standing-flood';
 import { galleryViews, practiceHands, type GalleryView } from './views';
 
 /** One screen of the gallery. Another is shown by `showScreen`, without loading the page again. */
@@ -45,7 +47,7 @@ function Bench({ shown, locale }: { shown: GalleryView; locale: string }) {
       >
         <div className="flex min-h-dvh max-[900px]:flex-col min-[900px]:h-dvh">
           <div className="sw-stage min-w-0 flex-1">
-            <BenchScreen flood={heardBeep(shown.view)} />
+            <BenchScreen flood={standingFlood(shown.view)} />
           </div>
           {shown.practice && <HandsDrawer hands={practiceHands} view={shown.view} send={answer} scan={() => {}} />}
         </div>
@@ -72,6 +74,8 @@ window.showScreen = ({ screen, scheme = 'day', locale = 'en' }) => {
   document.documentElement.lang = locale;
   const shown = galleryViews[screen];
   const key = `${screen} ${locale}`;
+  // The whole bench as it runs, connected to whatever serves this page.
+  if (screen === 'live') return root.render(<BenchClient station="station-3" />);
   flushSync(() =>
     root.render(screen === 'kit' ? <Kit /> : shown ? <Bench key={key} shown={shown} locale={locale} /> : <Screens />),
   );

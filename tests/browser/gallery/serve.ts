@@ -1,4 +1,5 @@
 import tailwindcss from '@tailwindcss/postcss';
+import type { Server } from 'node:http';
 import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -8,7 +9,7 @@ import { build, preview } from 'vite';
 const root = fileURLToPath(new URL('../../../', import.meta.url)).replace(/\/$/, '');
 
 /** Builds the gallery once and serves it on a free port of loopback. */
-export async function serveGallery(): Promise<{ address: string; close: () => Promise<void> }> {
+export async function serveGallery(): Promise<{ address: string; httpServer: Server; close: () => Promise<void> }> {
   const folder = mkdtempSync(join(tmpdir(), 'sillwright-gallery-'));
   const shared = {
     configFile: false as const,
@@ -28,6 +29,7 @@ export async function serveGallery(): Promise<{ address: string; close: () => Pr
   const { port } = server.httpServer.address() as { port: number };
   return {
     address: `http://127.0.0.1:${port}/`,
+    httpServer: server.httpServer as Server,
     close: async () => {
       await server.close();
       rmSync(folder, { recursive: true, force: true });

@@ -48,7 +48,7 @@ const bothFound = (tripVolts: number, releaseVolts: number, note: RailFlag['note
 const good: ReadinessItem[] = [
   {
     key: 'meter',
-    label: 'Meter DM-3',
+    label: 'DM-003',
     state: 'good',
     validFrom: iso(now - 220 * day),
     validUntil: iso(now + 139 * day),
@@ -56,7 +56,7 @@ const good: ReadinessItem[] = [
   },
   {
     key: 'supply',
-    label: 'Supply PS-3',
+    label: 'PS-003',
     state: 'good',
     validFrom: iso(now - 270 * day),
     validUntil: iso(now + 92 * day),
@@ -95,7 +95,7 @@ const base: BenchView = {
   station: {
     code: 'station-3',
     name: 'Station 3',
-    fixture: 'F2',
+    fixture: 'Fixture 12-A',
     simulated: true,
     hasController: true,
     hasWiperProbe: false,
@@ -226,7 +226,7 @@ export const galleryViews: Record<string, GalleryView> = {
     screen: {
       kind: 'may-not-test',
       reasons: [{ code: 'meter-calibration-ended', faultCode: 'C-301' }],
-      otherStation: '2',
+      otherStation: 'Station 2',
     },
   }),
   'choose-lot': shown({

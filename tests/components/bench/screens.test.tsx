@@ -3,10 +3,11 @@ import { cleanup, fireEvent, render, screen, within } from '@testing-library/rea
 import { NextIntlClientProvider } from 'next-intl';
 import { afterEach, describe, expect, it, vi } from 'vitest';
 import { BenchProvider } from '@/components/bench/bench-context';
-import { BenchScreen, heardBeep } from '@/components/bench/bench-screen';
+import { BenchScreen } from '@/components/bench/bench-screen';
 import { createReadingStore } from '@/components/bench/live/reading-store';
 import { benchCatalogue, benchLocales } from '@/lib/messages/bench-locales';
 import { benchCommandSchema } from '@/lib/contracts/bench-command';
+import { standingFlood } from '@/tests/browser/gallery/standing-flood';
 import { galleryViews, type GalleryView } from '@/tests/browser/gallery/views';
 
 afterEach(cleanup);
@@ -33,7 +34,7 @@ function show(name: string, change: Partial<GalleryView> = {}, locale = 'en') {
           toggleSound: () => {},
         }}
       >
-        <BenchScreen flood={heardBeep(shown.view)} />
+        <BenchScreen flood={standingFlood(shown.view)} />
       </BenchProvider>
     </NextIntlClientProvider>,
   );
