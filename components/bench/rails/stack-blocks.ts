@@ -12,30 +12,34 @@ export interface Block {
  */
 export function stackBlocks(blocks: readonly Block[], top: number, bottom: number, gap = 6): Map<string, number> {
   const sorted = [...blocks].sort((a, b) => a.wantedY - b.wantedY);
-  const groups: { members: Block[]; start: number; height: number }[] = [];
+  const groups: Group[] = [];
   for (const block of sorted) {
-    let group = { members: [block], start: block.wantedY - block.above, height: block.above + block.below };
+    let group = place([block], top, bottom, gap);
     for (let last = groups.at(-1); last && last.start + last.height + gap > group.start; last = groups.at(-1)) {
       groups.pop();
       group = place([...last.members, ...group.members], top, bottom, gap);
     }
-    group.start = Math.max(top, Math.min(group.start, bottom - group.height));
     groups.push(group);
   }
   const centres = new Map<string, number>();
-  let floor = top;
   for (const group of groups) {
-    let y = Math.max(group.start, floor);
+    let y = group.start;
     for (const block of group.members) {
       centres.set(block.key, y + block.above);
       y += block.above + block.below + gap;
     }
-    floor = y;
   }
   return centres;
 }
 
-function place(members: Block[], top: number, bottom: number, gap: number) {
+interface Group {
+  members: Block[];
+  start: number;
+  height: number;
+}
+
+/** Members under each other around the mean of where each would put the group, inside the room. */
+function place(members: Block[], top: number, bottom: number, gap: number): Group {
   let height = -gap;
   let sum = 0;
   for (const block of members) {
