@@ -72,7 +72,7 @@ export function DataTable<Row extends RowData>({
   const pages = table.getPageCount();
   return (
     <>
-      <Table aria-label={label} className="[&_:is(td,th):not(:last-child)]:pr-7">
+      <Table aria-label={label} className="sm:[&_:is(td,th):not(:last-child)]:pr-7">
         <thead>
           {table.getHeaderGroups().map((group) => (
             <tr key={group.id}>

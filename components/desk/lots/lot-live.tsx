@@ -63,7 +63,7 @@ export function LotLive({ initial, mayManage, mayHold, actions }: LotLiveProps) 
         </div>
       </div>
       <Section title="Every board, in lot order" aside={<LotRuleKey />}>
-        <LotRule
+        <LotRuleAtWidth
           marks={summary.marks}
           label={`${summary.tested} of ${summary.size} boards tested, ${summary.rejected} rejected, ${summary.passedLater} passed on a later attempt`}
         />
@@ -104,6 +104,20 @@ export function LotLive({ initial, mayManage, mayHold, actions }: LotLiveProps) 
       >
         <LotBoardsTable key={choice} boards={shown} boardTypeCode={lot.boardTypeCode} />
       </Section>
+    </>
+  );
+}
+
+/** Drawn for a desk and once more for a phone, since its marks do not shrink. */
+function LotRuleAtWidth({ marks, label }: { marks: string; label: string }) {
+  return (
+    <>
+      <div className="max-sm:hidden">
+        <LotRule marks={marks} label={label} />
+      </div>
+      <div className="sm:hidden">
+        <LotRule marks={marks} label={label} width={480} />
+      </div>
     </>
   );
 }

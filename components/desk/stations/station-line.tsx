@@ -26,7 +26,7 @@ export function StationLine({ station, onCome, busy }: StationLineProps) {
   const page = `/stations/${encodeURIComponent(station.code)}`;
   return (
     <li
-      className={`grid items-center gap-x-6 gap-y-2 border-b border-hair py-5 sm:grid-cols-[64px_44px_minmax(0,5fr)_minmax(0,4fr)_minmax(0,8fr)_140px] ${calls ? 'sw-hold -mx-12 !px-12 max-sm:-mx-[18px] max-sm:!pr-[18px] max-sm:!pl-8' : ''}`}
+      className={`grid grid-cols-[48px_40px_minmax(0,1fr)] items-center gap-x-4 gap-y-2 border-b border-hair py-5 max-sm:[&>:nth-child(n+4)]:col-span-full sm:gap-x-6 sm:grid-cols-[64px_44px_minmax(0,5fr)_minmax(0,4fr)_minmax(0,8fr)_140px] ${calls ? 'sw-hold -mx-12 !px-12 max-sm:-mx-[18px] max-sm:!pr-[18px] max-sm:!pl-8' : ''}`}
     >
       <Link href={page} className="text-[44px] leading-none font-bold hover:text-accent max-sm:text-[28px]">
         {station.code}
