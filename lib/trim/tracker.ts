@@ -75,7 +75,7 @@ export function track(tracker: Tracker, model: TrackerModel, look: TrackerLook):
   const next: Particles = {
     trips: tracker.trips.slice(),
     rates: tracker.rates.slice(),
-    hysteresisErrors: tracker.hysteresisErrors,
+    hysteresisErrors: tracker.hysteresisErrors.slice(),
   };
   const random = generator(tracker.seed);
   drift(next, model, Math.max(0, look.atMs - tracker.atMs) / 1000, random);
@@ -100,12 +100,12 @@ export function trackedRelease(tracker: Tracker, hysteresisVolts: number): numbe
   return releases[particles >> 1]!;
 }
 
-/** In place, on the trips and rates. */
+/** In place. The hysteresis wanders a little, lest a chance of the turn stays in it. */
 function drift(tracker: Particles, model: TrackerModel, seconds: number, random: Generator): void {
   const starts = 1 - Math.exp(-seconds / startSeconds);
   const rests = 1 - Math.exp(-seconds / restSeconds);
   const wander = rateWander * Math.sqrt(seconds);
-  const { trips, rates } = tracker;
+  const { trips, rates, hysteresisErrors } = tracker;
   for (let i = 0; i < particles; i++) {
     const draw = random.uniform();
     if (rates[i] === 0) {
@@ -117,6 +117,7 @@ function drift(tracker: Particles, model: TrackerModel, seconds: number, random:
     } else if (draw < rests) rates[i] = 0;
     else rates[i] = rates[i]! * Math.max(0.2, 1 + wander * random.bell());
     trips[i] = trips[i]! + rates[i]! * seconds + 0.0003 * random.bell();
+    hysteresisErrors[i] = hysteresisErrors[i]! * 0.99 + 0.0004 * random.bell();
   }
 }
 

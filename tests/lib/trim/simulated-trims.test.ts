@@ -97,6 +97,19 @@ describe('a trim from prompt to outcome', () => {
     },
   );
 
+  it.each(['two-beeps', 'prompted', 'wiper-probe'] as const)(
+    '%s: a target beyond the end stop is a finding',
+    (procedure) => {
+      // Padded so that the last turn raises the trip point to 9.4 V or so of the 10 V wanted.
+      const design = { ...trimTypes.padded.design, supplyEndOhms: 2820, groundEndOhms: 5980 };
+      const type = { ...trimTypes.padded, design, startMinVolts: 8.8, startMaxVolts: 9 };
+      for (const link of [fastLink, slowLink]) {
+        const run = trimOne({ procedure, link, type, seed: 704 });
+        expect(run.outcome, link.name).toMatchObject({ kind: 'failed', finding: 'end-of-travel' });
+      }
+    },
+  );
+
   it('never takes a turning screw for a stopped one: no wrong way, no effect among good hands', () => {
     for (const procedure of ['two-beeps', 'prompted', 'wiper-probe'] as const) {
       for (const seed of seeds) expect(trimOne({ procedure, seed }).findings, `seed ${seed}`).toEqual([]);
