@@ -5,7 +5,8 @@ import { benchNamespace, type BenchCommand, type CommandReply } from '@/lib/cont
 import type { BenchReading, BenchView } from '@/lib/contracts/bench-view';
 import { launchChromium } from './chromium';
 import { serveGallery } from './gallery/serve';
-import { galleryViews, practiceHands } from './gallery/views';
+import { practiceHands } from './gallery/samples';
+import { galleryViews } from './gallery/views';
 
 /** The bench in the browser against a real socket whose other end the test holds: losses, roles, floods, scanner. */
 

@@ -13,7 +13,8 @@ import { showScheme, type Scheme } from '@/components/ui/scheme';
 import { benchCatalogue } from '@/lib/messages/bench-locales';
 import { Kit } from './kit';
 import { standingFlood } from './standing-flood';
-import { galleryViews, practiceHands, type GalleryView } from './views';
+import { practiceHands, type GalleryView } from './samples';
+import { galleryViews } from './views';
 
 /** One screen of the gallery. Another is shown by `showScreen`, without loading the page again. */
 export interface Shown {

@@ -8,7 +8,8 @@ import { createReadingStore } from '@/components/bench/live/reading-store';
 import { benchCatalogue, benchLocales } from '@/lib/messages/bench-locales';
 import { benchCommandSchema } from '@/lib/contracts/bench-command';
 import { standingFlood } from '@/tests/browser/gallery/standing-flood';
-import { galleryViews, type GalleryView } from '@/tests/browser/gallery/views';
+import type { GalleryView } from '@/tests/browser/gallery/samples';
+import { galleryViews } from '@/tests/browser/gallery/views';
 
 afterEach(cleanup);
 
