@@ -157,16 +157,14 @@ describe('a person', () => {
     const station = await insertStation(open.db);
     await setPin(admin, { accountId, pin: '2580' });
     const at = (secondsAgo: number) => new Date(Date.now() - secondsAgo * 1000);
-    await open.db
-      .insert(signInAttempts)
-      .values(
-        [50, 40, 30, 20, 5, 1].map((s) => ({
-          identifier: accountId,
-          stationId: station.id,
-          at: at(s),
-          outcome: 'failed' as const,
-        })),
-      );
+    await open.db.insert(signInAttempts).values(
+      [50, 40, 30, 20, 5, 1].map((s) => ({
+        identifier: accountId,
+        stationId: station.id,
+        at: at(s),
+        outcome: 'failed' as const,
+      })),
+    );
     const waiting = async () => (await listPersons()).find((person) => person.accountId === accountId)!.waiting;
     expect(await waiting()).toMatchObject({ failures: 6, stationCode: station.code });
     const signIn = () => signInAtBench({ stationId: station.id, accountId, digits: '1470' });

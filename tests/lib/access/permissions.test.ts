@@ -25,7 +25,11 @@ describe('mayDo', () => {
   });
 
   test('keeps the operator at the bench', () => {
-    expect(rights.filter((right) => mayDo(['operator'], right)).sort()).toEqual(['print-labels', 'test-boards', 'use-bench']);
+    expect(rights.filter((right) => mayDo(['operator'], right)).sort()).toEqual([
+      'print-labels',
+      'test-boards',
+      'use-bench',
+    ]);
   });
 
   test('gives release to another engineer or quality, and lots, holds and dispositions to quality alone', () => {

@@ -76,7 +76,7 @@ describe('the catalogue of the bench', () => {
         messages: messages as never,
         namespace: 'say' as never,
         onError: (error) => problems.push(error.message),
-      }) as (key: string, params: Record<string, string | number>) => string;
+      }) as unknown as (key: string, params: Record<string, string | number>) => string;
       const params = Object.fromEntries(names.map((name, i) => [name, /volts/i.test(name) ? 10.5 + i : `value${i}`]));
       const text = translate(code, params);
       expect(problems).toEqual([]);
