@@ -53,5 +53,5 @@ export function ButtonLink({ kind = 'outlined', size = 'desk', className = '', .
 }
 
 function StopSquare() {
-  return <span aria-hidden="true" className="inline-block size-[0.8em] bg-current" />;
+  return <span aria-hidden="true" className="inline-block size-[0.8em] flex-none bg-current" />;
 }
