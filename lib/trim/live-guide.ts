@@ -33,7 +33,7 @@ const restMsOf = {
 } as const;
 const leastReadings = 5;
 /** A point that never rests is measured all the same. */
-const longestPromptMs = 120_000;
+const longestPromptMs = 60_000;
 
 export function beginGuide(state: TrimState, volts: number): LiveGuide {
   return {

@@ -23,9 +23,15 @@ const row = (
   wrongWayShare = 0,
 ): TrimRow => ({ type, procedure, toleranceMillivolts, link, boards, wrongWayShare });
 
-/** A dial that follows corrects itself, so channel 103 is shown where the turn is made as told, and in the target's row. */
-const isWorthShowing = ({ type, procedure, toleranceMillivolts, link }: TrimRow) =>
-  procedure !== 'prompted, 103 read' || link === '9600' || (type === 'multi' && toleranceMillivolts === 20);
+/**
+ * A dial that follows corrects itself, so channel 103 is shown where the turn is made as told, and in the target's row. On
+ * the full span a dial that follows is chased without end.
+ */
+function isWorthShowing({ type, procedure, toleranceMillivolts, link }: TrimRow): boolean {
+  const follows = procedure === 'wiper probe' || (procedure.startsWith('prompted') && link === '115200');
+  if (type === 'full') return !follows;
+  return procedure !== 'prompted, 103 read' || !follows || (type === 'multi' && toleranceMillivolts === 20);
+}
 
 const grid = (type: TrimRow['type'], tolerances: readonly number[]): TrimRow[] =>
   tolerances
