@@ -32,7 +32,7 @@ const restMsOf = {
   below: { onTarget: 1500, elsewhere: 8000 },
 } as const;
 const leastReadings = 5;
-/** A point that never rests is measured all the same. */
+/** A point that never rests is measured all the same, unless the operator is asked about no effect. */
 const longestPromptMs = 60_000;
 
 export function beginGuide(state: TrimState, volts: number): LiveGuide {
@@ -88,7 +88,8 @@ export function guide(state: TrimState, before: LiveGuide, { volts, sdVolts, qui
     state: { ...told.state, advice },
     guide: turned,
     stopped:
-      (quiet && hasStopped(told.state, turned, volts, sdVolts)) || state.atMs - turned.promptedAtMs > longestPromptMs,
+      (quiet && hasStopped(told.state, turned, volts, sdVolts)) ||
+      (turned.noEffectAtMs === null && state.atMs - turned.promptedAtMs > longestPromptMs),
   };
 }
 
