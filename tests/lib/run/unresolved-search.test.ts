@@ -8,7 +8,7 @@ import { Plant } from './plant';
 /** A board that is not steady, whose contacts read as `contact` says once the engine looks closer. */
 function unsteady(contact: 'holds' | 'lost') {
   const plan = planFor('CB1210');
-  const plant = new Plant({ boardType: plan.boardType, seed: 5, defect: 'noisy-wiper' });
+  const plant = new Plant({ boardType: plan.boardType, seed: 1, defect: 'noisy-wiper' });
   plant.lidClosed = plant.boardPresent = true;
   const seen: string[] = [];
   let now = beginRun(plan, plant.nowMs);
