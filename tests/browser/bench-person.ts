@@ -87,6 +87,7 @@ export class BenchPerson {
       .first()
       .waitFor();
     await this.press(/^Place /);
+    await this.page.getByRole('button', { name: 'Remove board' }).waitFor();
     const scanIt = this.page.getByRole('button', { name: /^Scan [A-Z0-9]/ }).first();
     await scanIt.click();
     let serial = '';

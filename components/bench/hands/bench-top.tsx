@@ -19,7 +19,12 @@ export function BenchTop({ hands, act }: HandsProps) {
             {t('remove')}
           </button>
         ) : (
-          <button type="button" className={styles.press} data-strong="" onClick={() => act({ kind: 'place-board' })}>
+          <button
+            type="button"
+            className={styles.press}
+            data-strong=""
+            onClick={() => act({ kind: 'place-board', serial: hands.nextSerial ?? undefined })}
+          >
             {hands.nextSerial ? t('placeNext', { serial: short(hands.nextSerial) }) : t('place')}
           </button>
         )}
