@@ -14,7 +14,7 @@ const moments: readonly [name: string, words: RegExp][] = [
   ['find-points', /Find points[\s\S]*readings/],
   ['trim-first-beep', /until it beeps/],
   ['trim-stop', /First beep\./],
-  ['trim-second-beep', /Now slowly/],
+  ['trim-second-beep', /^(?![\s\S]*beep\.)[\s\S]*Now slowly/],
   ['seal', /Seal the screw/],
   ['pass', /PASS/],
   ['reject', /REJECT[\s\S]*waiting for the bin scan/],
