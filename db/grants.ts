@@ -1,7 +1,7 @@
 import { escapeIdentifier, type ClientBase } from 'pg';
 
 /** Tables that the program only adds to, so that even a fault in it cannot rewrite them. */
-const addedToOnly = ['trail'];
+const addedToOnly = ['trail', 'lot_moves'];
 /** Records that are written and finished but never removed. */
 const neverRemoved = [
   'accounts',
@@ -13,6 +13,7 @@ const neverRemoved = [
   'retest_orders',
   'units',
   'lots',
+  'engineering_offers',
 ];
 
 /** Gives the application's role its rights on the tables of the owner who is connected. Repeating it changes nothing. */

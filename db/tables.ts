@@ -6,6 +6,11 @@ import * as calibrations from './schema/calibrations';
 import * as commissionings from './schema/commissionings';
 import * as dailyChecks from './schema/daily-checks';
 import * as dispositions from './schema/dispositions';
+import * as draftEditors from './schema/draft-editors';
+import * as dryRuns from './schema/dry-runs';
+import * as engineeringOffers from './schema/engineering-offers';
+import * as files from './schema/files';
+import * as lotMoves from './schema/lot-moves';
 import * as engineerCalls from './schema/engineer-calls';
 import * as instruments from './schema/instruments';
 import * as labels from './schema/labels';
@@ -39,6 +44,11 @@ export const tables = {
   ...commissionings,
   ...dailyChecks,
   ...dispositions,
+  ...draftEditors,
+  ...dryRuns,
+  ...engineeringOffers,
+  ...files,
+  ...lotMoves,
   ...engineerCalls,
   ...instruments,
   ...labels,

@@ -23,6 +23,7 @@ import {
 } from '@/lib/run/types';
 import { accounts } from './accounts';
 import { id, moment, momentNow } from './columns';
+import { engineeringOffers } from './engineering-offers';
 import { lots } from './lots';
 import { measurements } from './measurements';
 import { referenceBoards } from './reference-boards';
@@ -50,6 +51,8 @@ export const runs = pgTable(
     lotId: uuid().references(() => lots.id),
     /** Null: a unit of a lot. */
     referenceBoardId: uuid().references(() => referenceBoards.id),
+    /** Of an engineering run. Null: any other. */
+    offerId: uuid().references(() => engineeringOffers.id),
     stationId: uuid()
       .notNull()
       .references(() => stations.id),
@@ -118,6 +121,7 @@ export const runs = pgTable(
       'runs_no_verdict_has_reason',
       sql`(${t.verdict} is not distinct from 'no-verdict') = (${t.noVerdictReason} is not null)`,
     ),
+    check('runs_engineering_of_offer', sql`(${t.kind} = 'engineering') = (${t.offerId} is not null)`),
     check('runs_bin_scan_whole', sql`(${t.binCode} is null) = (${t.binScannedAt} is null)`),
   ],
 );

@@ -1,5 +1,6 @@
 import type { BoardType } from '@/lib/contracts/board-type';
 import type { DecisionRule, Sequence, Step } from '@/lib/sequence/step';
+import { numberSteps } from '@/lib/sequence/number-steps';
 import { cb0612, cb1210, cb2420 } from './board-types';
 
 export interface SeedSequence {
@@ -26,7 +27,7 @@ function sequenceFor(recipe: Recipe): Sequence {
   const searching = { mostSettles: 150, settleMs: 40 };
   return {
     decisionRule,
-    steps: [
+    steps: numberSteps([
       { kind: 'seat', contactCheck: { volts: 1.8, currentLimitAmps: 0.02, mostMilliohms: 5_000 } },
       {
         kind: 'power-up',
@@ -51,7 +52,7 @@ function sequenceFor(recipe: Recipe): Sequence {
       { kind: 'ride-through', milliseconds: 10, atVolts: recipe.rideThroughAtVolts },
       { kind: 'operator-check', question: 'Is the green lamp on the board lit?' },
       { kind: 'record' },
-    ],
+    ]),
   };
 }
 

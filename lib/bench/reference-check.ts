@@ -28,7 +28,7 @@ export function planReferenceCheck(
     },
     sequence: {
       decisionRule: { kind: 'simple' },
-      steps: [...kept('seat'), ...kept('power-up'), ...verify, { kind: 'record' }],
+      steps: [...kept('seat'), ...kept('power-up'), ...verify, ...kept('record')],
     },
   };
 }

@@ -1,9 +1,9 @@
 /** States kept in the database. Each list feeds one PostgreSQL enum: adding a value needs a migration. */
 
-export const boardTypeRevisionStates = ['draft', 'submitted', 'approved', 'withdrawn'] as const;
+export const boardTypeRevisionStates = ['draft', 'submitted', 'approved', 'superseded', 'withdrawn'] as const;
 export type BoardTypeRevisionState = (typeof boardTypeRevisionStates)[number];
 
-export const sequenceRevisionStates = ['draft', 'submitted', 'released', 'withdrawn'] as const;
+export const sequenceRevisionStates = ['draft', 'submitted', 'released', 'superseded', 'withdrawn'] as const;
 export type SequenceRevisionState = (typeof sequenceRevisionStates)[number];
 
 export const lotStates = ['open', 'paused', 'closed'] as const;
@@ -29,3 +29,10 @@ export type InstrumentKind = (typeof instrumentKinds)[number];
 
 export const stationSchemes = ['day', 'night', 'system'] as const;
 export type StationScheme = (typeof stationSchemes)[number];
+
+export const dryRunStates = ['waiting', 'running', 'done', 'cancelled', 'failed'] as const;
+export type DryRunState = (typeof dryRunStates)[number];
+
+/** What a stored file is for; each kind has its own allowed types and sizes. */
+export const fileKinds = ['trimmer-photo', 'fixture-drawing', 'instruction-picture'] as const;
+export type FileKind = (typeof fileKinds)[number];

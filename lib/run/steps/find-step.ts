@@ -1,7 +1,7 @@
-import type { Step } from '../../sequence/step';
+import type { StepCommon, StepOf } from '../../sequence/step';
 import type { StepContext } from '../machine';
 
-type FindStep = Extract<Step, { kind: 'find-points' }>;
+type FindStep = Omit<StepOf<'find-points'>, keyof StepCommon>;
 
 /** How this sequence looks for the points; a sequence that only verifies looks over the board type's whole range. */
 export function findStep({ plan }: StepContext): FindStep {
