@@ -1,7 +1,7 @@
 import { escapeIdentifier, type ClientBase } from 'pg';
 
 /** Tables that the program only adds to, so that even a fault in it cannot rewrite them. */
-const addedToOnly = ['trail', 'lot_moves'];
+const addedToOnly = ['trail', 'lot_moves', 'signatures', 'hold_rule_sets', 'chart_baselines'];
 /** Records that are written and finished but never removed. */
 const neverRemoved = [
   'accounts',
@@ -14,6 +14,8 @@ const neverRemoved = [
   'units',
   'lots',
   'engineering_offers',
+  'lot_holds',
+  'certificates',
 ];
 
 /** Gives the application's role its rights on the tables of the owner who is connected. Repeating it changes nothing. */

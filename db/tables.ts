@@ -11,6 +11,20 @@ import * as dryRuns from './schema/dry-runs';
 import * as engineeringOffers from './schema/engineering-offers';
 import * as files from './schema/files';
 import * as lotMoves from './schema/lot-moves';
+import * as signatures from './schema/signatures';
+import * as reasonCodes from './schema/reason-codes';
+import * as lotHolds from './schema/lot-holds';
+import * as holdRuleSets from './schema/hold-rule-sets';
+import * as chartBaselines from './schema/chart-baselines';
+import * as certificates from './schema/certificates';
+import * as mails from './schema/mails';
+import * as mailSubscriptions from './schema/mail-subscriptions';
+import * as siteSettings from './schema/site-settings';
+import * as apiTokens from './schema/api-tokens';
+import * as webhooks from './schema/webhooks';
+import * as webhookDeliveries from './schema/webhook-deliveries';
+import * as trailCheckpoints from './schema/trail-checkpoints';
+import * as yieldDays from './schema/yield-days';
 import * as engineerCalls from './schema/engineer-calls';
 import * as instruments from './schema/instruments';
 import * as labels from './schema/labels';
@@ -49,6 +63,20 @@ export const tables = {
   ...engineeringOffers,
   ...files,
   ...lotMoves,
+  ...signatures,
+  ...reasonCodes,
+  ...lotHolds,
+  ...holdRuleSets,
+  ...chartBaselines,
+  ...certificates,
+  ...mails,
+  ...mailSubscriptions,
+  ...siteSettings,
+  ...apiTokens,
+  ...webhooks,
+  ...webhookDeliveries,
+  ...trailCheckpoints,
+  ...yieldDays,
   ...engineerCalls,
   ...instruments,
   ...labels,

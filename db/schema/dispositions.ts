@@ -3,7 +3,9 @@ import { check, index, pgEnum, pgTable, text, uuid } from 'drizzle-orm/pg-core';
 import { dispositionKinds } from '@/lib/contracts/stored-states';
 import { accounts } from './accounts';
 import { id, moment, momentNow } from './columns';
+import { reasonCodes } from './reason-codes';
 import { runs } from './runs';
+import { signatures } from './signatures';
 import { units } from './units';
 
 export const dispositionKindEnum = pgEnum('disposition_kind', dispositionKinds);
@@ -24,6 +26,12 @@ export const dispositions = pgTable(
     /** What was done to the board, or is to be done. Empty for scrap and concession. */
     action: text().notNull().default(''),
     reason: text().notNull(),
+    /** Null: signed before reasons were kept as codes. The word as it was stands in `reasonWord`. */
+    reasonCodeId: uuid().references(() => reasonCodes.id),
+    reasonWord: text(),
+    /** Null: signed before signatures were bound to what they sign. */
+    signatureId: uuid().references(() => signatures.id),
+    secondSignatureId: uuid().references(() => signatures.id),
     signedBy: uuid()
       .notNull()
       .references(() => accounts.id),

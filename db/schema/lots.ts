@@ -28,6 +28,7 @@ export const lots = pgTable(
     state: lotStateEnum().notNull().default('open'),
     /** Null: not on hold. A held lot is not tested, whatever its state. */
     heldAt: moment(),
+    /** Null: not on hold, or held by rule; the holds are in lot_holds. */
     heldBy: uuid().references(() => accounts.id),
     holdReason: text(),
     createdBy: uuid()
@@ -41,7 +42,7 @@ export const lots = pgTable(
     check('lots_size', sql`${t.size} > 0`),
     check(
       'lots_hold',
-      sql`(${t.heldAt} is null) = (${t.heldBy} is null) and (${t.heldAt} is null) = (${t.holdReason} is null)`,
+      sql`(${t.heldBy} is null or ${t.heldAt} is not null) and (${t.heldAt} is null) = (${t.holdReason} is null)`,
     ),
   ],
 );

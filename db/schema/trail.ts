@@ -1,4 +1,4 @@
-import { bigint, index, jsonb, pgTable, text, uuid } from 'drizzle-orm/pg-core';
+import { bigint, index, jsonb, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
 import { accounts } from './accounts';
 import { momentNow } from './columns';
 import { stations } from './stations';
@@ -23,6 +23,17 @@ export const trail = pgTable(
     after: jsonb().$type<Record<string, unknown>>(),
     /** Null: the action asks for none. */
     reason: text(),
+    /** desk, or the code of the station it happened at: each chain is sealed by itself. Given by a trigger, as the next three. */
+    chain: text(),
+    /** Place in its chain, from 1. */
+    place: bigint({ mode: 'number' }),
+    /** Hexadecimal SHA-256 over the seal before and this entry. */
+    seal: text(),
   },
-  (t) => [index().on(t.entity, t.entityId, t.at), index().on(t.at), index().on(t.accountId)],
+  (t) => [
+    unique().on(t.chain, t.place),
+    index().on(t.entity, t.entityId, t.at),
+    index().on(t.at),
+    index().on(t.accountId),
+  ],
 );

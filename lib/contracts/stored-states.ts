@@ -36,3 +36,27 @@ export type DryRunState = (typeof dryRunStates)[number];
 /** What a stored file is for; each kind has its own allowed types and sizes. */
 export const fileKinds = ['trimmer-photo', 'fixture-drawing', 'instruction-picture'] as const;
 export type FileKind = (typeof fileKinds)[number];
+
+export const reasonCodeUses = ['rework', 'scrap', 'concession', 'return', 'hold', 'hold-release'] as const;
+export type ReasonCodeUse = (typeof reasonCodeUses)[number];
+
+/** What held a lot. */
+export const holdCauses = ['person', 'run-rule', 'yield-floor', 'same-reason', 'failed-check'] as const;
+export type HoldCauseKind = (typeof holdCauses)[number];
+
+export const mailStates = ['waiting', 'trying', 'sent', 'stopped'] as const;
+export type MailState = (typeof mailStates)[number];
+
+export const mailTopics = [
+  'hold-raised',
+  'yield-floor',
+  'expiry',
+  'shift-report',
+  'certificate',
+  'approval-waits',
+  'trial',
+] as const;
+export type MailTopic = (typeof mailTopics)[number];
+
+export const deliveryStates = ['waiting', 'trying', 'delivered', 'stopped'] as const;
+export type DeliveryState = (typeof deliveryStates)[number];
