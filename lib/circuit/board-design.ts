@@ -22,6 +22,8 @@ export interface BoardDesign {
   /** The board's own current without the load, at nominal supply. */
   quiescentAmps: number;
   reservoirFarads: number;
+  /** Input offset of the comparator, added to the reference. Absent: none, as in every nominal design. */
+  comparatorOffsetVolts?: number;
 }
 
 export interface TrimmerTravel {

@@ -22,9 +22,12 @@ export type Inference = ({ kind: 'found' } & InferredBoard) | { kind: 'impossibl
 export function inferBoard(
   design: BoardDesign,
   { tripVolts, releaseVolts }: Thresholds,
-  atTripVolts: number,
-  atReleaseVolts = atTripVolts,
+  nodeAtTripVolts: number,
+  nodeAtReleaseVolts = nodeAtTripVolts,
 ): Inference {
+  const { comparatorOffsetVolts = 0 } = design;
+  const atTripVolts = nodeAtTripVolts + comparatorOffsetVolts;
+  const atReleaseVolts = nodeAtReleaseVolts + comparatorOffsetVolts;
   const sag = atTripVolts / atReleaseVolts;
   const headroom = tripVolts - design.outputDropVolts - design.outputLowVolts * sag;
   const h = (sag * releaseVolts - tripVolts) / headroom;
@@ -47,7 +50,8 @@ export function inferSoftKneeBoard(design: BoardDesign, points: Thresholds): Inf
 }
 
 /** Wiper for a wanted trip point at a known reference (the node's voltage at that supply); a root of a quadratic. */
-export function wiperForTrip(design: BoardDesign, tripVolts: number, referenceVolts: number): number {
+export function wiperForTrip(design: BoardDesign, tripVolts: number, nodeVolts: number): number {
+  const referenceVolts = nodeVolts + (design.comparatorOffsetVolts ?? 0);
   const k = ((tripVolts - referenceVolts - design.outputDropVolts) * dividerOhms(design)) / design.feedbackOhms;
   const sum = k + tripVolts;
   // The smaller root written without cancellation, so that k = 0 needs no case of its own.
@@ -56,7 +60,8 @@ export function wiperForTrip(design: BoardDesign, tripVolts: number, referenceVo
 }
 
 /** Wiper for a wanted release point at a known reference. */
-export function wiperForRelease(design: BoardDesign, releaseVolts: number, referenceVolts: number): number {
+export function wiperForRelease(design: BoardDesign, releaseVolts: number, nodeVolts: number): number {
+  const referenceVolts = nodeVolts + (design.comparatorOffsetVolts ?? 0);
   const m = ((referenceVolts - design.outputLowVolts) * dividerOhms(design)) / design.feedbackOhms;
   const sum = releaseVolts - m;
   const fraction = (2 * referenceVolts) / (sum + Math.sqrt(sum * sum + 4 * m * referenceVolts));

@@ -39,13 +39,18 @@ export type ThresholdsResult =
 export function softKneeThresholds(design: BoardDesign, wiper: number): ThresholdsResult {
   const { toSupply, toGround, feedback } = wiperConductances(design, wiper);
   const total = toSupply + toGround + feedback;
+  const offset = total * (design.comparatorOffsetVolts ?? 0);
   const trip = crossing(
     design.reference,
     total / (toSupply + feedback),
-    (design.outputDropVolts * feedback) / (toSupply + feedback),
+    (offset + design.outputDropVolts * feedback) / (toSupply + feedback),
   );
   if (trip.kind !== 'found') return trip;
-  const release = crossing(design.reference, total / toSupply, (-design.outputLowVolts * feedback) / toSupply);
+  const release = crossing(
+    design.reference,
+    total / toSupply,
+    (offset - design.outputLowVolts * feedback) / toSupply,
+  );
   if (release.kind !== 'found') return release;
   return {
     kind: 'found',

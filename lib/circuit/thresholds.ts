@@ -11,10 +11,12 @@ export interface Thresholds {
  *
  *   trip    = [Vz (G1+G2+Gf) + Vd Gf] / (G1+Gf)
  *   release = [Vz (G1+G2+Gf) - VOL Gf] / G1
+ *
+ * A comparator's offset is added to Vz.
  */
 export function thresholdsAt(design: BoardDesign, wiper: number, referenceVolts: number): Thresholds {
   const { toSupply, toGround, feedback } = wiperConductances(design, wiper);
-  const atWiper = referenceVolts * (toSupply + toGround + feedback);
+  const atWiper = (referenceVolts + (design.comparatorOffsetVolts ?? 0)) * (toSupply + toGround + feedback);
   return {
     tripVolts: (atWiper + design.outputDropVolts * feedback) / (toSupply + feedback),
     releaseVolts: (atWiper - design.outputLowVolts * feedback) / toSupply,
@@ -32,7 +34,7 @@ export function thresholdSlopes(design: BoardDesign, wiper: number, referenceVol
   const supplySlope = design.trimmerOhms * toSupply ** 2;
   const groundSlope = -design.trimmerOhms * toGround ** 2;
   const { tripVolts, releaseVolts } = thresholdsAt(design, wiper, referenceVolts);
-  const atWiper = referenceVolts * (supplySlope + groundSlope);
+  const atWiper = (referenceVolts + (design.comparatorOffsetVolts ?? 0)) * (supplySlope + groundSlope);
   return {
     tripVoltsPerTravel: (atWiper - tripVolts * supplySlope) / (toSupply + feedback),
     releaseVoltsPerTravel: (atWiper - releaseVolts * supplySlope) / toSupply,

@@ -1,9 +1,10 @@
 import type { BoardDesign } from '@/lib/circuit/board-design';
+import { deviationOf, drawParts } from '@/lib/circuit/draw-parts';
 import { inferSoftKneeBoard, wiperForTrip } from '@/lib/circuit/inverse';
 import { referenceAt, softKneeThresholds } from '@/lib/circuit/soft-knee';
 import type { Thresholds } from '@/lib/circuit/thresholds';
 import { turnsAt, wiperAt } from '@/lib/circuit/trimmer';
-import type { BoardType } from '@/lib/contracts/board-type';
+import { tolerancesOf, type BoardType } from '@/lib/contracts/board-type';
 import type { DefectKind } from '@/lib/contracts/bench-command';
 import type { BoardTruth } from './board-truth';
 import { fitDefect } from './fit-defect';
@@ -36,7 +37,7 @@ export function drawBoard(
   const { tripVolts } = boardType.limits;
   const targetVolts = options.targetVolts ?? (tripVolts.min + tripVolts.max) / 2;
   for (let draw = 0; draw < mostDraws; draw++) {
-    const design = drawParts(boardType.design, random);
+    const design = drawParts(boardType.design, tolerancesOf(boardType), () => deviationOf(random.normal()));
     const targetWiper = wiperForTarget(design, targetVolts);
     if (targetWiper === null || !meetsLimits(boardType, design, targetWiper)) continue;
     const screwTurns = drawScrew(boardType, design, targetVolts, random);
@@ -77,33 +78,6 @@ const sound = {
   padOhms: 0,
   defect: 'none',
 } as const;
-
-/** Within `tolerance`, three standard deviations. */
-function near(value: number, tolerance: number, random: Random): number {
-  const deviation = Math.max(-1, Math.min(1, random.normal() / 3));
-  return value * (1 + tolerance * deviation);
-}
-
-function drawParts(nominal: BoardDesign, random: Random): BoardDesign {
-  const { reference } = nominal;
-  return {
-    reference: {
-      nominalVolts: near(reference.nominalVolts, 0.02, random),
-      ratedAmps: reference.ratedAmps,
-      kneeVolts: near(reference.kneeVolts, 0.1, random),
-      feedOhms: near(reference.feedOhms, 0.01, random),
-    },
-    trimmerOhms: near(nominal.trimmerOhms, 0.1, random),
-    supplyEndOhms: near(nominal.supplyEndOhms, 0.01, random),
-    groundEndOhms: near(nominal.groundEndOhms, 0.01, random),
-    feedbackOhms: near(nominal.feedbackOhms, 0.01, random),
-    outputDropVolts: near(nominal.outputDropVolts, 0.08, random),
-    outputLowVolts: near(nominal.outputLowVolts, 0.3, random),
-    loadOhms: near(nominal.loadOhms, 0.05, random),
-    quiescentAmps: near(nominal.quiescentAmps, 0.15, random),
-    reservoirFarads: near(nominal.reservoirFarads, 0.2, random),
-  };
-}
 
 function wiperForTarget(design: BoardDesign, targetVolts: number): number | null {
   const reference = referenceAt(design.reference, targetVolts);
