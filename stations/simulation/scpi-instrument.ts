@@ -17,7 +17,8 @@ export interface AnswerFault {
 }
 
 const queueLength = 20;
-const turnaroundMs = 0.7;
+/** From the last character of a message to its execution. */
+export const turnaroundMs = 0.7;
 
 /** Thrown by a command's handler to put a standard error into the queue. */
 export class Refusal extends Error {

@@ -1,11 +1,14 @@
 import type { Clock } from '../clock/clock';
+import { ControllerModel } from './controller-model';
+import { drawMeterCharacter, MeterModel, type MeterCharacter } from './meter-model';
 import { seededRandom } from './random';
 import type { ScpiInstrument } from './scpi-instrument';
 import { SimulatedPort } from './simulated-binding';
 import { SimulatedController } from './simulated-controller';
 import { SimulatedFixture, usualFixture, type FixtureCharacter } from './simulated-fixture';
-import { drawMeterCharacter, SimulatedMultimeter, type MeterCharacter } from './simulated-multimeter';
-import { drawSupplyCharacter, SimulatedSupply, type SupplyCharacter } from './simulated-supply';
+import { SimulatedMultimeter } from './simulated-multimeter';
+import { SimulatedSupply } from './simulated-supply';
+import { drawSupplyCharacter, SupplyModel, type SupplyCharacter } from './supply-model';
 
 export interface SimulatedBenchOptions {
   clock: Clock;
@@ -19,6 +22,15 @@ export interface SimulatedBenchOptions {
   meter?: Partial<MeterCharacter>;
 }
 
+/** A bench's physics: the fixture and what its instruments do, without their faces. */
+export interface BenchModels {
+  fixture: SimulatedFixture;
+  supply: SupplyModel;
+  meter: MeterModel;
+  controller: ControllerModel | null;
+  serialNumber: string;
+}
+
 /** What stands in for a bench: a fixture with a board on it, three instruments and their cables. */
 export interface SimulatedBench {
   fixture: SimulatedFixture;
@@ -26,26 +38,27 @@ export interface SimulatedBench {
   ports: Record<'supply' | 'meter', SimulatedPort> & { controller: SimulatedPort | null };
 }
 
-export function simulateBench(options: SimulatedBenchOptions): SimulatedBench {
-  const { clock, seed } = options;
+export function modelBench(options: SimulatedBenchOptions): BenchModels {
+  const { clock, seed, hasController, hasWiperProbe } = options;
   const random = seededRandom(seed);
-  const serialNumber = String(100_000 + (seed % 900_000));
   const fixture = new SimulatedFixture(clock, random, { ...usualFixture, ...options.fixture });
-  const supply = new SimulatedSupply(
-    clock,
+  const supply = new SupplyModel(fixture, random, { ...drawSupplyCharacter(random), ...options.supply });
+  const meterCharacter = { ...drawMeterCharacter(random, hasWiperProbe), ...options.meter };
+  return {
     fixture,
-    random,
-    { ...drawSupplyCharacter(random), ...options.supply },
-    serialNumber,
-  );
-  const meter = new SimulatedMultimeter(
-    clock,
-    fixture,
-    random,
-    { ...drawMeterCharacter(random, options.hasWiperProbe), ...options.meter },
-    serialNumber,
-  );
-  const controller = options.hasController ? new SimulatedController(clock, fixture, random, serialNumber) : null;
+    supply,
+    meter: new MeterModel(clock, fixture, random, meterCharacter),
+    controller: hasController ? new ControllerModel(clock, fixture, random) : null,
+    serialNumber: String(100_000 + (seed % 900_000)),
+  };
+}
+
+export function simulateBench(options: SimulatedBenchOptions): SimulatedBench {
+  const { clock } = options;
+  const { fixture, serialNumber, ...models } = modelBench(options);
+  const supply = new SimulatedSupply(clock, models.supply, serialNumber);
+  const meter = new SimulatedMultimeter(clock, models.meter, serialNumber);
+  const controller = models.controller && new SimulatedController(clock, models.controller, serialNumber);
   return {
     fixture,
     instruments: { supply, meter, controller },

@@ -1,107 +1,50 @@
 import { formatNr3, parseScpiBoolean, parseScpiNumber } from '@/lib/scpi/number';
 import type { Clock } from '../clock/clock';
-import type { Random } from './random';
 import { Refusal, ScpiInstrument, type CommandTable } from './scpi-instrument';
-import type { SimulatedFixture } from './simulated-fixture';
+import { measureMs, mostAmps, mostProtectionVolts, mostVolts, type SupplyModel } from './supply-model';
 
-/** Where a supply differs from what it is told and what it says. Volts, amperes. */
-export interface SupplyCharacter {
-  offsetVolts: number;
-  gain: number;
-  resolutionVolts: number;
-  readbackOffsetVolts: number;
-  readbackNoiseVolts: number;
-  readbackOffsetAmps: number;
-  readbackNoiseAmps: number;
-}
-
-export function drawSupplyCharacter(random: Random): SupplyCharacter {
-  return {
-    offsetVolts: random.between(-3e-3, 3e-3),
-    gain: random.between(-2e-4, 2e-4),
-    resolutionVolts: 0.5e-3,
-    readbackOffsetVolts: random.between(-3e-4, 3e-4),
-    readbackNoiseVolts: 1e-4,
-    readbackOffsetAmps: random.between(-2e-5, 2e-5),
-    readbackNoiseAmps: 1e-5,
-  };
-}
-
-const mostVolts = 40;
-const mostAmps = 3;
-const measureMs = 1;
+/** Decimals of a reading's mantissa. */
+export const supplyDigits = 5;
 
 /** A programmable supply with remote sense, current limit and overvoltage protection, in plain SCPI-1999. */
 export class SimulatedSupply extends ScpiInstrument {
-  private volts = 0;
-  private limitAmps = mostAmps;
-  private protectAt = mostVolts * 1.1;
-
   constructor(
     clock: Clock,
-    private readonly fixture: SimulatedFixture,
-    private readonly random: Random,
-    private readonly character: SupplyCharacter,
+    private readonly model: SupplyModel,
     serialNumber: string,
   ) {
     super(clock, `SILLWRIGHT,SIM-SUPPLY,${serialNumber},1.0`);
   }
 
   protected override readonly commands: CommandTable = {
-    '[SOURce:]VOLTage[:LEVel][:IMMediate][:AMPLitude]': ([text]) => {
-      this.volts = inRange(text, mostVolts);
-      const { resolutionVolts, gain, offsetVolts } = this.character;
-      const steps = Math.round(this.volts / resolutionVolts);
-      this.fixture.setTarget(Math.max(0, steps * resolutionVolts * (1 + gain) + offsetVolts));
-    },
-    '[SOURce:]VOLTage[:LEVel][:IMMediate][:AMPLitude]?': () => formatNr3(this.volts, 5),
-    '[SOURce:]CURRent[:LEVel][:IMMediate][:AMPLitude]': ([text]) => {
-      this.limitAmps = inRange(text, mostAmps);
-      this.fixture.setCurrentLimit(this.limitAmps);
-    },
-    '[SOURce:]CURRent[:LEVel][:IMMediate][:AMPLitude]?': () => formatNr3(this.limitAmps, 5),
-    '[SOURce:]VOLTage:PROTection[:LEVel]': ([text]) => {
-      this.protectAt = inRange(text, mostVolts * 1.1);
-      this.fixture.setOvervoltage(this.protectAt);
-    },
-    '[SOURce:]VOLTage:PROTection[:LEVel]?': () => formatNr3(this.protectAt, 5),
-    '[SOURce:]VOLTage:PROTection:TRIPped?': () => (this.fixture.overvoltageTripped ? '1' : '0'),
-    '[SOURce:]VOLTage:PROTection:CLEar': () => this.fixture.clearOvervoltage(),
+    '[SOURce:]VOLTage[:LEVel][:IMMediate][:AMPLitude]': ([text]) => this.model.setVolts(inRange(text, mostVolts)),
+    '[SOURce:]VOLTage[:LEVel][:IMMediate][:AMPLitude]?': () => formatNr3(this.model.volts, supplyDigits),
+    '[SOURce:]CURRent[:LEVel][:IMMediate][:AMPLitude]': ([text]) => this.model.setCurrentLimit(inRange(text, mostAmps)),
+    '[SOURce:]CURRent[:LEVel][:IMMediate][:AMPLitude]?': () => formatNr3(this.model.limitAmps, supplyDigits),
+    '[SOURce:]VOLTage:PROTection[:LEVel]': ([text]) => this.model.setOvervoltage(inRange(text, mostProtectionVolts)),
+    '[SOURce:]VOLTage:PROTection[:LEVel]?': () => formatNr3(this.model.protectAt, supplyDigits),
+    '[SOURce:]VOLTage:PROTection:TRIPped?': () => (this.model.fixture.overvoltageTripped ? '1' : '0'),
+    '[SOURce:]VOLTage:PROTection:CLEar': () => this.model.fixture.clearOvervoltage(),
     'OUTPut[:STATe]': ([text]) => {
       const on = text === undefined ? null : parseScpiBoolean(text);
       if (on === null) throw new Refusal(text === undefined ? -109 : -104);
-      if (!on) return this.fixture.switchOff();
-      if (!this.fixture.switchOn()) throw new Refusal(-221);
+      if (!on) return this.model.fixture.switchOff();
+      if (!this.model.fixture.switchOn()) throw new Refusal(-221);
     },
-    'OUTPut[:STATe]?': () => (this.fixture.isOn ? '1' : '0'),
+    'OUTPut[:STATe]?': () => (this.model.fixture.isOn ? '1' : '0'),
     'MEASure[:SCALar][:VOLTage][:DC]?': () => ({
       afterMs: measureMs,
-      answer: () => {
-        const { readbackOffsetVolts, readbackNoiseVolts } = this.character;
-        return formatNr3(
-          this.fixture.senseVolts() + readbackOffsetVolts + readbackNoiseVolts * this.random.normal(),
-          5,
-        );
-      },
+      answer: () => formatNr3(this.model.readVolts(), supplyDigits),
     }),
     'MEASure[:SCALar]:CURRent[:DC]?': () => ({
       afterMs: measureMs,
-      answer: () => {
-        const { readbackOffsetAmps, readbackNoiseAmps } = this.character;
-        return formatNr3(this.fixture.amps() + readbackOffsetAmps + readbackNoiseAmps * this.random.normal(), 5);
-      },
+      answer: () => formatNr3(this.model.readAmps(), supplyDigits),
     }),
   };
 
   protected override reset(): void {
     super.reset();
-    this.fixture.switchOff();
-    this.volts = 0;
-    this.limitAmps = mostAmps;
-    this.protectAt = mostVolts * 1.1;
-    this.fixture.setTarget(0);
-    this.fixture.setCurrentLimit(this.limitAmps);
-    this.fixture.setOvervoltage(this.protectAt);
+    this.model.reset();
   }
 }
 

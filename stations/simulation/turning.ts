@@ -14,8 +14,12 @@ const paceOf = (travelTurns: number) =>
 const freeTurnsPerSecond = 1;
 /** From the beep to the hand standing still. */
 const reaction = { meanMs: 200, sdMs: 40, leastMs: 80 };
-/** About as asked: a few per cent, plus a few degrees. */
-const turnError = { relative: 0.03, turns: 4 / 360 };
+/** How far a stated turn is missed, one standard deviation each: a part of the turn, and a fixed part. */
+export interface TurnError {
+  relative: number;
+  turns: number;
+}
+const usualError: TurnError = { relative: 0.03, turns: 4 / 360 };
 /** Where a hand that follows the dial slows down and lets go, in seconds of turning at the brisk and at the slow pace. */
 const easeSeconds = 0.6;
 const letGoSeconds = 0.15;
@@ -34,9 +38,9 @@ export async function turnScrew({ fixture, clock }: Screw, turns: number): Promi
  * a dial that counts down until it shows the end; or, where the dial stands still, a stated turn with a person's error.
  */
 export async function turnAsPrompted(
-  job: Screw & { random: Random; prompt(): TrimView | null; onMove(): void },
+  job: Screw & { random: Random; error?: TurnError; prompt(): TrimView | null; onMove(): void },
 ): Promise<void> {
-  const { fixture, clock, random, prompt, onMove } = job;
+  const { fixture, clock, random, error = usualError, prompt, onMove } = job;
   const asked = prompt();
   const board = fixture.seated;
   if (!asked?.direction || !board) return;
@@ -45,7 +49,7 @@ export async function turnAsPrompted(
   const { brisk, slow } = paceOf(board.truth.trimmer.turns);
   const way = direction === 'clockwise' ? 1 : -1;
   const haste = 1 + 0.1 * random.normal();
-  const estimate = (asked.turns ?? 0) * (1 + turnError.relative * random.normal()) + turnError.turns * random.normal();
+  const estimate = (asked.turns ?? 0) * (1 + error.relative * random.normal()) + error.turns * random.normal();
   const farthest = board.truth.trimmer.turns * 2;
   const isLive = (view: TrimView) => !listening && view.liveTripVolts !== null && view.turns !== null;
 

@@ -5,6 +5,7 @@ import type { BenchRow } from '@/db/queries/station-benches';
 import type { BenchLot } from '@/db/queries/station-lots';
 import type { Commissioning } from '@/db/queries/station-readiness';
 import { linkHasController } from '@/lib/contracts/station-link';
+import { isFastLink, pollMsAt } from '@/lib/run/link-pace';
 import type { RunPlan } from '@/lib/run/types';
 import { lotPrior } from '@/lib/search/lot-prior';
 
@@ -26,16 +27,10 @@ export function planBasis(bench: BenchRow, { overshoot, settleMs, waypointMs, no
     hasController: linkHasController(bench.link),
     hasWiperProbe: bench.hasWiperProbe,
     pollMs: pollMsAt(baudRate),
-    fastLink: baudRate >= fastFromBaud,
+    fastLink: isFastLink(baudRate),
     meter,
     seed: randomInt(2 ** 31),
   } satisfies Partial<RunPlan>;
-}
-const fastFromBaud = 57_600;
-
-/** One poll of the output: about 90 characters both ways, ten bits each, and the instrument's own time. */
-function pollMsAt(baudRate: number): number {
-  return Math.round(25 + (90 * 10_000) / baudRate);
 }
 
 export async function planBoard(
