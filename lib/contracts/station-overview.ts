@@ -22,6 +22,22 @@ export interface StationRow {
   /** The lot that it tested last, with its marks; null before the first. */
   lot: LotStrip | null;
   call: { id: string; sinceIso: string } | null;
+  /** The run on it is an engineering run. */
+  engineering: boolean;
+  /** A draft that the bench may take for a trial. */
+  offer: StationOffer | null;
+}
+
+/** A draft on offer at a station. */
+export interface StationOffer {
+  id: string;
+  /** 7 is shown as r7. */
+  revisionNumber: number;
+  sequenceName: string;
+  boardTypeCode: string;
+  note: string;
+  offeredByName: string;
+  sinceIso: string;
 }
 
 export interface StationsOverview {
