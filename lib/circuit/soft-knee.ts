@@ -46,11 +46,7 @@ export function softKneeThresholds(design: BoardDesign, wiper: number): Threshol
     (offset + design.outputDropVolts * feedback) / (toSupply + feedback),
   );
   if (trip.kind !== 'found') return trip;
-  const release = crossing(
-    design.reference,
-    total / toSupply,
-    (offset - design.outputLowVolts * feedback) / toSupply,
-  );
+  const release = crossing(design.reference, total / toSupply, (offset - design.outputLowVolts * feedback) / toSupply);
   if (release.kind !== 'found') return release;
   return {
     kind: 'found',

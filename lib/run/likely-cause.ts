@@ -4,7 +4,7 @@ import { inferSoftKneeBoard } from '../circuit/inverse';
 import { referenceAt } from '../circuit/soft-knee';
 import type { Thresholds } from '../circuit/thresholds';
 import type { ReferenceReading } from './facts';
-import { e24Near } from './preferred-values';
+import { e24Near } from '../circuit/preferred-values';
 import type { LikelyCause, Measurement } from './types';
 
 /**

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { cb1210 } from '@/db/seed/board-types';
 import { referenceAt, softKneeThresholds } from '@/lib/circuit/soft-knee';
 import { causeOfHysteresis, causeOfReference } from '@/lib/run/likely-cause';
-import { e24Near } from '@/lib/run/preferred-values';
+import { e24Near } from '@/lib/circuit/preferred-values';
 
 const { design } = cb1210;
 const supplyVolts = 10.8;
