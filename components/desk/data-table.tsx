@@ -12,6 +12,7 @@ import {
   tableFeatures,
   useTable,
   type ColumnDef,
+  type PaginationState,
   type RowData,
   type SortingState,
 } from '@tanstack/react-table';
@@ -45,9 +46,20 @@ interface DataTableProps<Row extends RowData> {
   pageSize?: number;
   /** Key of the row that the page shows more of. */
   chosen?: string | null;
+  /** Rows come sorted and a page at a time from the server. */
+  served?: ServedPage;
 }
 
-/** A table that sorts by its heads, in the client; rows stack on a phone. */
+export interface ServedPage {
+  sorting: SortingState;
+  pageIndex: number;
+  /** Rows on all pages. */
+  rowCount: number;
+  onSort: (by: SortingState[number]) => void;
+  onPage: (pageIndex: number) => void;
+}
+
+/** A table that sorts by its heads, in the client or at the server; rows stack on a phone. */
 export function DataTable<Row extends RowData>({
   rows,
   columns,
@@ -57,6 +69,7 @@ export function DataTable<Row extends RowData>({
   initialSort = [],
   pageSize = 50,
   chosen = null,
+  served,
 }: DataTableProps<Row>) {
   const table = useTable({
     features,
@@ -66,10 +79,12 @@ export function DataTable<Row extends RowData>({
     initialState: { sorting: initialSort, pagination: { pageIndex: 0, pageSize } },
     // Live data must not throw the reader back to the first page.
     autoResetPageIndex: false,
+    ...(served && servedOptions(served, pageSize)),
   });
   if (rows.length === 0) return <EmptyState title={empty.title}>{empty.text}</EmptyState>;
   const { pageIndex } = table.state.pagination;
   const pages = table.getPageCount();
+  const total = served?.rowCount ?? rows.length;
   return (
     <>
       <Table aria-label={label} className="sm:[&_:is(td,th):not(:last-child)]:pr-7">
@@ -123,8 +138,8 @@ export function DataTable<Row extends RowData>({
             Back
           </Button>
           <span>
-            Rows <b>{count(pageIndex * pageSize + 1)}</b> to{' '}
-            <b>{count(Math.min((pageIndex + 1) * pageSize, rows.length))}</b> of <b>{count(rows.length)}</b>
+            Rows <b>{count(pageIndex * pageSize + 1)}</b> to <b>{count(Math.min((pageIndex + 1) * pageSize, total))}</b>{' '}
+            of <b>{count(total)}</b>
           </span>
           <Button unavailable={table.getCanNextPage() ? null : 'last page'} onClick={() => table.nextPage()}>
             More
@@ -133,6 +148,24 @@ export function DataTable<Row extends RowData>({
       ) : null}
     </>
   );
+}
+
+function servedOptions({ sorting, pageIndex, rowCount, onSort, onPage }: ServedPage, pageSize: number) {
+  const next = <T,>(updater: T | ((old: T) => T), old: T) =>
+    typeof updater === 'function' ? (updater as (old: T) => T)(old) : updater;
+  return {
+    manualSorting: true,
+    manualPagination: true,
+    enableSortingRemoval: false,
+    rowCount,
+    state: { sorting, pagination: { pageIndex, pageSize } },
+    onSortingChange: (updater: SortingState | ((old: SortingState) => SortingState)) => {
+      const [by] = next(updater, sorting);
+      if (by) onSort(by);
+    },
+    onPaginationChange: (updater: PaginationState | ((old: PaginationState) => PaginationState)) =>
+      onPage(next(updater, { pageIndex, pageSize }).pageIndex),
+  };
 }
 
 function SortMark({ sorted }: { sorted: false | 'asc' | 'desc' }) {

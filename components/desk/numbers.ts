@@ -32,3 +32,6 @@ export function limitsText(quantity: string, min: number | null, max: number | n
   if (max !== null) return `≤ ${text(max)}`;
   return min === null ? '–' : `≥ ${text(min)}`;
 }
+
+/** A capability index: 0.93, with the minus sign of the design. */
+export const index = (value: number) => rounded(value, 2);

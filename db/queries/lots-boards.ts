@@ -23,7 +23,8 @@ export interface NewestRun {
   releaseVolts: BoardPoint | null;
 }
 
-export async function listNewestRuns(db: Database, lotId: string): Promise<NewestRun[]> {
+/** Of the whole lot, or of these units of it. */
+export async function listNewestRuns(db: Database, lotId: string, unitIds?: readonly string[]): Promise<NewestRun[]> {
   const newest = await db
     .selectDistinctOn([runs.unitId], {
       unitId: runs.unitId,
@@ -36,7 +37,12 @@ export async function listNewestRuns(db: Database, lotId: string): Promise<Newes
     .from(runs)
     .innerJoin(stations, eq(stations.id, runs.stationId))
     .where(
-      and(eq(runs.lotId, lotId), eq(runs.kind, 'production'), inArray(runs.verdict, ['pass', 'reject', 'no-verdict'])),
+      and(
+        eq(runs.lotId, lotId),
+        eq(runs.kind, 'production'),
+        inArray(runs.verdict, ['pass', 'reject', 'no-verdict']),
+        unitIds ? inArray(runs.unitId, [...unitIds]) : undefined,
+      ),
     )
     .orderBy(asc(runs.unitId), desc(runs.attempt));
   if (newest.length === 0) return [];
@@ -75,11 +81,11 @@ export async function listNewestRuns(db: Database, lotId: string): Promise<Newes
 }
 
 /** The newest label's state of each unit that has one. */
-export async function listNewestLabels(db: Database, lotId: string) {
+export async function listNewestLabels(db: Database, lotId: string, unitIds?: readonly string[]) {
   return db
     .selectDistinctOn([labels.unitId], { unitId: labels.unitId, state: labels.state, problem: labels.problem })
     .from(labels)
     .innerJoin(units, eq(units.id, labels.unitId))
-    .where(eq(units.lotId, lotId))
+    .where(and(eq(units.lotId, lotId), unitIds ? inArray(units.id, [...unitIds]) : undefined))
     .orderBy(asc(labels.unitId), desc(labels.createdAt));
 }

@@ -1,4 +1,4 @@
-import { and, asc, eq, inArray, type SQL } from 'drizzle-orm';
+import { and, asc, eq, inArray, sql, type SQL } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import { boardTypeRevisions } from '@/db/schema/board-type-revisions';
 import { dispositions } from '@/db/schema/dispositions';
@@ -36,7 +36,7 @@ async function listRecords(db: Database | Transaction, which: SQL): Promise<Unit
       serial: units.serial,
       position: units.position,
       scrappedAt: units.scrappedAt,
-      specification: boardTypeRevisions.specification,
+      mostAttempts: sql<number>`(${boardTypeRevisions.specification} ->> 'mostAttempts')::int`,
     })
     .from(units)
     .innerJoin(lots, eq(lots.id, units.lotId))
@@ -76,10 +76,9 @@ async function listRecords(db: Database | Transaction, which: SQL): Promise<Unit
   const runsOf = byUnit(made);
   const dispositionsOf = byUnit(decided);
   const ordersOf = byUnit(ordered);
-  return boards.map(({ scrappedAt, specification, ...board }) => ({
+  return boards.map(({ scrappedAt, ...board }) => ({
     ...board,
     scrapped: scrappedAt !== null,
-    mostAttempts: specification.mostAttempts,
     runs: (runsOf.get(board.unitId) ?? []).map((run) => ({ ...run, endedAt: run.endedAt?.toISOString() ?? null })),
     dispositions: (dispositionsOf.get(board.unitId) ?? []).map((disposition) => ({
       runId: disposition.runId,

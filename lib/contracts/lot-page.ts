@@ -47,11 +47,17 @@ export interface LotPage {
   createdAtIso: string;
   createdByName: string;
   closedAtIso: string | null;
-  hold: { sinceIso: string; byName: string; reason: string } | null;
+  /** `byName` null: held by rule. */
+  hold: { sinceIso: string; byName: string | null; reason: string } | null;
   stationCodes: string[];
   firstTestIso: string | null;
   lastTestIso: string | null;
+  firstSerial: string | null;
+  lastSerial: string | null;
   summary: LotSummary;
+  /** One page of the boards chosen, in the order asked for. */
   boards: LotBoardRow[];
+  /** How many boards are chosen, on all pages. */
+  boardsChosen: number;
   components: ComponentBatchRow[];
 }

@@ -9,11 +9,13 @@ import {
   createLotSchema,
   lotReasonSchema,
 } from '@/lib/contracts/lot';
+import { chooseBaselineSchema } from '@/lib/contracts/lot-review';
 import type { Outcome } from '@/lib/contracts/outcome';
 import { parseForm } from '@/lib/contracts/parse-form';
 import { authorise } from '@/server/auth/authorise';
 import { changeLot } from '@/server/operations/lots/change-lot';
 import { checkLotSerials } from '@/server/operations/lots/check-lot-serials';
+import { chooseBaseline } from '@/server/operations/lots/choose-baseline';
 import { createLot } from '@/server/operations/lots/create-lot';
 import { holdLot, releaseLot } from '@/server/operations/lots/hold-lot';
 import { recordComponentBatch } from '@/server/operations/lots/record-component-batch';
@@ -65,6 +67,15 @@ export async function recordComponentBatchAction(input: unknown): Promise<Outcom
   const form = parseForm(componentBatchSchema, input);
   if (!form.ok) return form;
   const outcome = await recordComponentBatch(actor, form.value);
+  if (outcome.ok) revalidatePath('/lots', 'layout');
+  return outcome;
+}
+
+export async function chooseBaselineAction(input: unknown): Promise<Outcome> {
+  const actor = await authorise('manage-lots');
+  const form = parseForm(chooseBaselineSchema, input);
+  if (!form.ok) return form;
+  const outcome = await chooseBaseline(actor, form.value);
   if (outcome.ok) revalidatePath('/lots', 'layout');
   return outcome;
 }

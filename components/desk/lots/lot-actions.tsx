@@ -112,7 +112,7 @@ export function LotHold({ lot, mayRelease, actions, onChanged }: LotActionsProps
         ) : null
       }
     >
-      {reason} Held by {byName}, <Time iso={sinceIso} />.
+      {reason} Held by {byName ?? 'rule'}, <Time iso={sinceIso} />.
       <ReasonDialog
         open={asking}
         onClose={() => setAsking(false)}

@@ -6,12 +6,11 @@ import { MiniGauge } from '@/components/ui/mini-gauge';
 import { SerialStrip } from '@/components/ui/serial-strip';
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import type { LotBoardRow, PointAgainstLimits } from '@/lib/contracts/lot-page';
+import { boardsPerPage, type LotView } from '@/lib/contracts/lot-view';
 import { DataTable, deskColumns } from '../data-table';
 import { volts } from '../numbers';
 import { Time } from '../time';
 import { labelWords, rejectWords, standingWords } from '../words';
-
-export type BoardChoice = 'all' | 'rejected' | 'undecided' | 'untested';
 
 const helper = deskColumns<LotBoardRow & { boardTypeCode: string }>();
 
@@ -106,18 +105,18 @@ const columns = helper.columns([
   }),
 ]);
 
-const picks: Record<BoardChoice, (row: LotBoardRow) => boolean> = {
-  all: () => true,
-  rejected: (row) => row.verdict === 'reject',
-  undecided: (row) => row.standing === 'needs-disposition' || row.standing === 'waits-for-quality',
-  untested: (row) => row.verdict === null,
-};
-
-export function pickBoards(boards: readonly LotBoardRow[], choice: BoardChoice): LotBoardRow[] {
-  return boards.filter(picks[choice]);
+interface LotBoardsTableProps {
+  /** One page of them, sorted. */
+  boards: readonly LotBoardRow[];
+  /** On all pages. */
+  chosen: number;
+  boardTypeCode: string;
+  view: LotView;
+  changeView: (change: Partial<LotView>) => void;
 }
 
-export function LotBoardsTable({ boards, boardTypeCode }: { boards: readonly LotBoardRow[]; boardTypeCode: string }) {
+/** Boards of the lot; order and page are the server's and stand in the address. */
+export function LotBoardsTable({ boards, chosen, boardTypeCode, view, changeView }: LotBoardsTableProps) {
   const rows = useMemo(() => boards.map((row) => ({ ...row, boardTypeCode })), [boards, boardTypeCode]);
   return (
     <DataTable
@@ -126,6 +125,15 @@ export function LotBoardsTable({ boards, boardTypeCode }: { boards: readonly Lot
       rowKey={(row) => row.serial}
       label="Boards of the lot"
       empty={{ title: 'No board is shown.', text: 'Choose other boards above.' }}
+      pageSize={boardsPerPage}
+      served={{
+        sorting: [{ id: view.sort, desc: view.order === 'falling' }],
+        pageIndex: view.page - 1,
+        rowCount: chosen,
+        onSort: ({ id, desc }) =>
+          changeView({ sort: id as LotView['sort'], order: desc ? 'falling' : 'rising', page: 1 }),
+        onPage: (pageIndex) => changeView({ page: pageIndex + 1 }),
+      }}
     />
   );
 }

@@ -13,6 +13,8 @@ export const qualitySurface: Surface = {
   },
   handlers: {
     'GET /api/lots/[code]': 'signed-in',
+    'GET /api/lots/[code]/review': 'signed-in',
+    'GET /api/lots/[code]/baselines': 'manage-lots',
     'GET /api/units/[serial]': 'signed-in',
     /** All readings of a board as CSV. */
     'GET /api/units/[serial]/readings': 'signed-in',
@@ -24,6 +26,7 @@ export const qualitySurface: Surface = {
     'app/(quality)/lots/actions.ts#holdLotAction': 'hold-lots',
     'app/(quality)/lots/actions.ts#releaseLotAction': 'hold-lots',
     'app/(quality)/lots/actions.ts#recordComponentBatchAction': 'manage-lots',
+    'app/(quality)/lots/actions.ts#chooseBaselineAction': 'manage-lots',
     'app/(quality)/units/actions.ts#signDispositionAction': 'sign-dispositions',
     'app/(quality)/units/actions.ts#orderRetestAction': 'order-retests',
     'app/(quality)/units/actions.ts#printLabelAgainAction': 'print-labels',

@@ -8,6 +8,7 @@ import { compareReference } from '@/lib/bench/reference-check';
 import { refusal, success, type Outcome } from '@/lib/contracts/outcome';
 import type { RunCloser } from '@/lib/contracts/stored-states';
 import { tracesOf } from '@/lib/run/traces';
+import { freezeBaselines } from '../lots/freeze-baselines';
 import { printLabel } from '../labels/print-label';
 import type { RunRecord } from './run-record';
 
@@ -31,6 +32,7 @@ export async function recordRun(
     if (run.endedAt) return success({ validUntilIso: null });
     await storeResults(tx, record);
     await close(tx, record, closedBy);
+    if (run.kind === 'production' && record.result.verdict !== 'no-verdict') await freezeBaselines(tx, run.lotId!);
     if (run.kind === 'production' && record.result.verdict === 'pass') {
       const printerId = await findStationPrinter(tx, run.stationId);
       await printLabel(tx, { unitId: run.unitId!, runId: run.id, printerId });

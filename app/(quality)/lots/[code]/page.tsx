@@ -2,32 +2,44 @@ import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { LotLive } from '@/components/desk/lots/lot-live';
 import { actorMay } from '@/lib/access/actor';
+import { lotViewSchema } from '@/lib/contracts/lot-view';
 import { authorise } from '@/server/auth/authorise';
 import { readLotPage } from '@/server/operations/lots/read-lot-page';
-import { changeLotAction, holdLotAction, recordComponentBatchAction, releaseLotAction } from '../actions';
+import { readLotReview } from '@/server/operations/lots/read-lot-review';
+import {
+  changeLotAction,
+  chooseBaselineAction,
+  holdLotAction,
+  recordComponentBatchAction,
+  releaseLotAction,
+} from '../actions';
 
 interface Props {
   params: Promise<{ code: string }>;
+  searchParams: Promise<Record<string, string | string[] | undefined>>;
 }
 
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
   return { title: `Lot ${decodeURIComponent((await params).code)}` };
 }
 
-export default async function LotPage({ params }: Props) {
+export default async function LotPage({ params, searchParams }: Props) {
   const actor = await authorise('signed-in');
-  const lot = await readLotPage(decodeURIComponent((await params).code));
+  const code = decodeURIComponent((await params).code);
+  const view = lotViewSchema.parse(await searchParams);
+  const [lot, review] = await Promise.all([readLotPage(code, view), readLotReview(code, view)]);
   if (!lot) notFound();
   return (
     <LotLive
       initial={lot}
-      mayManage={actorMay(actor, 'manage-lots')}
-      mayHold={actorMay(actor, 'hold-lots')}
+      initialReview={review}
+      may={{ manage: actorMay(actor, 'manage-lots'), hold: actorMay(actor, 'hold-lots') }}
       actions={{
         change: changeLotAction,
         hold: holdLotAction,
         release: releaseLotAction,
         recordBatch: recordComponentBatchAction,
+        chooseBaseline: chooseBaselineAction,
       }}
     />
   );

@@ -23,13 +23,13 @@ export default async function LotSheetPage({ params }: Props) {
   await authorise('signed-in');
   const lot = await readLotPage(decodeURIComponent((await params).code));
   if (!lot) notFound();
-  const spoken = (serial: string | undefined) => (serial ? serialGroups(serial, lot.boardTypeCode).join(' ') : '');
+  const spoken = (serial: string | null) => (serial ? serialGroups(serial, lot.boardTypeCode).join(' ') : '');
   const facts: [string, string][] = [
     ['Board type', `${lot.boardTypeCode}, ${lot.boardTypeName}`],
     ['Sequence', `r${lot.sequenceNumber}`],
     ['Boards', String(lot.summary.size)],
-    ['First serial', spoken(lot.boards[0]?.serial)],
-    ['Last serial', spoken(lot.boards.at(-1)?.serial)],
+    ['First serial', spoken(lot.firstSerial)],
+    ['Last serial', spoken(lot.lastSerial)],
     ['Made by', lot.createdByName],
   ];
   // The newest batch of each component.

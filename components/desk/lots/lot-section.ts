@@ -1,0 +1,18 @@
+import type { LotPage } from '@/lib/contracts/lot-page';
+import type { LotView } from '@/lib/contracts/lot-view';
+import type { Outcome } from '@/lib/contracts/outcome';
+import type { LotActionsOf } from './lot-actions';
+
+/** What every part of a lot's page is given. */
+export interface LotSectionProps {
+  lot: LotPage;
+  view: LotView;
+  changeView: (change: Partial<LotView>) => void;
+  may: { manage: boolean; hold: boolean };
+  actions: LotActionsOf & {
+    recordBatch: (input: unknown) => Promise<Outcome>;
+    chooseBaseline: (input: unknown) => Promise<Outcome>;
+  };
+  /** Fetches the page again, after something was changed. */
+  onChanged: () => void;
+}
