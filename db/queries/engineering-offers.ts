@@ -91,6 +91,24 @@ export async function endOpenOffer(
   return row ?? null;
 }
 
+/** What an offer offered, ended or not. */
+export async function findOfferHead(db: Reader, offerId: string) {
+  const [row] = await db
+    .select({
+      revisionNumber: sequenceRevisions.number,
+      sequenceId: sequences.id,
+      sequenceName: sequences.name,
+      note: engineeringOffers.note,
+      offeredByName: accounts.name,
+    })
+    .from(engineeringOffers)
+    .innerJoin(sequenceRevisions, eq(sequenceRevisions.id, engineeringOffers.revisionId))
+    .innerJoin(sequences, eq(sequences.id, sequenceRevisions.sequenceId))
+    .innerJoin(accounts, eq(accounts.id, engineeringOffers.offeredBy))
+    .where(eq(engineeringOffers.id, offerId));
+  return row ?? null;
+}
+
 /** Offers of a revision, newest first. */
 export async function listOffersOfRevision(db: Reader, revisionId: string) {
   const rows = await db

@@ -1,17 +1,14 @@
 import { and, desc, eq, gt, isNull, sql } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import { accounts } from '@/db/schema/accounts';
-import { lots } from '@/db/schema/lots';
 import { runs } from '@/db/schema/runs';
 import { sessions } from '@/db/schema/sessions';
-import { units } from '@/db/schema/units';
 
 export interface NewestRun {
   stationId: string;
   kind: (typeof runs.$inferSelect)['kind'];
-  serial: string | null;
-  lotId: string | null;
-  lotCode: string | null;
+  /** As planned: a spare board and a reference board are no units. */
+  serial: string;
   startedAt: Date;
   endedAt: Date | null;
   verdict: (typeof runs.$inferSelect)['verdict'];
@@ -26,9 +23,7 @@ export function listNewestRunsOfStations(db: Database | Transaction): Promise<Ne
     .selectDistinctOn([runs.stationId], {
       stationId: runs.stationId,
       kind: runs.kind,
-      serial: units.serial,
-      lotId: runs.lotId,
-      lotCode: lots.code,
+      serial: sql<string>`${runs.plan} ->> 'serial'`,
       startedAt: runs.startedAt,
       endedAt: runs.endedAt,
       verdict: runs.verdict,
@@ -37,10 +32,18 @@ export function listNewestRunsOfStations(db: Database | Transaction): Promise<Ne
       operatorNumber: accounts.operatorNumber,
     })
     .from(runs)
-    .leftJoin(units, eq(units.id, runs.unitId))
-    .leftJoin(lots, eq(lots.id, runs.lotId))
     .innerJoin(accounts, eq(accounts.id, runs.operatorId))
     .orderBy(runs.stationId, desc(runs.startedAt));
+}
+
+/** The lot of the newest production run of every station. Keys and values are ids. */
+export async function listLotsOfStations(db: Database | Transaction): Promise<Map<string, string>> {
+  const rows = await db
+    .selectDistinctOn([runs.stationId], { stationId: runs.stationId, lotId: runs.lotId })
+    .from(runs)
+    .where(eq(runs.kind, 'production'))
+    .orderBy(runs.stationId, desc(runs.startedAt));
+  return new Map(rows.map(({ stationId, lotId }) => [stationId, lotId!]));
 }
 
 export interface SignedInOperator {

@@ -4,7 +4,7 @@ import { runs } from '@/db/schema/runs';
 import { stations } from '@/db/schema/stations';
 import { units } from '@/db/schema/units';
 
-/** A board of the lot that is on a fixture now, if any. */
+/** A board of the lot that is in test now, if any. */
 export async function findOpenRunOfLot(
   db: Database | Transaction,
   lotId: string,
@@ -14,7 +14,7 @@ export async function findOpenRunOfLot(
     .from(runs)
     .innerJoin(units, eq(units.id, runs.unitId))
     .innerJoin(stations, eq(stations.id, runs.stationId))
-    .where(and(eq(runs.lotId, lotId), isNull(runs.endedAt)))
+    .where(and(eq(runs.lotId, lotId), eq(runs.kind, 'production'), isNull(runs.endedAt)))
     .limit(1);
   return run ?? null;
 }

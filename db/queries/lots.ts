@@ -135,7 +135,7 @@ export async function listLots(db: Reader, filter: LotFilter): Promise<LotRow[]>
     .select({ lotId: runs.lotId })
     .from(runs)
     .innerJoin(stations, eq(stations.id, runs.stationId))
-    .where(eq(stations.code, filter.stationCode ?? ''));
+    .where(and(eq(stations.code, filter.stationCode ?? ''), eq(runs.kind, 'production')));
   return lotRows(db)
     .where(
       and(

@@ -30,7 +30,7 @@ export async function setBinScan(db: Reader, runId: string, binCode: string, at:
     .where(and(eq(runs.id, runId), isNull(runs.binScannedAt), eq(runs.verdict, 'reject')));
 }
 
-/** Typical seconds of a board of the lot: the median of its runs with a verdict; null before three of them. */
+/** Typical seconds of a board of the lot: the median of its production runs with a verdict; null before three of them. */
 export async function findSecondsEach(db: Reader, lotId: string): Promise<number | null> {
   const [row] = await db
     .select({
@@ -38,11 +38,11 @@ export async function findSecondsEach(db: Reader, lotId: string): Promise<number
       count: sql<number>`count(${runs.seconds})::int`,
     })
     .from(runs)
-    .where(and(eq(runs.lotId, lotId), inArray(runs.verdict, ['pass', 'reject'])));
+    .where(and(eq(runs.lotId, lotId), eq(runs.kind, 'production'), inArray(runs.verdict, ['pass', 'reject'])));
   return row && row.count >= 3 ? row.median : null;
 }
 
-/** Points as found before any trim, newest runs first, of boards of the lot that have a verdict. Volts. */
+/** Points as found before any trim, newest production runs first, of boards of the lot that have a verdict. Volts. */
 export async function listFoundPoints(
   db: Reader,
   lotId: string,
@@ -55,6 +55,7 @@ export async function listFoundPoints(
     .where(
       and(
         eq(runs.lotId, lotId),
+        eq(runs.kind, 'production'),
         eq(runs.attempt, 1),
         inArray(runs.verdict, ['pass', 'reject']),
         eq(measurements.phase, 'found'),

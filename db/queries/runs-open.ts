@@ -23,6 +23,19 @@ export async function nextAttempt(tx: Transaction, unitId: string): Promise<numb
   return row!.last + 1;
 }
 
+/**
+ * Number of the board's next engineering run, from 1. A spare board, `unitId` null, is known by its serial number; nobody else
+ * numbers it at the same moment, since it lies on one fixture.
+ */
+export async function nextEngineeringAttempt(tx: Transaction, unitId: string | null, serial: string): Promise<number> {
+  const board = unitId ? eq(runs.unitId, unitId) : and(isNull(runs.unitId), sql`${runs.plan} ->> 'serial' = ${serial}`);
+  const [row] = await tx
+    .select({ last: sql<number>`coalesce(max(${runs.attempt}), 0)::int` })
+    .from(runs)
+    .where(and(board, eq(runs.kind, 'engineering')));
+  return row!.last + 1;
+}
+
 export async function useRetestOrder(tx: Transaction, orderId: string, runId: string): Promise<void> {
   await tx.update(retestOrders).set({ usedByRunId: runId }).where(eq(retestOrders.id, orderId));
 }

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { and, desc, eq } from 'drizzle-orm';
 import type { Database } from '@/db/client';
 import { boardTypeRevisions } from '@/db/schema/board-type-revisions';
 import { lots } from '@/db/schema/lots';
@@ -22,4 +22,15 @@ export async function findSimulatedBoard(db: Database, serial: string) {
     .leftJoin(simulatedBoards, eq(simulatedBoards.serial, units.serial))
     .where(eq(units.serial, serial));
   return row ?? null;
+}
+
+/** Ids of the open lots of a board type, newest first. */
+export async function listOpenLotsOfType(db: Database, boardTypeId: string): Promise<string[]> {
+  const rows = await db
+    .select({ id: lots.id })
+    .from(lots)
+    .innerJoin(boardTypeRevisions, eq(boardTypeRevisions.id, lots.boardTypeRevisionId))
+    .where(and(eq(boardTypeRevisions.boardTypeId, boardTypeId), eq(lots.state, 'open')))
+    .orderBy(desc(lots.createdAt));
+  return rows.map(({ id }) => id);
 }

@@ -45,9 +45,15 @@ async function findLot(db: Reader, which: SQL) {
 /** The board with this serial and the lot that it belongs to. */
 export async function findUnitBySerial(db: Reader, serial: string) {
   const [row] = await db
-    .select({ unitId: units.id, lotId: units.lotId, lotCode: lots.code })
+    .select({
+      unitId: units.id,
+      lotId: units.lotId,
+      lotCode: lots.code,
+      boardTypeId: boardTypeRevisions.boardTypeId,
+    })
     .from(units)
     .innerJoin(lots, eq(lots.id, units.lotId))
+    .innerJoin(boardTypeRevisions, eq(boardTypeRevisions.id, lots.boardTypeRevisionId))
     .where(eq(units.serial, serial));
   return row ?? null;
 }

@@ -34,9 +34,8 @@ export async function findUnit(db: Reader, serial: string) {
   return row ?? null;
 }
 
-/** Every run of the unit with where and by whom, newest first. */
-export function listRunsOfUnit(db: Reader, unitId: string) {
-  return db
+const madeRuns = (db: Reader) =>
+  db
     .select({
       run: runs,
       stationCode: stations.code,
@@ -47,8 +46,16 @@ export function listRunsOfUnit(db: Reader, unitId: string) {
     .from(runs)
     .innerJoin(stations, eq(stations.id, runs.stationId))
     .innerJoin(accounts, eq(accounts.id, runs.operatorId))
-    .where(eq(runs.unitId, unitId))
-    .orderBy(desc(runs.startedAt));
+    .$dynamic();
+
+/** Every run of the unit, engineering runs among them, with where and by whom, newest first. */
+export function listRunsOfUnit(db: Reader, unitId: string) {
+  return madeRuns(db).where(eq(runs.unitId, unitId)).orderBy(desc(runs.startedAt));
+}
+
+export async function findEngineeringRun(db: Reader, runId: string) {
+  const [row] = await madeRuns(db).where(and(eq(runs.id, runId), eq(runs.kind, 'engineering')));
+  return row ?? null;
 }
 
 export function listMeasurements(db: Reader, runIds: string[]) {

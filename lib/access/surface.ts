@@ -1,6 +1,7 @@
 import type { Access } from './access';
 import { benchSurface } from './surface/bench';
 import { engineeringSurface } from './surface/engineering';
+import { offersSurface } from './surface/offers';
 import { peopleSurface } from './surface/people';
 import { qualitySurface } from './surface/quality';
 
@@ -16,7 +17,7 @@ export interface Surface {
   events: Record<string, Access>;
 }
 
-const areas: Surface[] = [peopleSurface, benchSurface, engineeringSurface, qualitySurface];
+const areas: Surface[] = [peopleSurface, benchSurface, engineeringSurface, offersSurface, qualitySurface];
 
 function merged(part: keyof Surface): Record<string, Access> {
   return Object.assign({}, ...areas.map((area) => area[part]));

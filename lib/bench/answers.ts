@@ -1,6 +1,7 @@
 import { startCommissioning } from './commands';
 import { say } from './sayings';
 import { refuse, rest, stay } from './step';
+import { leaveTrial } from './trial';
 import type { BenchAnswer, BenchAsk, BenchRefusal, BenchState, BenchStep } from './types';
 
 /** The server's answer to the question that is open. */
@@ -20,12 +21,13 @@ export function takeAnswer(asked: BenchState, ask: BenchAsk, answer: BenchAnswer
       );
     }
     case 'lot':
-      return stay(rest({ ...state, ...answer.value, last: null }));
+      return stay(rest({ ...state, ...answer.value, trial: null, last: null }));
     case 'lots':
       return stay({
         ...state,
         lot: null,
         next: null,
+        trial: null,
         last: null,
         phase: { kind: 'choose-lot', lots: answer.value.lots },
       });
@@ -39,6 +41,12 @@ export function takeAnswer(asked: BenchState, ask: BenchAsk, answer: BenchAnswer
         },
         { kind: 'start-run', ...answer.value },
       );
+    case 'offer': {
+      const { standing, ...trial } = answer.value;
+      return stay(rest({ ...state, standing, trial, last: null }));
+    }
+    case 'end-offer':
+      return leaveTrial(state);
     case 'reference':
       if (state.phase.kind !== 'commissioning') return stay(state);
       return seated({ ...state, phase: { ...state.phase, reference: answer.value, what: say('commissioning-seat') } });
@@ -63,5 +71,6 @@ function takeRefusal(state: BenchState, ask: BenchAsk, answer: BenchRefusal, atI
   const retryAtIso = answer.retryAtIso ?? null;
   if (ask.kind === 'pin' && state.phase.kind === 'pin')
     return stay({ ...state, phase: { ...state.phase, problem: answer.refusal, retryAtIso } });
+  if (state.trial && answer.refusal.code === 'offer-ended') return leaveTrial(state, { ...answer.refusal, atIso });
   return refuse(state, answer.refusal, atIso, ask.kind === 'board' ? ask.serial : null);
 }

@@ -3,6 +3,7 @@ import { seated, takeAnswer } from './answers';
 import { takeCommand } from './commands';
 import { say } from './sayings';
 import { rest, signOut, stay } from './step';
+import { leaveTrial, offerHasEnded } from './trial';
 import type { BenchEvent, BenchState, BenchStep, RunEnding, Standing } from './types';
 
 /** A bench around its runs: badge, PIN, lot, boards, bins. Decides; the station and the server do. */
@@ -13,6 +14,8 @@ const nothingKnown: Standing = {
   otherStation: null,
   signedIn: false,
   lot: null,
+  next: null,
+  offer: null,
   call: null,
   label: null,
 };
@@ -24,6 +27,7 @@ export function beginBench(station: BenchView['station']): BenchState {
     operator: null,
     lot: null,
     next: null,
+    trial: null,
     standing: nothingKnown,
     pendingBin: null,
     ready: { opened: false, linksDown: [], strangers: [], supplyOff: false, databaseAway: false },
@@ -43,7 +47,7 @@ export function advanceBench(state: BenchState, event: BenchEvent): BenchStep {
       if (state.asked?.id !== event.id) return stay(state);
       return takeAnswer(state, state.asked.ask, event.answer, event.atIso);
     case 'standing':
-      return takeStanding(state, event.standing, event.pendingBin);
+      return takeStanding(state, event);
     case 'database':
       return stay({ ...state, ready: { ...state.ready, databaseAway: event.away } });
     case 'instruments':
@@ -77,14 +81,22 @@ function takeLinks(
   return stay({ ...state, ready: { ...state.ready, opened, linksDown, strangers } });
 }
 
-function takeStanding(state: BenchState, standing: Standing, pendingBin?: BenchState['pendingBin']): BenchStep {
+function takeStanding(
+  state: BenchState,
+  { standing, pendingBin, atIso }: Extract<BenchEvent, { kind: 'standing' }>,
+): BenchStep {
+  const sameLot = state.lot !== null && standing.lot?.lotId === state.lot.lotId;
   const known: BenchState = {
     ...state,
     standing,
-    lot: state.lot && standing.lot?.lotId === state.lot.lotId ? standing.lot : state.lot,
+    lot: sameLot ? standing.lot : state.lot,
+    next: sameLot ? standing.next : state.next,
     pendingBin: pendingBin === undefined ? state.pendingBin : pendingBin,
   };
-  if (!state.operator || standing.signedIn) return stay(known);
+  if (!state.operator || standing.signedIn)
+    return known.phase.kind === 'idle' && !known.asked && offerHasEnded(known)
+      ? leaveTrial(known, { ...say('offer-ended'), atIso })
+      : stay(known);
   if (state.phase.kind === 'run') return stay(known, { kind: 'run-event', event: { kind: 'bench-lost' } });
   if (state.phase.kind === 'commissioning' && state.phase.state === 'measuring')
     return stay(known, { kind: 'stop-commissioning' });

@@ -31,7 +31,9 @@ export function startBoard(state: BenchState, serial: string, byHand: boolean, a
       : say('empty-fixture-first');
     return refuse(state, refusal, atIso, serial);
   }
-  return askServer(state, { kind: 'board', serial, lotId: state.lot?.lotId ?? null, byHand });
+  const { lot, trial } = state;
+  const offerId = trial?.offer.offerId ?? null;
+  return askServer(state, { kind: 'board', serial, lotId: lot?.lotId ?? null, offerId, byHand });
 }
 
 /** The operator says that the fixture is empty: only where no controller can see it. */

@@ -3,7 +3,8 @@ import { confirmEmpty, notReadyToEnergise, startBoard } from './board-start';
 import { printCode, readScan } from './scan-code';
 import { say } from './sayings';
 import { takeScan, takeTypedSerial } from './scans';
-import { askServer, refuse, rest, signOut, stay } from './step';
+import { askServer, atRest, refuse, rest, signOut, stay } from './step';
+import { endTrial, leaveTrial, offerHasEnded, startTrial } from './trial';
 import type { BenchState, BenchStep } from './types';
 
 /** What a person at the bench asked for. While an answer of the server is awaited only a run's own actions are taken. */
@@ -48,6 +49,12 @@ export function takeCommand(state: BenchState, command: BenchCommand, atIso: str
       return atRest(state) ? askServer(state, { kind: 'lot', by: { lotId: command.lotId } }) : notNow(state, atIso);
     case 'leave-lot':
       return atRest(state) ? askServer(state, { kind: 'lots' }) : notNow(state, atIso);
+    case 'start-trial':
+      return startTrial(state, command.offerId, atIso);
+    case 'leave-trial':
+      return state.trial && atRest(state) ? leaveTrial(state) : notNow(state, atIso);
+    case 'end-trial':
+      return endTrial(state, atIso);
     case 'try-again':
       return tryAgain(state, atIso);
     case 'continue':
@@ -65,11 +72,6 @@ export function takeCommand(state: BenchState, command: BenchCommand, atIso: str
 }
 
 const notNow = (state: BenchState, atIso: string) => refuse(state, say('not-now'), atIso);
-
-/** Signed in, and neither testing nor owing a bin scan. */
-function atRest(state: BenchState): boolean {
-  return state.operator !== null && ['choose-lot', 'idle', 'over', 'daily-check'].includes(state.phase.kind);
-}
 
 /** Stop is never refused. */
 function stop(state: BenchState): BenchStep {
@@ -120,11 +122,13 @@ function leaveResult(state: BenchState, atIso: string): BenchStep {
     phase.kind === 'daily-check' ||
     (phase.kind === 'commissioning' && phase.state !== 'measuring');
   if (!leavable) return notNow(state, atIso);
-  if (state.lot) return stay({ ...rest(state), refusal: null }, { kind: 'read-standing' });
+  if (offerHasEnded(state)) return leaveTrial(state, { ...say('offer-ended'), atIso });
+  if (state.lot || state.trial) return stay({ ...rest(state), refusal: null }, { kind: 'read-standing' });
   return askServer(state, { kind: 'lots' });
 }
 
 function printAgain(state: BenchState, atIso: string): BenchStep {
+  if (state.trial) return notNow(state, atIso);
   const serial = state.standing.label?.serial ?? (state.last?.verdict === 'pass' ? state.last.serial : null);
   return serial ? askServer(state, { kind: 'print-label', serial }) : notNow(state, atIso);
 }

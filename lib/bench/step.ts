@@ -19,11 +19,25 @@ export function askServer(state: BenchState, ask: BenchAsk): BenchStep {
 
 /** Nobody at the bench. A reject that still waits for its bin stays with the station. */
 export function signOut(state: BenchState): BenchState {
-  return { ...state, phase: { kind: 'badge' }, operator: null, lot: null, next: null, refusal: null, last: null };
+  return {
+    ...state,
+    phase: { kind: 'badge' },
+    operator: null,
+    lot: null,
+    next: null,
+    trial: null,
+    refusal: null,
+    last: null,
+  };
 }
 
 /** Where a signed-in bench with a lot rests between boards. */
 export function rest(state: BenchState): BenchState {
   if (state.pendingBin) return { ...state, phase: { kind: 'bin', bin: state.pendingBin } };
   return { ...state, phase: { kind: 'idle', next: null } };
+}
+
+/** Signed in, and neither testing nor owing a bin scan. */
+export function atRest(state: BenchState): boolean {
+  return state.operator !== null && ['choose-lot', 'idle', 'over', 'daily-check'].includes(state.phase.kind);
 }

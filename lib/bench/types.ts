@@ -1,5 +1,5 @@
 import type { BenchCommand } from '../contracts/bench-command';
-import type { BenchView, LotStrip, ReadinessItem, ReferencePoint, Say } from '../contracts/bench-view';
+import type { BenchView, LotStrip, ReadinessItem, ReferencePoint, Say, TrialOffer } from '../contracts/bench-view';
 import type { BoardType } from '../contracts/board-type';
 import type { CommissioningValues, NoVerdictReason, RunEvent, RunPlan, Verdict } from '../run/types';
 
@@ -29,6 +29,12 @@ export interface PendingBin {
 
 export type NextRun = NonNullable<BenchView['next']>;
 
+/** Engineering runs of an offered draft, instead of production, until they are left. */
+export interface BenchTrial {
+  offer: TrialOffer;
+  next: NextRun;
+}
+
 /** A run of the reference board, and what it is compared with. Volts. */
 export interface ReferenceCheck {
   referenceCode: string;
@@ -44,9 +50,12 @@ export type BenchAsk =
   | { kind: 'lot'; by: { code: string } | { lotId: string } }
   /**
    * May this board be tested here, now, by this operator? The answer has opened the run. A reference board needs no
-   * lot, and starts the daily check.
+   * lot, and starts the daily check. With an offer it is run with the offered draft, as an engineering run.
    */
-  | { kind: 'board'; serial: string; lotId: string | null; byHand: boolean }
+  | { kind: 'board'; serial: string; lotId: string | null; offerId: string | null; byHand: boolean }
+  /** Takes an offered draft for a trial. */
+  | { kind: 'offer'; offerId: string }
+  | { kind: 'end-offer'; offerId: string }
   /** The reference board that an engineer scans for commissioning. */
   | { kind: 'reference'; code: string }
   | { kind: 'bin'; runId: string; binCode: string }
@@ -59,7 +68,9 @@ export interface BenchAnswers {
   badge: { accountId: string; number: string };
   pin: { operator: BenchOperator; lots: OpenLot[]; standing: Standing };
   lot: { lot: LotStrip; next: NextRun; standing: Standing };
-  board: { plan: RunPlan; check: ReferenceCheck | null };
+  board: { plan: RunPlan; check: ReferenceCheck | null; engineering: boolean };
+  offer: BenchTrial & { standing: Standing };
+  'end-offer': null;
   reference: { check: ReferenceCheck; boardType: BoardType };
   bin: { lot: LotStrip | null };
   'component-batch': null;
@@ -86,6 +97,10 @@ export interface Standing {
   /** The bench session of the operator still holds. */
   signedIn: boolean;
   lot: LotStrip | null;
+  /** Of the lot; null without one. */
+  next: NextRun | null;
+  /** Open at this station. */
+  offer: TrialOffer | null;
   call: BenchView['call'];
   label: BenchView['label'];
 }
@@ -95,6 +110,8 @@ export interface BenchPlace {
   accountId: string | null;
   sessionId: string | null;
   lotId: string | null;
+  /** Of the trial that goes on. */
+  offerId: string | null;
   /** Of the board last passed: its label is watched. */
   serial: string | null;
 }
@@ -145,6 +162,8 @@ export interface BenchState {
   operator: BenchOperator | null;
   lot: LotStrip | null;
   next: NextRun | null;
+  /** Null: production. */
+  trial: BenchTrial | null;
   standing: Standing;
   pendingBin: PendingBin | null;
   /** Links of the instruments answer; the supply was read back as off. Neither is needed while a run goes on. */
@@ -187,7 +206,7 @@ export type BenchEvent = { atIso: string } & (
 
 export type BenchEffect =
   | { kind: 'ask'; id: number; ask: BenchAsk }
-  | { kind: 'start-run'; plan: RunPlan; check: ReferenceCheck | null }
+  | { kind: 'start-run'; plan: RunPlan; check: ReferenceCheck | null; engineering: boolean }
   | { kind: 'run-event'; event: PersonsRunEvent }
   | { kind: 'start-commissioning'; reference: BenchAnswers['reference'] }
   | { kind: 'stop-commissioning' }

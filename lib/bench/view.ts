@@ -5,7 +5,7 @@ import type { BenchState } from './types';
 
 /** Everything a bench screen shows. `run` is the run going on or the last one, while its end is still shown. */
 export function viewBench(state: BenchState, run: RunView | null, revision: number): BenchView {
-  const { phase, operator, standing } = state;
+  const { phase, operator, standing, trial } = state;
   return {
     revision,
     station: state.station,
@@ -15,15 +15,29 @@ export function viewBench(state: BenchState, run: RunView | null, revision: numb
       locale: operator.locale,
       mayCommission: operator.mayCommission,
     },
-    lot: state.lot,
-    next: state.next,
+    lot: trial ? null : state.lot,
+    next: trial ? trial.next : state.next,
     run: phase.kind === 'run' || phase.kind === 'over' || phase.kind === 'bin' ? run : null,
+    offer: takesOffers(state) ? standing.offer : null,
+    engineering: trial && !isStationsOwn(phase) ? trial.offer : null,
     readiness: [...standing.readiness, ...linkItems(state)],
     call: standing.call,
-    label: standing.label,
+    label: trial ? null : standing.label,
     refusal: state.refusal,
     screen: screenOf(state),
   };
+}
+
+/** Where the panel of an offer stands. */
+function takesOffers({ operator, trial, phase }: BenchState): boolean {
+  return operator !== null && trial === null && (phase.kind === 'idle' || phase.kind === 'choose-lot');
+}
+
+/** Daily check and commissioning are no engineering runs, whatever they interrupt. */
+function isStationsOwn(phase: BenchState['phase']): boolean {
+  return (
+    phase.kind === 'daily-check' || phase.kind === 'commissioning' || (phase.kind === 'run' && phase.check !== null)
+  );
 }
 
 function screenOf(state: BenchState): BenchView['screen'] {

@@ -11,6 +11,12 @@ export const benchCommandSchema = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('badge-by-hand'), number: z.string().min(1).max(12) }),
   z.object({ kind: z.literal('choose-lot'), lotId: z.uuid() }),
   z.object({ kind: z.literal('leave-lot') }),
+  /** Takes the draft that is on offer: boards scanned from now on make engineering runs of it. */
+  z.object({ kind: z.literal('start-trial'), offerId: z.uuid() }),
+  /** Back to the lot; the offer stays. */
+  z.object({ kind: z.literal('leave-trial') }),
+  /** The trial is done: its offer ends too. */
+  z.object({ kind: z.literal('end-trial') }),
   /** Typed twice, compared here and at the server. */
   z.object({ kind: z.literal('serial-by-hand'), serial, again: serial }),
   z.object({

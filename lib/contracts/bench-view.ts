@@ -103,6 +103,18 @@ export interface ReferencePoint {
   passed: boolean;
 }
 
+/** A draft that an engineer offers to this station for a trial. */
+export interface TrialOffer {
+  offerId: string;
+  offeredBy: string;
+  /** Such as r7. */
+  revision: string;
+  sequenceName: string;
+  boardTypeCode: string;
+  /** Empty: none. */
+  note: string;
+}
+
 export interface BenchView {
   /** Rises with every change; a screen drops an older view. */
   revision: number;
@@ -118,9 +130,13 @@ export interface BenchView {
   };
   operator: { accountId: string; number: string; locale: string; mayCommission: boolean } | null;
   lot: LotStrip | null;
-  /** What the next run of the lot will be: shown while idle. Null without a lot. */
+  /** What the next run of the lot or the trial will be: shown while idle. Null without either. */
   next: { stepGroups: StepGroup[]; rails: RailsView } | null;
   run: RunView | null;
+  /** May be taken for a trial now. Null: none, or not now. */
+  offer: TrialOffer | null;
+  /** The draft of which engineering runs are made: what is shown is no production, and `lot` is null. */
+  engineering: TrialOffer | null;
   readiness: ReadinessItem[];
   call: { sinceIso: string; acknowledgedBy: string | null } | null;
   label: { serial: string; state: 'waiting' | 'printed' | 'failed'; problem: string | null } | null;

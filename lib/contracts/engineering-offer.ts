@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import type { NoVerdictReason, RejectReason, Verdict } from '../run/types';
+import type { UnitRun } from './unit-page';
 
 export const endOfferSchema = z.object({ offerId: z.uuid() });
 
@@ -34,4 +35,18 @@ export interface OfferedDraft {
   endedByName: string | null;
   /** Newest first. */
   runs: OfferRun[];
+}
+
+/** The record of one engineering run. */
+export interface EngineeringRunPage {
+  serial: string;
+  boardTypeCode: string;
+  /** False: a spare board that belongs to no lot. */
+  isUnit: boolean;
+  sequenceId: string;
+  sequenceName: string;
+  revisionNumber: number;
+  note: string;
+  offeredByName: string;
+  run: UnitRun;
 }

@@ -37,6 +37,8 @@ export function admitBoard({ serial, lot, unit, inTestAt, sequence }: BoardFacts
 function admitStanding(serial: string, standing: BoardStanding, inTestAt: string | null): BoardAdmission {
   switch (standing.kind) {
     case 'may-be-tested':
+      // An engineering run is no part of its record, and yet it lies on that fixture.
+      if (inTestAt !== null) return refuse(say('board-in-test', { serial, station: inTestAt }));
       return { allowed: true, retestOrderId: standing.retestOrderId };
     case 'in-test':
       return refuse(say('board-in-test', { serial, station: inTestAt ?? '' }));
@@ -55,4 +57,28 @@ function admitStanding(serial: string, standing: BoardStanding, inTestAt: string
     case 'attempts-used':
       return refuse(say('attempts-used', { serial, most: standing.most }));
   }
+}
+
+/** What is on record of a board scanned in a trial, and of the offer. */
+export interface TrialBoardFacts {
+  serial: string;
+  offer: { boardTypeCode: string; serialPattern: string };
+  /** Null: a spare board that belongs to no lot. */
+  unit: { isOfType: boolean; standing: BoardStanding } | null;
+  inTestAt: string | null;
+}
+
+/**
+ * Why this board may not make an engineering run; null when it may. What left the line stays as it is. A board that waits for a
+ * decision may be tried: it waits all the same.
+ */
+export function refuseTrialBoard({ serial, offer, unit, inTestAt }: TrialBoardFacts): Say | null {
+  if (!new RegExp(offer.serialPattern).test(serial)) return say('serial-wrong-form', { serial });
+  if (!unit) return null;
+  if (!unit.isOfType) return say('serial-of-other-type', { serial, boardType: offer.boardTypeCode });
+  if (inTestAt !== null) return say('board-in-test', { serial, station: inTestAt });
+  const { standing } = unit;
+  if (!['passed', 'scrapped', 'returned', 'used-as-is'].includes(standing.kind)) return null;
+  const admitted = admitStanding(serial, standing, inTestAt);
+  return admitted.allowed ? null : admitted.refusal;
 }

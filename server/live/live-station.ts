@@ -95,7 +95,7 @@ export class LiveStation {
         bench: bench.simulation,
         clock,
         seed: row.link.seed,
-        box: boardBox(context.db, () => this.station.view().lot?.lotId ?? null),
+        box: boardBox(context.db, row.id, () => this.station.place()),
         prompt: () => this.promptNow(),
         onChange: context.onHands,
       });
@@ -119,7 +119,7 @@ export class LiveStation {
 
   private viewChanged(view: BenchView): void {
     this.context.onView(view);
-    const key = `${view.lot?.lotId} ${view.lot?.marks} ${view.screen.kind}`;
+    const key = `${view.lot?.lotId} ${view.engineering?.offerId} ${view.lot?.marks} ${view.screen.kind}`;
     if (key === this.boxKey || !this.hands) return;
     this.boxKey = key;
     this.hands.lookIntoBox().catch((error: unknown) => this.context.log.warn({ error }, 'box of boards'));

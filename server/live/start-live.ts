@@ -17,7 +17,10 @@ export interface Live {
   stop(): Promise<void>;
 }
 
-/** How often each station looks at where it stands with the server, and the server at the list of stations. */
+/**
+ * How often each station looks at where it stands with the server, and the server at the list of stations: for what no
+ * notification tells, and what was missed while the connection was away.
+ */
 const lookEveryMs = 3_000;
 /** Views of one station closer together than this are sent as one; the first goes at once. */
 const viewsApartMs = 25;
@@ -67,6 +70,14 @@ export async function startLive({ httpServer, log }: { httpServer: HttpServer; l
   });
   const enrolments = await listen('enrolment_revoked', (enrolmentId) => open.disconnect({ enrolmentId }));
 
+  const standings = await listen(
+    'standing_changed',
+    (which) => {
+      for (const { row, station } of registry.all()) if (which === '*' || which === row.id) void station.refresh();
+    },
+    () => void refresh(),
+  );
+
   let looking: Promise<unknown> = refresh();
   const timer = setInterval(() => {
     looking = looking.then(async () => {
@@ -83,6 +94,7 @@ export async function startLive({ httpServer, log }: { httpServer: HttpServer; l
       open.close();
       await sessions.close();
       await enrolments.close();
+      await standings.close();
     },
   };
 }

@@ -12,6 +12,7 @@ import { printAgain } from '../operations/bench/print-again';
 import { readStanding } from '../operations/bench/read-standing';
 import { answerBadge, answerPin, listOpenLots } from '../operations/bench/sign-in';
 import { takeLot } from '../operations/bench/take-lot';
+import { endOfferAtBench, takeOffer } from '../operations/bench/take-offer';
 import { recordComponentBatch } from '../operations/lots/record-component-batch';
 import { signOutSession } from '../operations/people/sign-out-session';
 import { openRun } from '../operations/runs/open-run';
@@ -60,6 +61,10 @@ async function answer(db: Database, bench: BenchRow, ask: BenchAsk, who: BenchPl
       return { ok: true, kind: 'lots', value: { lots: await listOpenLots(db) } };
     case 'board':
       return openRun(db, bench, ask, who);
+    case 'offer':
+      return takeOffer(db, bench, ask, who);
+    case 'end-offer':
+      return endOfferAtBench(bench, ask, who);
     case 'reference':
       return answerReference(db, ask.code);
     case 'bin':

@@ -13,6 +13,8 @@ export interface RunJob {
   plan: RunPlan;
   /** Of a daily check; null for a board. */
   check: ReferenceCheck | null;
+  /** Of a trial: a reject goes into no bin. */
+  engineering: boolean;
   bench: Bench | null;
   clock: Clock;
   watchdogMs: number;
@@ -34,7 +36,7 @@ export interface RunOver {
 
 /** From the first effect to the closed record. Never rejects: whatever fails, the supply is off and the run has an ending. */
 export async function performRun(job: RunJob): Promise<RunOver> {
-  const { plan, check, clock, binCode } = job;
+  const { plan, check, engineering, clock, binCode } = job;
   const startedAtMs = clock.now();
   const { result, view } = await resultOfRun(job);
   const seconds = (clock.now() - startedAtMs) / 1000;
@@ -44,7 +46,10 @@ export async function performRun(job: RunJob): Promise<RunOver> {
     seconds,
     noVerdictReason: result.noVerdictReason,
     supplyConfirmedOff: result.supplyOff.confirmed,
-    bin: result.verdict === 'reject' && !check ? { runId: plan.runId, serial: plan.serial, binCode } : null,
+    bin:
+      result.verdict === 'reject' && !check && !engineering
+        ? { runId: plan.runId, serial: plan.serial, binCode }
+        : null,
     reference: check && { ...compareReference(check, result), validUntilIso },
   };
   return { ending, view, stored };

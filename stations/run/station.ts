@@ -1,10 +1,9 @@
 import { advanceBench, beginBench } from '@/lib/bench/bench';
 import { say } from '@/lib/bench/sayings';
-import type { BenchEffect, BenchEvent, BenchPlace, BenchState, ReferenceCheck } from '@/lib/bench/types';
+import type { BenchEffect, BenchEvent, BenchPlace, BenchState } from '@/lib/bench/types';
 import { viewBench } from '@/lib/bench/view';
 import type { BenchCommand, CommandReply } from '@/lib/contracts/bench-command';
 import type { BenchReading, BenchView, RunView } from '@/lib/contracts/bench-view';
-import type { RunPlan } from '@/lib/run/types';
 import type { Clock } from '../clock/clock';
 import type { Bench } from '../instruments/open-bench';
 import type { SafeOffReport } from '../instruments/safe-off';
@@ -47,6 +46,8 @@ export class Station {
   private stopped = false;
   private turn: Promise<unknown> = Promise.resolve();
   private tending: Promise<void> = Promise.resolve();
+  private reading: Promise<void> = Promise.resolve();
+  private nextReading: Promise<void> | null = null;
   private readonly keeper: BenchKeeper;
 
   constructor(private readonly options: StationOptions) {
@@ -95,15 +96,27 @@ export class Station {
     return said ? { ok: false, code: said.code, ...(said.params && { params: said.params }) } : { ok: true };
   }
 
-  /** Reads where the station stands with the server; every few seconds and when something changed. */
-  async refresh(): Promise<void> {
+  /**
+   * Reads where the station stands with the server; every few seconds and when something changed. Asked for again while it
+   * reads, it reads once more, so that what is shown is never older than the last call.
+   */
+  refresh(): Promise<void> {
+    this.nextReading ??= this.reading.then(() => {
+      this.nextReading = null;
+      return (this.reading = this.readStanding());
+    });
+    return this.nextReading;
+  }
+
+  private async readStanding(): Promise<void> {
     const place = this.place();
     const wasBusy = this.isBusy();
     try {
       const { standing, pendingBin } = await this.options.ports.standing(place);
       if (this.state.ready.databaseAway) await this.dispatch({ kind: 'database', away: false });
-      // An answer about another operator says nothing about this one, nor does a bin from before a run ended.
-      if (place.sessionId !== this.sessionId()) return;
+      // An answer about another operator, lot or trial says nothing about this one, nor does a bin from before a run ended.
+      const { sessionId, lotId, offerId } = this.place();
+      if (place.sessionId !== sessionId || place.lotId !== lotId || place.offerId !== offerId) return;
       await this.dispatch({ kind: 'standing', standing, ...(wasBusy || this.isBusy() ? {} : { pendingBin }) });
     } catch (error) {
       this.databaseFailed(error);
@@ -147,7 +160,7 @@ export class Station {
       case 'ask':
         return this.ask(effect);
       case 'start-run':
-        return this.background(this.run(effect.plan, effect.check));
+        return this.background(this.run(effect));
       case 'run-event':
         return this.performer?.tell(effect.event);
       case 'start-commissioning':
@@ -175,13 +188,14 @@ export class Station {
     }
   }
 
-  private async run(plan: RunPlan, check: ReferenceCheck | null): Promise<void> {
+  private async run({ plan, check, engineering }: Extract<BenchEffect, { kind: 'start-run' }>): Promise<void> {
     const { ports, clock, watchdogMs, binCode, onReading, onProblem } = this.options;
     this.running = true;
     const { ending, view, stored } = await this.inTurn(() =>
       performRun({
         plan,
         check,
+        engineering,
         bench: this.keeper.bench,
         clock,
         watchdogMs,
@@ -247,13 +261,15 @@ export class Station {
     return result;
   }
 
-  private place(): BenchPlace {
-    const { operator, lot, last } = this.state;
+  /** Who works here on what. */
+  place(): BenchPlace {
+    const { operator, lot, last, trial } = this.state;
     return {
       accountId: operator?.accountId ?? null,
       sessionId: operator?.sessionId ?? null,
       lotId: lot?.lotId ?? null,
-      serial: last?.verdict === 'pass' ? last.serial : null,
+      offerId: trial?.offer.offerId ?? null,
+      serial: !trial && last?.verdict === 'pass' ? last.serial : null,
     };
   }
 

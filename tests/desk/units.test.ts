@@ -108,10 +108,10 @@ describe('the page of a board', () => {
       .split('\r\n');
     expect(lines).toHaveLength(1 + 2 * 3);
     expect(lines.slice(0, 2)).toEqual([
-      'serial,attempt,part,seconds,volts,output',
-      `${unit.serial},1,find-points,0.000,12.00000,on`,
+      'serial,run,attempt,part,seconds,volts,output',
+      `${unit.serial},production,1,find-points,0.000,12.00000,on`,
     ]);
-    expect(lines.at(-1)).toBe(`${unit.serial},2,find-points,0.900,10.20000,off`);
+    expect(lines.at(-1)).toBe(`${unit.serial},production,2,find-points,0.900,10.20000,off`);
   });
 });
 

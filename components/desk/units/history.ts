@@ -27,10 +27,11 @@ function endText(run: UnitRun): string {
 export function historyOf(unit: UnitPage): HistoryEntry[] {
   const entries: HistoryEntry[] = [];
   for (const run of unit.runs) {
+    const lead = run.kind === 'engineering' ? 'Engineering run. ' : '';
     entries.push({
       key: `${run.id} start`,
       iso: run.startedIso,
-      text: `Scanned at station ${run.stationCode}, sequence ${run.sequenceRevision}`,
+      text: `${lead}Scanned at station ${run.stationCode}, sequence ${run.sequenceRevision}`,
     });
     run.adjustments.forEach((adjustment, i) =>
       entries.push({
@@ -39,7 +40,7 @@ export function historyOf(unit: UnitPage): HistoryEntry[] {
         text: adjustmentText(adjustment),
       }),
     );
-    if (run.endedIso) entries.push({ key: `${run.id} end`, iso: run.endedIso, text: endText(run) });
+    if (run.endedIso) entries.push({ key: `${run.id} end`, iso: run.endedIso, text: lead + endText(run) });
     if (run.binScannedIso)
       entries.push({ key: `${run.id} bin`, iso: run.binScannedIso, text: `Put in bin ${run.binCode ?? ''}` });
   }

@@ -1,4 +1,5 @@
 import { TraceChart } from '@/components/charts/trace-chart';
+import { TrialMark } from '@/components/ui/trial-mark';
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import type { UnitRun } from '@/lib/contracts/unit-page';
 import { volts } from '../numbers';
@@ -14,13 +15,19 @@ const shapes = { pass: 'pass', reject: 'reject', 'no-verdict': 'check' } as cons
 export function RunBlock({ run, mostSeconds }: { run: UnitRun; mostSeconds: number }) {
   const last = (quantity: string) => run.measurements.findLast((m) => m.quantity === quantity)?.value ?? null;
   const [trip, release] = [last('trip-volts'), last('release-volts')];
+  const engineering = run.kind === 'engineering';
   return (
     <section
       className="border-t-2 border-ink pt-3 pb-6 first:border-0 first:pt-0"
-      aria-label={`Attempt ${run.attempt}`}
+      aria-label={engineering ? `Engineering run ${run.attempt}` : `Attempt ${run.attempt}`}
     >
+      {engineering ? (
+        <p className="mb-1 inline-flex items-center gap-2 border-2 border-dashed border-ink px-2 py-0.5 font-bold">
+          <TrialMark size={18} /> Engineering run {run.attempt}. Not production.
+        </p>
+      ) : null}
       <h2 className="flex flex-wrap items-center gap-x-4 gap-y-1">
-        <span className="text-lead font-bold">{run.attempt}</span>
+        {engineering ? null : <span className="text-lead font-bold">{run.attempt}</span>}
         {run.verdict ? (
           <span className={`inline-flex items-center gap-2 text-lead font-bold ${tones[run.verdict]}`}>
             <VerdictMark shape={shapes[run.verdict]} size={20} />
@@ -34,7 +41,6 @@ export function RunBlock({ run, mostSeconds }: { run: UnitRun; mostSeconds: numb
           {run.sequenceRevision}
           {run.seconds === null ? '' : `, ${Math.round(run.seconds)} s`}, operator{' '}
           {run.operatorNumber ?? run.operatorName}
-          {run.kind === 'engineering' ? ', engineering run' : ''}
         </span>
       </h2>
       <RunNotes run={run} />
@@ -80,7 +86,7 @@ function RunNotes({ run }: { run: UnitRun }) {
         <p>
           <b>{rejectWords[rejectReason]}.</b>
           {likelyCause ? ` Likely: ${causeWords[likelyCause]}.` : ''}
-          {run.binCode ? '' : ' The red bin was not scanned.'}
+          {run.binCode || run.kind === 'engineering' ? '' : ' The red bin was not scanned.'}
         </p>
       ) : null}
       {noVerdictReason ? (

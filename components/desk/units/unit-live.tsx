@@ -27,7 +27,9 @@ interface UnitLiveProps {
 
 const refreshMs = 2_500;
 const moves = (unit: UnitPage) =>
-  unit.standing.kind === 'in-test' || unit.labels[0]?.state === 'waiting' || unit.labels[0]?.state === 'failed';
+  unit.runs.some((run) => run.verdict === null) ||
+  unit.labels[0]?.state === 'waiting' ||
+  unit.labels[0]?.state === 'failed';
 
 /** Everything on record of one board; fetched again while it is in test or its label is on the way. */
 export function UnitLive({ initial, signer, may, actions }: UnitLiveProps) {
@@ -154,7 +156,8 @@ function Runs({ unit }: { unit: UnitPage }) {
 
 function Standing({ unit }: { unit: UnitPage }) {
   const { kind } = unit.standing;
-  const decided = unit.runs.find((run) => run.verdict === 'pass' || run.verdict === 'reject');
+  const production = unit.runs.filter((run) => run.kind === 'production');
+  const decided = production.find((run) => run.verdict === 'pass' || run.verdict === 'reject');
   const shape: VerdictShape | null =
     kind === 'passed'
       ? 'pass'
@@ -169,7 +172,7 @@ function Standing({ unit }: { unit: UnitPage }) {
       ? `Passed on attempt ${decided?.attempt ?? 1}`
       : kind === 'needs-disposition'
         ? 'Rejected, needs a decision'
-        : kind === 'may-be-tested' && unit.runs.length > 0
+        : kind === 'may-be-tested' && production.length > 0
           ? 'To be tested again'
           : standingWords[kind];
   return (
@@ -182,6 +185,7 @@ function Standing({ unit }: { unit: UnitPage }) {
 
 function UncertaintyNote({ unit }: { unit: UnitPage }) {
   const measured = unit.runs
+    .filter((run) => run.kind === 'production')
     .flatMap((run) => run.measurements)
     .find((m) => m.quantity === 'trip-volts' && m.phase === 'verified' && m.expandedUncertainty !== null);
   if (!measured?.expandedUncertainty) return null;

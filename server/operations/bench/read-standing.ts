@@ -1,4 +1,6 @@
 import type { Database } from '@/db/client';
+import { findAccount } from '@/db/queries/accounts';
+import { findOpenOffer, type OpenOffer } from '@/db/queries/engineering-offers';
 import { findRunAwaitingBin, findNewestLabel } from '@/db/queries/runs-bench';
 import { listOpenSessions } from '@/db/queries/sessions';
 import { listBenches, type BenchRow } from '@/db/queries/station-benches';
@@ -6,10 +8,12 @@ import { findStationCall } from '@/db/queries/station-calls';
 import { findBenchLot, type BenchLot } from '@/db/queries/station-lots';
 import { readStationFacts } from '@/db/queries/station-readiness';
 import { listOpenRuns } from '@/db/queries/runs-open';
+import { mayDo } from '@/lib/access/permissions';
 import type { BenchPlace, PendingBin, Standing } from '@/lib/bench/types';
 import { linkHasController } from '@/lib/contracts/station-link';
 import { admitStation } from '@/lib/run/admit-station';
 import { readLotStrip } from '../runs/lot-strip';
+import { nextRunOf, trialOfferOf } from './next-run';
 
 /** Where a station stands: what must hold before it may test, its lot, its call, its label and a bin that waits. */
 export async function readStanding(
@@ -18,20 +22,25 @@ export async function readStanding(
   who: BenchPlace,
 ): Promise<{ standing: Standing; pendingBin: PendingBin | null }> {
   const lot = who.lotId ? await findBenchLot(db, { lotId: who.lotId }) : null;
+  const offer = await findOpenOffer(db, bench.id);
+  const trial = offer && offer.id === who.offerId ? offer : null;
   const [admission, sessions, strip, call, label, awaiting] = await Promise.all([
-    admitBench(db, bench, who.accountId, lot),
+    trial ? admitTrial(db, bench, who.accountId, trial) : admitBench(db, bench, who.accountId, lot),
     who.sessionId ? listOpenSessions(db, [who.sessionId]) : [],
     lot ? readLotStrip(db, lot) : null,
     findStationCall(db, bench.id),
     who.serial ? findNewestLabel(db, who.serial) : null,
     findRunAwaitingBin(db, bench.id),
   ]);
-  const otherStation = admission.reasons.length > 0 ? await findFreeStation(db, bench, who.accountId, lot) : null;
+  const otherStation =
+    admission.reasons.length > 0 && !trial ? await findFreeStation(db, bench, who.accountId, lot) : null;
   const standing: Standing = {
     ...admission,
     otherStation,
     signedIn: sessions.length > 0,
     lot: strip,
+    next: lot && nextRunOf(lot),
+    offer: offer && trialOfferOf(offer),
     call: call && { sinceIso: call.at.toISOString(), acknowledgedBy: call.acknowledgedByName },
     label: label && { serial: who.serial!, state: label.state, problem: label.problem },
   };
@@ -43,7 +52,7 @@ export async function admitBench(
   db: Database,
   bench: BenchRow,
   accountId: string | null,
-  lot: BenchLot | null,
+  lot: Pick<BenchLot, 'boardTypeId' | 'sequence'> | null,
 ): Promise<Pick<Standing, 'readiness' | 'reasons'>> {
   const facts = await readStationFacts(db, bench, { accountId, boardTypeId: lot?.boardTypeId ?? null });
   const { readiness, reasons } = admitStation({
@@ -57,6 +66,18 @@ export async function admitBench(
     sequence: lot?.sequence ?? null,
   });
   return { readiness: readiness.filter(({ key }) => key !== 'links' && key !== 'database'), reasons };
+}
+
+/** As for production, but whoever may make engineering runs needs no training for the board type. */
+export async function admitTrial(
+  db: Database,
+  bench: BenchRow,
+  accountId: string | null,
+  offer: OpenOffer,
+): Promise<Pick<Standing, 'readiness' | 'reasons'>> {
+  const account = accountId ? await findAccount(db, accountId) : null;
+  const isEngineer = account !== null && mayDo(account.roles, 'make-engineering-runs');
+  return admitBench(db, bench, isEngineer ? null : accountId, offer);
 }
 
 /** Another station that could take the lot now: nothing runs there and nothing forbids it. */

@@ -34,7 +34,7 @@ export async function answerPin(
   const { accountId, sessionId, operatorNumber, locale, roles } = signedIn.value;
   const [lots, { standing }] = await Promise.all([
     listOpenLots(db),
-    readStanding(db, bench, { accountId, sessionId, lotId: null, serial: null }),
+    readStanding(db, bench, { accountId, sessionId, lotId: null, offerId: null, serial: null }),
   ]);
   const operator = {
     accountId,

@@ -4,9 +4,8 @@ import { findBenchLot } from '@/db/queries/station-lots';
 import { say } from '@/lib/bench/sayings';
 import type { BenchAnswerTo, BenchAsk, BenchPlace, BenchRefusal } from '@/lib/bench/types';
 import type { Say } from '@/lib/contracts/bench-view';
-import { printedRails } from '@/lib/run/rails';
-import { groupsOf } from '@/lib/run/view';
 import { readLotStrip } from '../runs/lot-strip';
+import { nextRunOf } from './next-run';
 import { readStanding } from './read-standing';
 
 /** A lot sheet was scanned or a lot chosen: the bench works on it from now on. */
@@ -24,8 +23,7 @@ export async function takeLot(
   if (lot.state !== 'open') return refuse(say('lot-not-open', { lot: lot.code }));
   const [strip, { standing }] = await Promise.all([
     readLotStrip(db, lot),
-    readStanding(db, bench, { ...who, lotId: lot.lotId }),
+    readStanding(db, bench, { ...who, lotId: lot.lotId, offerId: null }),
   ]);
-  const next = { stepGroups: groupsOf(lot.sequence), rails: printedRails(lot.boardType, lot.sequence) };
-  return { ok: true, kind: 'lot', value: { lot: strip, next, standing } };
+  return { ok: true, kind: 'lot', value: { lot: strip, next: nextRunOf(lot), standing } };
 }

@@ -1,6 +1,8 @@
 import type { Database } from '@/db/client';
 import { listOpenCalls, type OpenCall } from '@/db/queries/engineering-calls';
+import { listOpenOffers, type OpenOffer } from '@/db/queries/engineering-offers';
 import {
+  listLotsOfStations,
   listNewestRunsOfStations,
   listSignedInOperators,
   type NewestRun,
@@ -9,7 +11,12 @@ import {
 import { listBenches, type BenchRow } from '@/db/queries/station-benches';
 import { findBenchLot } from '@/db/queries/station-lots';
 import type { Say } from '@/lib/contracts/bench-view';
-import { stationStates, type StationRow, type StationsOverview } from '@/lib/contracts/station-overview';
+import {
+  stationStates,
+  type StationOffer,
+  type StationRow,
+  type StationsOverview,
+} from '@/lib/contracts/station-overview';
 import { database } from '@/server/postgres';
 import { admitBench } from '../bench/read-standing';
 import { readLotStrip } from '../runs/lot-strip';
@@ -18,6 +25,8 @@ interface Seen {
   run: NewestRun | undefined;
   call: OpenCall | undefined;
   operator: SignedInOperator | undefined;
+  lotId: string | undefined;
+  offer: OpenOffer | undefined;
 }
 
 /** Every station in use, most urgent first. */
@@ -31,26 +40,30 @@ export async function readStationsOverview(now = new Date()): Promise<StationsOv
   return { atIso: now.toISOString(), stations };
 }
 
-/** Runs, calls and operators of all stations, looked up once. */
+/** Runs, calls, operators, lots and offers of all stations, looked up once. */
 export async function seeStations(db: Database): Promise<(bench: BenchRow) => Seen> {
-  const [runs, calls, operators] = await Promise.all([
+  const [runs, calls, operators, lots, offers] = await Promise.all([
     listNewestRunsOfStations(db),
     listOpenCalls(db),
     listSignedInOperators(db),
+    listLotsOfStations(db),
+    listOpenOffers(db),
   ]);
   return (bench) => ({
     run: runs.find((run) => run.stationId === bench.id),
     call: calls.find((call) => call.stationCode === bench.code),
     operator: operators.find((operator) => operator.stationId === bench.id),
+    lotId: lots.get(bench.id),
+    offer: offers.find((offer) => offer.stationId === bench.id),
   });
 }
 
 export async function readStationRow(
   db: Database,
   bench: BenchRow,
-  { run, call, operator }: Seen,
+  { run, call, operator, lotId, offer }: Seen,
 ): Promise<StationRow> {
-  const lot = run?.lotId ? await findBenchLot(db, { lotId: run.lotId }) : null;
+  const lot = lotId ? await findBenchLot(db, { lotId }) : null;
   const [{ reasons }, strip] = await Promise.all([
     admitBench(db, bench, null, null),
     lot ? readLotStrip(db, lot) : null,
@@ -72,7 +85,15 @@ export async function readStationRow(
     operatorNumber: testing ? run.operatorNumber : (operator?.operatorNumber ?? null),
     lot: strip,
     call: call ? { id: call.id, sinceIso: call.at.toISOString() } : null,
+    engineering: testing && run.kind === 'engineering',
+    offer: offer ? stationOfferOf(offer) : null,
   };
+}
+
+function stationOfferOf(offer: OpenOffer): StationOffer {
+  const { id, revisionNumber, sequenceName, boardTypeCode, note, offeredByName, offeredAt } = offer;
+  const sinceIso = offeredAt.toISOString();
+  return { id, revisionNumber, sequenceName, boardTypeCode, note, offeredByName, sinceIso };
 }
 
 function stateOf({
@@ -82,7 +103,7 @@ function stateOf({
   reasons,
   waitsForBin,
   testing,
-}: Seen & { reasons: readonly Say[]; waitsForBin: boolean; testing: boolean }): {
+}: Pick<Seen, 'run' | 'call' | 'operator'> & { reasons: readonly Say[]; waitsForBin: boolean; testing: boolean }): {
   state: StationRow['state'];
   since: Date | null;
 } {

@@ -52,6 +52,6 @@ export async function openReferenceRun(
       plan,
     });
     const { referenceCode, tripVolts, releaseVolts, toleranceVolts } = check;
-    return { plan, check: { referenceCode, tripVolts, releaseVolts, toleranceVolts } };
+    return { plan, check: { referenceCode, tripVolts, releaseVolts, toleranceVolts }, engineering: false };
   });
 }

@@ -15,6 +15,7 @@ import { boardStanding } from '@/lib/decision/board-standing';
 import { admitBoard } from '@/lib/run/admit-board';
 import type { RunPlan } from '@/lib/run/types';
 import { admitBench } from '../bench/read-standing';
+import { openEngineeringRun } from './open-engineering-run';
 import { openReferenceRun } from './open-reference-run';
 import { planBoard } from './plan-run';
 
@@ -30,6 +31,7 @@ export const refuse = (refusal: Say): BenchRefusal => ({ ok: false, refusal });
 export async function openRun(db: Database, bench: BenchRow, ask: BoardAsk, who: BenchPlace): Promise<BoardAnswer> {
   const reference = await findReferenceBoard(db, ask.serial);
   if (reference) return openReferenceRun(db, bench, reference, who);
+  if (ask.offerId) return openEngineeringRun(db, bench, { ...ask, offerId: ask.offerId }, who);
   const [account, lot] = await Promise.all([
     who.accountId ? findAccount(db, who.accountId) : null,
     ask.lotId ? findBenchLot(db, { lotId: ask.lotId }) : null,
@@ -73,21 +75,25 @@ export async function openRun(db: Database, bench: BenchRow, ask: BoardAsk, who:
       plan,
     });
     if (admission.retestOrderId) await useRetestOrder(tx, admission.retestOrderId, plan.runId);
-    if (ask.byHand)
-      await insertTrail(
-        tx,
-        { accountId: account.id, stationId: bench.id },
-        { action: 'run.serial-by-hand', entity: 'run', entityId: plan.runId, after: { serial: ask.serial } },
-      );
-    return { plan, check: null };
+    if (ask.byHand) await trailSerialByHand(tx, plan, { accountId: account.id, stationId: bench.id });
+    return { plan, check: null, engineering: false };
   });
+}
+
+/** A serial that nobody scanned: who typed it is kept. */
+export async function trailSerialByHand(
+  tx: Transaction,
+  { runId, serial }: RunPlan,
+  who: { accountId: string; stationId: string },
+): Promise<void> {
+  await insertTrail(tx, who, { action: 'run.serial-by-hand', entity: 'run', entityId: runId, after: { serial } });
 }
 
 /** Opens a run in one transaction; a station or board that another run holds is refused, not an error. */
 export async function insertOpenRun(
   db: Database,
   serial: string,
-  open: (tx: Transaction) => Promise<{ plan: RunPlan; check: BenchAnswerTo<'board'>['value']['check'] }>,
+  open: (tx: Transaction) => Promise<BenchAnswerTo<'board'>['value']>,
 ): Promise<BoardAnswer> {
   try {
     return { ok: true, kind: 'board', value: await db.transaction(open) };

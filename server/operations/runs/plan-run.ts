@@ -16,7 +16,7 @@ import { lotPrior } from '@/lib/search/lot-prior';
 const meter = { gain: 45e-6 / Math.sqrt(3), offsetVolts: (6e-6 * 100) / Math.sqrt(3), resolutionVolts: 1e-4 };
 
 /** Boards of the lot whose found points shape where the search looks first. */
-const mostEarlierBoards = 60;
+export const mostEarlierBoards = 60;
 
 /** What every run of a station shares, whichever board is on it. */
 export function planBasis(bench: BenchRow, { overshoot, settleMs, waypointMs, noiseVolts }: Commissioning) {

@@ -8,9 +8,10 @@ import {
   listRunsOfUnit,
   listTraces,
 } from '@/db/queries/units';
-import type { UnitPage, UnitRun } from '@/lib/contracts/unit-page';
+import type { UnitPage } from '@/lib/contracts/unit-page';
 import { boardStanding } from '@/lib/decision/board-standing';
 import { database } from '@/server/postgres';
+import { unitRunOf } from './unit-run';
 
 /** Everything on record of one board, or null when there is none of that serial number. */
 export async function readUnitPage(serial: string): Promise<UnitPage | null> {
@@ -36,15 +37,7 @@ export async function readUnitPage(serial: string): Promise<UnitPage | null> {
     boardTypeCode: unit.boardTypeCode,
     boardTypeName: unit.boardTypeName,
     standing: boardStanding(record!),
-    runs: made.map((row) => ({
-      ...runOf(row),
-      measurements: measurements
-        .filter((measurement) => measurement.runId === row.run.id)
-        .map(({ runId: _runId, stepIndex: _stepIndex, ...measurement }) => measurement),
-      traces: traces
-        .filter((trace) => trace.runId === row.run.id)
-        .map(({ kind, atMs, volts, output }) => ({ kind, atMs, volts, output })),
-    })),
+    runs: made.map((row) => unitRunOf(row, measurements, traces)),
     labels: labels.map(({ createdAt, printedAt, ...label }) => ({
       ...label,
       createdIso: createdAt.toISOString(),
@@ -63,47 +56,5 @@ export async function readUnitPage(serial: string): Promise<UnitPage | null> {
     })),
     retestOrders: retestOrders.map(({ signedAt, ...order }) => ({ ...order, signedIso: signedAt.toISOString() })),
     label: passed ? await labelledPoints(db, passed.run.id) : null,
-  };
-}
-
-type MadeRun = Awaited<ReturnType<typeof listRunsOfUnit>>[number];
-
-function runOf({
-  run,
-  stationCode,
-  fixture,
-  operatorNumber,
-  operatorName,
-}: MadeRun): Omit<UnitRun, 'measurements' | 'traces'> {
-  return {
-    id: run.id,
-    kind: run.kind,
-    attempt: run.attempt,
-    startedIso: run.startedAt.toISOString(),
-    endedIso: run.endedAt?.toISOString() ?? null,
-    seconds: run.seconds,
-    verdict: run.verdict,
-    rejectReason: run.rejectReason,
-    likelyCause: run.likelyCause,
-    noVerdictReason: run.noVerdictReason,
-    faultCode: run.faultCode,
-    faultDetail: run.faultDetail,
-    failingWhenStopped: run.failingWhenStopped,
-    supplyOff:
-      run.supplyOffConfirmed === null
-        ? null
-        : { confirmed: run.supplyOffConfirmed, volts: run.supplyOffVolts, by: run.supplyOffBy },
-    closedBy: run.closedBy,
-    stationCode,
-    fixture,
-    operatorNumber,
-    operatorName,
-    sequenceRevision: run.plan.sequenceRevision,
-    trimRounds: run.trimRounds,
-    turnsAdvised: run.turnsAdvised,
-    binCode: run.binCode,
-    binScannedIso: run.binScannedAt?.toISOString() ?? null,
-    limits: run.plan.boardType?.limits ?? null,
-    adjustments: run.adjustments ?? [],
   };
 }

@@ -115,6 +115,8 @@ export const base: BenchView = {
   },
   next: { stepGroups: groups, rails: printed },
   run: null,
+  offer: null,
+  engineering: null,
   readiness: good,
   call: null,
   label: null,

@@ -2,6 +2,7 @@ import { advanceBench, beginBench } from '@/lib/bench/bench';
 import type { BenchAnswer, BenchEffect, BenchEvent, BenchState, RunEnding, Standing } from '@/lib/bench/types';
 import { viewBench } from '@/lib/bench/view';
 import type { BenchCommand } from '@/lib/contracts/bench-command';
+import type { TrialOffer } from '@/lib/contracts/bench-view';
 import type { RunPlan } from '@/lib/run/types';
 
 export const atIso = '2026-03-02T07:04:00.000Z';
@@ -12,6 +13,8 @@ export const standing: Standing = {
   otherStation: null,
   signedIn: true,
   lot: null,
+  next: null,
+  offer: null,
   call: null,
   label: null,
 };
@@ -54,8 +57,12 @@ export class BenchInTest {
     return this.tell({ kind: 'answered', id: this.state.asked!.id, answer });
   }
 
+  get view() {
+    return viewBench(this.state, null, 0);
+  }
+
   get screen() {
-    return viewBench(this.state, null, 0).screen;
+    return this.view.screen;
   }
 
   get refusal() {
@@ -88,9 +95,15 @@ export class BenchInTest {
     return this;
   }
 
+  startTrial(): this {
+    this.command({ kind: 'start-trial', offerId: offer.offerId });
+    this.answer(trialTaken);
+    return this;
+  }
+
   startRun(serial: string): this {
     this.scan(serial);
-    this.answer(admitted(serial));
+    this.answer(admitted(serial, this.state.trial !== null));
     return this;
   }
 
@@ -130,11 +143,26 @@ export const lotTaken: BenchAnswer = {
   },
 };
 
-export const admitted = (serial: string): BenchAnswer => ({
+export const admitted = (serial: string, engineering = false): BenchAnswer => ({
   ok: true,
   kind: 'board',
-  value: { plan: { serial } as RunPlan, check: null },
+  value: { plan: { serial } as RunPlan, check: null, engineering },
 });
+
+export const offer: TrialOffer = {
+  offerId: '0c7d2f5e-6f0a-4a57-9d55-2b8c5b7f1a01',
+  offeredBy: 'T. Marsden',
+  revision: 'r7',
+  sequenceName: 'CB1210 cutoff trim',
+  boardTypeCode: 'CB1210',
+  note: '',
+};
+
+export const trialTaken: BenchAnswer = {
+  ok: true,
+  kind: 'offer',
+  value: { offer, next: { stepGroups: ['seat'], rails: {} as never }, standing: { ...standing, offer } },
+};
 
 export const passed: RunEnding = {
   verdict: 'pass',

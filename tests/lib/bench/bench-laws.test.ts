@@ -1,7 +1,17 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import type { BenchCommand } from '@/lib/contracts/bench-command';
-import { admitted, BenchInTest, lotTaken, passed, rejected, signedIn, standing } from './bench-in-test';
+import {
+  admitted,
+  BenchInTest,
+  lotTaken,
+  offer,
+  passed,
+  rejected,
+  signedIn,
+  standing,
+  trialTaken,
+} from './bench-in-test';
 
 const serials = ['CB1210261000001', 'CB1210261000002', 'CB1210261000003'];
 
@@ -16,6 +26,9 @@ const commands: fc.Arbitrary<BenchCommand> = fc.oneof(
     { kind: 'end-shift' },
     { kind: 'stop' },
     { kind: 'leave-lot' },
+    { kind: 'start-trial', offerId: offer.offerId },
+    { kind: 'leave-trial' },
+    { kind: 'end-trial' },
     { kind: 'confirm', what: 'fixture-empty' },
     { kind: 'serial-by-hand', serial: serials[0]!, again: serials[0]! },
   ),
@@ -52,7 +65,7 @@ const acts: fc.Arbitrary<Act> = fc.oneof(
     arbitrary: fc.constantFrom('pass', 'reject', 'no-verdict').map((verdict): Act => (bench) => {
       if (bench.state.phase.kind !== 'run') return;
       const { serial } = bench.state.phase;
-      if (verdict === 'reject') bench.endRun(rejected(serial));
+      if (verdict === 'reject') bench.endRun(bench.state.trial ? { verdict } : rejected(serial));
       else
         bench.endRun(verdict === 'pass' ? passed : { ...passed, verdict: 'no-verdict', noVerdictReason: 'link-lost' });
     }),
@@ -79,6 +92,14 @@ const acts: fc.Arbitrary<Act> = fc.oneof(
       (bench) => void bench.tell({ kind: 'standing', standing: { ...standing, signedIn: false } }),
     ),
   },
+  {
+    weight: 1,
+    arbitrary: fc.constantFrom(offer, null).map(
+      (open): Act =>
+        (bench) =>
+          void bench.tell({ kind: 'standing', standing: { ...standing, offer: open } }),
+    ),
+  },
 );
 
 function answerOpen(bench: BenchInTest, yes: boolean): void {
@@ -95,7 +116,11 @@ function answerOpen(bench: BenchInTest, yes: boolean): void {
     case 'lots':
       return void bench.answer({ ok: true, kind: 'lots', value: { lots: [] } });
     case 'board':
-      return void bench.answer(admitted(ask.serial));
+      return void bench.answer(admitted(ask.serial, ask.offerId !== null));
+    case 'offer':
+      return void bench.answer(trialTaken);
+    case 'end-offer':
+      return void bench.answer({ ok: true, kind: 'end-offer', value: null });
     case 'bin':
       return void bench.answer({ ok: true, kind: 'bin', value: { lot: null } });
     default:
@@ -119,6 +144,25 @@ test('whatever people do, a board is asked for only by someone signed in, with t
           expect(pendingBin).toBeNull();
           expect(fixture.seenEmpty || before.fixture.heldSerial === effect.ask.serial).toBe(true);
         }
+      }
+    }),
+    { numRuns: 400 },
+  );
+});
+
+test('whatever people do, a run is an engineering run exactly while the screen says so, and no lot stands beside it', () => {
+  fc.assert(
+    fc.property(fc.boolean(), fc.array(acts, { maxLength: 80 }), (hasController, sequence) => {
+      const bench = new BenchInTest(hasController).ready();
+      let engineering: boolean | null = null;
+      for (const act of sequence) {
+        bench.effects = [];
+        act(bench);
+        for (const effect of bench.effects) if (effect.kind === 'start-run') engineering = effect.engineering;
+        const { view, state } = bench;
+        if (state.phase.kind === 'run' || state.phase.kind === 'over')
+          expect(view.engineering !== null, state.phase.kind).toBe(engineering);
+        if (view.engineering) expect(view).toMatchObject({ lot: null, label: null, offer: null });
       }
     }),
     { numRuns: 400 },

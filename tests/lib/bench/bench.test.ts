@@ -176,7 +176,11 @@ test('a daily check shows its points, and leaving it leads back to the lots', ()
   const bench = ready().signIn().empty();
   bench.scan('REF-CB1210-1');
   const check = { referenceCode: 'REF-CB1210-1', tripVolts: 10.8, releaseVolts: 12.29, toleranceVolts: 0.02 };
-  bench.answer({ ok: true, kind: 'board', value: { plan: { serial: 'REF-CB1210-1' } as never, check } });
+  bench.answer({
+    ok: true,
+    kind: 'board',
+    value: { plan: { serial: 'REF-CB1210-1' } as never, check, engineering: false },
+  });
   bench.endRun({ reference: { passed: true, points: [], validUntilIso: '2026-03-02T19:04:00.000Z' } });
   expect(bench.screen).toMatchObject({ kind: 'daily-check', passed: true });
   expect(bench.command({ kind: 'continue' })).toMatchObject([{ kind: 'ask', ask: { kind: 'lots' } }]);

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { admitBoard, type BoardFacts } from '@/lib/run/admit-board';
+import { admitBoard, refuseTrialBoard, type BoardFacts, type TrialBoardFacts } from '@/lib/run/admit-board';
 import type { BoardStanding } from '@/lib/decision/board-standing';
 import { cb1210 } from '@/db/seed/board-types';
 
@@ -69,5 +69,43 @@ describe('a board is refused, with its reason', () => {
   });
   it('for its lot before its own record, since a held lot is not tested whatever the board', () => {
     expect(refusal({ lot: { ...lot, held: true } }, { kind: 'passed', at: '' })).toMatchObject({ code: 'lot-on-hold' });
+  });
+});
+
+it('a board on another fixture is refused there, though an engineering run is no part of its record', () => {
+  expect(refusal({ inTestAt: 'S2' })).toEqual({ code: 'board-in-test', params: { serial, station: 'S2' } });
+});
+
+describe('a board scanned in a trial', () => {
+  const trial = (over: Partial<TrialBoardFacts> = {}) =>
+    refuseTrialBoard({
+      serial,
+      offer: { boardTypeCode: 'CB1210', serialPattern: cb1210.serialPattern },
+      unit: { isOfType: true, standing: { kind: 'may-be-tested', retestOrderId: null } },
+      inTestAt: null,
+      ...over,
+    });
+
+  it('may be of a lot, or a spare one that belongs to none', () => {
+    expect(trial()).toBeNull();
+    expect(trial({ unit: null })).toBeNull();
+  });
+  it.each<BoardStanding>([
+    { kind: 'needs-disposition' },
+    { kind: 'attempts-used', most: 3 },
+    { kind: 'waits-for-quality', because: 'failing-when-stopped' },
+  ])('may be one that waits for a decision: $kind', (standing) => {
+    expect(trial({ unit: { isOfType: true, standing } })).toBeNull();
+  });
+  it.each<[string, Partial<TrialBoardFacts>]>([
+    ['board-passed', { unit: { isOfType: true, standing: { kind: 'passed', at: '2026-12-01T11:38:00Z' } } }],
+    ['board-scrapped', { unit: { isOfType: true, standing: { kind: 'scrapped' } } }],
+    ['board-returned', { unit: { isOfType: true, standing: { kind: 'returned' } } }],
+    ['board-used-as-is', { unit: { isOfType: true, standing: { kind: 'used-as-is' } } }],
+    ['serial-of-other-type', { unit: { isOfType: false, standing: { kind: 'may-be-tested', retestOrderId: null } } }],
+    ['serial-wrong-form', { serial: 'CB2420264800184', unit: null }],
+    ['board-in-test', { inTestAt: 'S2' }],
+  ])('is refused with its reason: %s', (code, over) => {
+    expect(trial(over)).toMatchObject({ code });
   });
 });

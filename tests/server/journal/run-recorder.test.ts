@@ -50,8 +50,8 @@ async function opened(): Promise<RunPlan> {
   const [operator] = await open.db.select().from(accounts).where(eq(accounts.operatorNumber, '14'));
   const [lot] = await open.db.select().from(lots).where(eq(lots.size, 240));
   const boards = await open.db.select().from(units).where(eq(units.lotId, lot!.id)).orderBy(units.position);
-  const who = { accountId: operator!.id, sessionId: null, lotId: lot!.id, serial: null };
-  const ask = { kind: 'board', serial: boards[used++]!.serial, lotId: lot!.id, byHand: false } as const;
+  const who = { accountId: operator!.id, sessionId: null, lotId: lot!.id, offerId: null, serial: null };
+  const ask = { kind: 'board', serial: boards[used++]!.serial, lotId: lot!.id, offerId: null, byHand: false } as const;
   const answer = await openRun(open.db, bench, ask, who);
   if (!answer.ok) throw new Error(answer.refusal.code);
   return answer.value.plan;

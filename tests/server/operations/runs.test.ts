@@ -34,7 +34,7 @@ beforeAll(async () => {
   benches = await listBenches(open.db);
   const [operator] = await open.db.select().from(accounts).where(eq(accounts.operatorNumber, '14'));
   [lot] = (await open.db.select().from(lots).where(eq(lots.size, 240))) as [typeof lot];
-  who = { accountId: operator!.id, sessionId: null, lotId: lot.id, serial: null };
+  who = { accountId: operator!.id, sessionId: null, lotId: lot.id, offerId: null, serial: null };
 });
 afterAll(() => open.close());
 
@@ -52,7 +52,7 @@ const begin = (bench: BenchRow, over: { serial?: string; lotId?: string } = {}) 
   openRun(
     open.db,
     bench,
-    { kind: 'board', serial: over.serial ?? serial, lotId: over.lotId ?? lot.id, byHand: false },
+    { kind: 'board', serial: over.serial ?? serial, lotId: over.lotId ?? lot.id, offerId: null, byHand: false },
     who,
   );
 
@@ -140,7 +140,7 @@ describe('opening a run', () => {
     const answer = await openRun(
       open.db,
       benches[0]!,
-      { kind: 'board', serial, lotId: lot.id, byHand: false },
+      { kind: 'board', serial, lotId: lot.id, offerId: null, byHand: false },
       { ...who, accountId: engineer!.id },
     );
     expect(answer).toMatchObject({ ok: false, refusal: { code: 'not-permitted' } });
@@ -151,7 +151,7 @@ describe('opening a run', () => {
     const answer = await openRun(
       open.db,
       benches[0]!,
-      { kind: 'board', serial, lotId: lot.id, byHand: false },
+      { kind: 'board', serial, lotId: lot.id, offerId: null, byHand: false },
       { ...who, accountId: untrained!.id },
     );
     expect(answer).toMatchObject({ ok: false, refusal: { code: 'training-ended' } });

@@ -1,4 +1,12 @@
-import type { BenchAnswer, BenchAsk, BenchPlace, PendingBin, ReferenceCheck, Standing } from '@/lib/bench/types';
+import type {
+  BenchAnswer,
+  BenchAsk,
+  BenchPlace,
+  NextRun,
+  PendingBin,
+  ReferenceCheck,
+  Standing,
+} from '@/lib/bench/types';
 import type { RunEvent, RunPlan, RunResult } from '@/lib/run/types';
 import type { RunLog, StationPorts } from '@/stations/run/ports';
 
@@ -16,8 +24,25 @@ const standing: Standing = {
   otherStation: null,
   signedIn: true,
   lot: null,
+  next: null,
+  offer: null,
   call: null,
   label: null,
+};
+
+const next: NextRun = {
+  stepGroups: [],
+  rails: {
+    scaleMinVolts: 9,
+    scaleMaxVolts: 13,
+    tripLimits: null,
+    releaseLimits: null,
+    guardVolts: null,
+    targetVolts: null,
+    flags: [],
+    travelled: { fallingOnToVolts: null, fallingOffToVolts: null, risingOffToVolts: null, risingOn: false },
+    hysteresisVolts: null,
+  },
 };
 
 /** A server that knows one operator, one lot and the plans it is given; keeps every run in memory. */
@@ -72,28 +97,28 @@ export class FakePorts implements StationPorts {
               rejected: 0,
               secondsEach: null,
             },
-            next: {
-              stepGroups: [],
-              rails: {
-                scaleMinVolts: 9,
-                scaleMaxVolts: 13,
-                tripLimits: null,
-                releaseLimits: null,
-                guardVolts: null,
-                targetVolts: null,
-                flags: [],
-                travelled: { fallingOnToVolts: null, fallingOffToVolts: null, risingOffToVolts: null, risingOn: false },
-                hysteresisVolts: null,
-              },
-            },
+            next,
             standing: this.standingNow,
           },
         };
       case 'board': {
         const plan = this.planOf(ask.serial, `run-${this.runs.length + 1}`);
         if (!plan) return { ok: false, refusal: { code: 'serial-unknown', params: { serial: ask.serial } } };
-        return { ok: true, kind: 'board', value: { plan, check: this.checkOf(ask.serial) } };
+        return {
+          ok: true,
+          kind: 'board',
+          value: { plan, check: this.checkOf(ask.serial), engineering: ask.offerId !== null },
+        };
       }
+      case 'offer':
+        if (this.standingNow.offer?.offerId !== ask.offerId) return { ok: false, refusal: { code: 'offer-ended' } };
+        return {
+          ok: true,
+          kind: 'offer',
+          value: { offer: this.standingNow.offer, next, standing: this.standingNow },
+        };
+      case 'end-offer':
+        return { ok: true, kind: 'end-offer', value: null };
       case 'bin':
         return { ok: true, kind: 'bin', value: { lot: null } };
       case 'lots':
