@@ -5,6 +5,7 @@ import { accounts } from '@/db/schema/accounts';
 import { printCode } from '@/lib/bench/scan-code';
 import { seedBenches } from './benches';
 import { seedLots } from './boxes';
+import { seedFinishedLot } from './finished-lot';
 import { demoAccounts, demoMailDomain } from './demo-accounts';
 import { seedPeople, seedTrainings } from './people';
 import { seedProducts } from './products';
@@ -34,6 +35,7 @@ export async function seedDemo(db: Database, now = new Date()): Promise<boolean>
     await seedTrainings(tx, people, Object.values(products.boardTypeIds), now);
     await seedBenches(tx, people, products, now);
     await seedLots(tx, people, products, now);
+    await seedFinishedLot(tx, people, products, now);
     await insertTrail(tx, null, { action: 'demo.seeded', entity: 'database', entityId: 'demo' });
     return true;
   });

@@ -1,7 +1,7 @@
 'use client';
 
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
-import { useRef } from 'react';
+import { useState } from 'react';
 import type { LotPage } from '@/lib/contracts/lot-page';
 import type { LotReview } from '@/lib/contracts/lot-review';
 import { lotViewQuery } from '@/lib/contracts/lot-view';
@@ -28,8 +28,8 @@ interface LotLiveProps {
 export function LotLive({ initial, initialReview, may, actions }: LotLiveProps) {
   const [view, changeView] = useLotView();
   const query = lotViewQuery(view);
-  const firstQuery = useRef(query);
-  const isFirst = query === firstQuery.current;
+  const [firstQuery] = useState(query);
+  const isFirst = query === firstQuery;
   const address = `/api/lots/${encodeURIComponent(initial.code)}`;
   const page = useQuery({
     queryKey: ['lot', initial.code, view.boards, view.sort, view.order, view.page],
@@ -42,11 +42,11 @@ export function LotLive({ initial, initialReview, may, actions }: LotLiveProps) 
   const { quantity, rules, interval, compare } = view;
   // The figures are computed again when a run ended, not every few seconds.
   const ended = `${lot.summary.marks} ${lot.summary.runsWithoutVerdict} ${lot.lastTestIso}`;
-  const firstEnded = useRef(ended);
+  const [firstEnded] = useState(ended);
   const review = useQuery({
     queryKey: ['lot-review', initial.code, quantity, rules.join(), interval, compare, ended],
     queryFn: ({ signal }) => fetchJson<LotReview>(`${address}/review?${query}`, signal),
-    initialData: isFirst && ended === firstEnded.current ? (initialReview ?? undefined) : undefined,
+    initialData: isFirst && ended === firstEnded ? (initialReview ?? undefined) : undefined,
     placeholderData: keepPreviousData,
     staleTime: Infinity,
   });
