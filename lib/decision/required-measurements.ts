@@ -1,38 +1,8 @@
-import type { Measurement } from '../run/types';
-import type { Sequence, Step } from '../sequence/step';
+import type { Sequence } from '../sequence/step';
+import { kindOf } from '../steps/step-kinds';
+import type { Required } from '../steps/step-kind';
 
-type Required = Pick<Measurement, 'quantity' | 'phase'>;
-
-const check = (...quantities: Measurement['quantity'][]): Required[] =>
-  quantities.map((quantity) => ({ quantity, phase: 'check' }));
-const verified = (...quantities: Measurement['quantity'][]): Required[] =>
-  quantities.map((quantity) => ({ quantity, phase: 'verified' }));
-
-function ofStep(step: Step): Required[] {
-  switch (step.kind) {
-    case 'seat':
-    case 'seal':
-      return check('contact-milliohms');
-    case 'power-up':
-      return check('supply-amps');
-    case 'reference':
-      return check('reference-volts');
-    case 'verify':
-      return verified(...(step.repeats > 1 ? (['trip-spread-volts'] as const) : []));
-    case 'output-levels':
-      return check('output-high-drop-volts', 'output-low-volts');
-    case 'quiescent-current':
-      return check('quiescent-amps');
-    case 'ride-through':
-      return check('ride-through-seconds');
-    case 'operator-check':
-      return check('operator-check');
-    case 'find-points':
-    case 'trim':
-    case 'record':
-      return [];
-  }
-}
+const points = ['trip-volts', 'release-volts', 'hysteresis-volts'] as const;
 
 /**
  * What must have been measured, and passed, before a board may pass this sequence, with the step it belongs to. Verified
@@ -40,9 +10,17 @@ function ofStep(step: Step): Required[] {
  */
 export function requiredMeasurements(sequence: Sequence): (Required & { stepIndex: number | null })[] {
   const verifying = sequence.steps.findLastIndex((step) => step.kind === 'verify');
-  const points = verified('trip-volts', 'release-volts', 'hysteresis-volts').map((required) => ({
-    ...required,
+  const verified = points.map((quantity) => ({
+    quantity,
+    phase: 'verified' as const,
     stepIndex: verifying < 0 ? null : verifying,
   }));
-  return [...sequence.steps.flatMap((step, stepIndex) => ofStep(step).map((r) => ({ ...r, stepIndex }))), ...points];
+  return [
+    ...sequence.steps.flatMap((step, stepIndex) =>
+      kindOf(step)
+        .required(step)
+        .map((each) => ({ ...each, stepIndex })),
+    ),
+    ...verified,
+  ];
 }

@@ -1,4 +1,4 @@
-import type { Step } from '../sequence/step';
+import type { AnyStep } from '../steps/step-common';
 import type { Ending } from '../decision/decide-verdict';
 import type { RunView, Say } from '../contracts/bench-view';
 import type { RunFacts } from './facts';
@@ -32,7 +32,7 @@ export interface Learned {
 export type StepTurn<M> = Learned & ({ machine: M; ask: Ask | null } | { done: true } | { ending: Ending });
 
 /** One kind of step: a small machine that never sees an event not meant for it. */
-export interface StepMachine<S extends Step, M> {
+export interface StepMachine<S extends AnyStep, M> {
   begin(step: S, context: StepContext): StepTurn<M>;
   advance(machine: M, event: StepEvent, step: S, context: StepContext): StepTurn<M>;
   view(machine: M, step: S, context: StepContext): RunView['screen'];

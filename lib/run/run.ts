@@ -1,3 +1,4 @@
+import { kindOf } from '../steps/step-kinds';
 import { decideVerdict, verdictOf, type Ending } from '../decision/decide-verdict';
 import { failingWhenStopped } from './failing-when-stopped';
 import { faultCodes } from './fault-codes';
@@ -6,7 +7,6 @@ import { interruptionBy } from './interruption';
 import { expectedUncertainty } from './rails';
 import type { Ask, StepContext, StepEvent, StepTurn } from './machine';
 import type { AnswerKind, RunState } from './state';
-import { machineOf } from './steps/step-machines';
 import type { RunEffect, RunEvent, RunPlan, RunResult } from './types';
 
 export type { RunState } from './state';
@@ -74,12 +74,12 @@ function contextOf({ plan, facts, stepIndex, atMs }: RunState): StepContext {
 function beginStep(state: RunState): Advance {
   const step = state.plan.sequence.steps[state.stepIndex];
   if (!step) return end(state, { kind: 'complete' }, state);
-  return takeTurn(state, machineOf(step).begin(step, contextOf(state)));
+  return takeTurn(state, kindOf(step).machine.begin(step, contextOf(state)));
 }
 
 function advanceStep(state: RunState, event: StepEvent): Advance {
   const step = state.plan.sequence.steps[state.stepIndex]!;
-  return takeTurn(state, machineOf(step).advance(state.machine, event, step, contextOf(state)));
+  return takeTurn(state, kindOf(step).machine.advance(state.machine, event, step, contextOf(state)));
 }
 
 function takeTurn(before: RunState, turn: StepTurn<unknown>): Advance {

@@ -1,15 +1,15 @@
 import type { RailsView, RunView, SupplyView } from '../contracts/bench-view';
 import type { BoardType } from '../contracts/board-type';
-import { stepGroupOf, stepGroups, type Sequence, type StepGroup } from '../sequence/step';
+import { kindOf } from '../steps/step-kinds';
+import { stepGroups, type Sequence, type StepGroup } from '../sequence/step';
 import type { SupplyFact } from './facts';
 import type { StepContext } from './machine';
 import { printedRails, railsOf } from './rails';
 import type { RunState } from './state';
-import { machineOf } from './steps/step-machines';
 
 /** The words of the step line that a sequence has, in their order. */
 export function groupsOf(sequence: Sequence): StepGroup[] {
-  const present = new Set(sequence.steps.map((step) => stepGroupOf[step.kind]));
+  const present = new Set(sequence.steps.map((step) => kindOf(step).group));
   return stepGroups.filter((group) => present.has(group));
 }
 
@@ -38,8 +38,8 @@ function stepLine({ plan, stepIndex, phase }: RunState): RunView['stepGroups'] {
   const current = steps[Math.min(stepIndex, steps.length - 1)];
   return groupsOf(plan.sequence).map((group) => {
     if (passed) return { group, state: 'done' };
-    if (current && stepGroupOf[current.kind] === group) return { group, state: 'current' };
-    const ahead = steps.some((step, index) => stepGroupOf[step.kind] === group && index > stepIndex);
+    if (current && kindOf(current).group === group) return { group, state: 'current' };
+    const ahead = steps.some((step, index) => kindOf(step).group === group && index > stepIndex);
     return { group, state: ahead ? 'ahead' : 'done' };
   });
 }
@@ -61,12 +61,13 @@ function supplyView(supply: SupplyFact): SupplyView {
   }
 }
 
-function screenOf(state: RunState): RunView['screen'] {
+/** The part of the view that asks something of a person. */
+export function screenOf(state: RunState): RunView['screen'] {
   const { phase, plan, stepIndex, facts, atMs } = state;
   if (phase.kind === 'steps') {
     const step = plan.sequence.steps[stepIndex]!;
     const context: StepContext = { plan, facts, stepIndex, atMs };
-    return machineOf(step).view(state.machine, step, context);
+    return kindOf(step).machine.view(state.machine, step, context);
   }
   const { decision } = phase;
   if ('verdict' in decision) return { kind: 'pass', seconds: (atMs - state.startedAtMs) / 1000 };

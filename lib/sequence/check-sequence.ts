@@ -1,107 +1,62 @@
 import type { BoardType } from '../contracts/board-type';
+import { usualStation } from '../prediction/types';
+import type { Equipment } from '../steps/step-kind';
+import { kindOf } from '../steps/step-kinds';
+import type { SequenceFinding } from './finding';
+import type { StationKind } from './station-kind';
 import type { Sequence, Step, StepKind } from './step';
 
-export const sequenceProblems = [
-  'seat-not-first',
-  'record-not-last',
-  'power-up-missing',
-  'verify-missing',
-  'find-missing',
-  'trim-not-verified',
-  'overvoltage-above-maximum',
-  'working-volts-too-low',
-  'working-volts-too-high',
-  'window-too-narrow',
-  'window-above-maximum',
-  'target-outside-limits',
-  'ride-through-not-between-points',
-  'ride-through-too-short',
-] as const;
-export type SequenceProblem = (typeof sequenceProblems)[number];
-
-/** `stepIndex` is null where a step is missing. */
-export interface SequenceFinding {
-  problem: SequenceProblem;
-  stepIndex: number | null;
-}
-
-/** Rise of the supply above a step from zero that must stay below the absolute maximum: the largest overshoot considered. */
-const largestOvershoot = 0.085;
-
-/** What keeps a sequence from being right for its board type; empty when it may be released. */
-export function checkSequence({ steps }: Sequence, boardType: BoardType): SequenceFinding[] {
-  return [...checkOrder(steps), ...steps.flatMap((step, index) => checkStep(step, index, boardType))];
+/** What keeps a sequence from being right for its board type, at the station given or the usual one; empty when it may be released. */
+export function checkSequence(
+  { steps, decisionRule }: Sequence,
+  boardType: BoardType,
+  station: StationKind = usualStation,
+): SequenceFinding[] {
+  const context = { boardType, station, decisionRule, steps };
+  return [...checkOrder(steps), ...steps.flatMap((step, index) => kindOf(step).rules(step, { ...context, index }))];
 }
 
 function checkOrder(steps: Step[]): SequenceFinding[] {
   const at = (kind: StepKind) => steps.findIndex((step) => step.kind === kind);
   const last = (kind: StepKind) => steps.findLastIndex((step) => step.kind === kind);
   const found: SequenceFinding[] = [];
-  const report = (bad: boolean, problem: SequenceProblem, stepIndex: number | null) => {
-    if (bad) found.push({ problem, stepIndex });
+  const report = (bad: boolean, problem: string, index: number, sentence: string) => {
+    const stepId = steps[index]?.id ?? null;
+    if (bad) found.push({ problem, severity: 'error', stepId, field: null, sentence, mend: null });
   };
-  report(at('seat') !== 0, 'seat-not-first', at('seat') < 0 ? null : at('seat'));
-  report(at('record') !== steps.length - 1, 'record-not-last', at('record') < 0 ? null : at('record'));
-  report(at('power-up') !== 1, 'power-up-missing', null);
-  report(at('verify') < 0, 'verify-missing', null);
+  report(at('seat') !== 0, 'seat-not-first', at('seat'), 'The sequence does not begin with seating the board.');
+  report(
+    at('record') !== steps.length - 1,
+    'record-not-last',
+    at('record'),
+    'The sequence does not end with the record.',
+  );
+  report(at('power-up') !== 1, 'power-up-missing', -1, 'The supply is not powered up after the board is seated.');
+  report(at('verify') < 0, 'verify-missing', -1, 'Nothing is verified, so no board can pass.');
   const trim = last('trim');
-  report(trim >= 0 && (at('find-points') < 0 || at('find-points') > trim), 'find-missing', trim);
+  const unfound = at('find-points') < 0 || at('find-points') > trim;
+  report(trim >= 0 && unfound, 'find-missing', trim, 'The trim has no points to start from.');
   const moved = Math.max(trim, last('seal'));
-  report(moved >= 0 && last('verify') < moved, 'trim-not-verified', moved);
+  report(
+    moved >= 0 && last('verify') < moved,
+    'trim-not-verified',
+    moved,
+    'Nothing is verified after the screw moved.',
+  );
   return found;
 }
 
-function checkStep(step: Step, stepIndex: number, boardType: BoardType): SequenceFinding[] {
-  const { limits, search, absoluteMaximumVolts } = boardType;
-  const failing = (problem: SequenceProblem, bad: boolean) => (bad ? [{ problem, stepIndex }] : []);
-  switch (step.kind) {
-    case 'power-up':
-      return [
-        ...failing('overvoltage-above-maximum', step.overvoltageVolts > absoluteMaximumVolts),
-        ...failing('working-volts-too-low', step.volts <= limits.releaseVolts.max),
-        ...failing(
-          'working-volts-too-high',
-          step.volts * (1 + largestOvershoot) > Math.min(step.overvoltageVolts, absoluteMaximumVolts),
-        ),
-      ];
-    case 'find-points':
-      return [
-        ...failing('window-above-maximum', step.windowMaxVolts > absoluteMaximumVolts),
-        ...failing(
-          'window-too-narrow',
-          step.windowMinVolts >= search.tripVolts.min || step.windowMaxVolts <= limits.releaseVolts.max,
-        ),
-      ];
-    case 'trim':
-      return failing(
-        'target-outside-limits',
-        step.targetVolts - step.toleranceVolts < limits.tripVolts.min ||
-          step.targetVolts + step.toleranceVolts > limits.tripVolts.max,
-      );
-    case 'ride-through':
-      return [
-        ...failing(
-          'ride-through-not-between-points',
-          step.atVolts <= limits.tripVolts.max || step.atVolts >= limits.releaseVolts.min,
-        ),
-        ...failing('ride-through-too-short', step.milliseconds / 1000 < limits.rideThroughSeconds.min),
-      ];
-    default:
-      return [];
-  }
-}
-
-export type MissingEquipment = 'fixture-controller' | 'wiper-probe';
+export type MissingEquipment = Equipment;
 
 /** What a station lacks for a sequence; empty when it has all. */
 export function missingEquipment(
-  { steps }: Sequence,
+  { steps }: Pick<Sequence, 'steps'>,
   station: { hasController: boolean; hasWiperProbe: boolean },
-): MissingEquipment[] {
-  const needsController = steps.some((step) => step.kind === 'ride-through');
-  const needsProbe = steps.some((step) => step.kind === 'trim' && step.procedure === 'wiper-probe');
-  return [
-    ...(needsController && !station.hasController ? (['fixture-controller'] as const) : []),
-    ...(needsProbe && !station.hasWiperProbe ? (['wiper-probe'] as const) : []),
-  ];
+): Equipment[] {
+  const needed = new Set(steps.flatMap((step) => kindOf(step).needs(step)));
+  const has: Record<Equipment, boolean> = {
+    'fixture-controller': station.hasController,
+    'wiper-probe': station.hasWiperProbe,
+  };
+  return (Object.keys(has) as Equipment[]).filter((each) => needed.has(each) && !has[each]);
 }

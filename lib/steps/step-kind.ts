@@ -5,6 +5,7 @@ import type { Measurement } from '../run/types';
 import type { SequenceFinding } from '../sequence/finding';
 import type { StationKind } from '../sequence/station-kind';
 import type { DecisionRule, Step, StepGroup } from '../sequence/step';
+import type { AnyStep } from './step-common';
 
 /** What a rule may look at beside its own step. */
 export interface RuleContext {
@@ -34,23 +35,25 @@ export interface SentenceField {
 }
 export type SentencePart = string | SentenceField;
 
+type WithoutTime<E> = E extends { atMs: number } ? Omit<E, 'atMs'> : never;
+
 /** What a person does while the step waits for one, and after how long. */
 export interface TypicalAct {
-  act: Act;
+  act: WithoutTime<Act>;
   afterMs: number;
 }
 
 /** Equipment a station needs for a step. */
 export type Equipment = 'fixture-controller' | 'wiper-probe';
 
-type Required = Pick<Measurement, 'quantity' | 'phase'>;
+export type Required = Pick<Measurement, 'quantity' | 'phase'>;
 
 /**
  * One kind of step: everything that the editor, the rules, the prediction and the station need of it. Each kind is one folder of
  * lib/steps; step-kinds.ts lists them.
  */
 // eslint-disable-next-line @typescript-eslint/no-explicit-any -- the state of a machine is its own affair.
-export interface StepKindDefinition<S extends Step = Step, M = any> {
+export interface StepKindDefinition<S extends AnyStep = Step, M = any> {
   kind: S['kind'];
   /** What it is called where the engineer gave no name: "Find points". */
   word: string;
@@ -61,7 +64,7 @@ export interface StepKindDefinition<S extends Step = Step, M = any> {
   /** A new one with values that suit the board type. */
   fresh(boardType: BoardType): Omit<S, 'id' | 'name' | 'enabled'>;
   rules(step: S, context: RuleContext): SequenceFinding[];
-  needs(step: S, boardType: BoardType): Equipment[];
+  needs(step: S): Equipment[];
   /** What must have been measured, and passed, before a board may pass. */
   required(step: S): Required[];
   machine: StepMachine<S, M>;

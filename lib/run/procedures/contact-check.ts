@@ -1,7 +1,7 @@
-import type { Step } from '../../sequence/step';
+import type { SeatStep } from '../../steps/seat/schema';
 import type { Answer, Ask, ProcedureTurn, StepContext } from '../machine';
 
-export type ContactSettings = Extract<Step, { kind: 'seat' }>['contactCheck'];
+export type ContactSettings = SeatStep['contactCheck'];
 
 export interface ContactCheck {
   settings: ContactSettings;

@@ -1,10 +1,10 @@
-import type { Step } from '../../sequence/step';
+import type { PowerUpStep } from '../../steps/power-up/schema';
 import { faultCodes } from '../fault-codes';
 import type { Answer, Ask, Learned, ProcedureTurn, StepContext } from '../machine';
 import type { Ending } from '../../decision/decide-verdict';
 import type { Measurement } from '../types';
 
-export type PowerUpSettings = Extract<Step, { kind: 'power-up' }>;
+export type PowerUpSettings = PowerUpStep;
 export interface PowerUp {
   settings: PowerUpSettings;
 }

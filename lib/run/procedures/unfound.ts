@@ -1,7 +1,7 @@
 import type { Ending } from '../../decision/decide-verdict';
 import type { SearchResult } from '../../search/types';
 import type { Answer, Learned, ProcedureTurn, StepContext } from '../machine';
-import { contactLost, contactMeasurement } from '../steps/contact';
+import { contactLost, contactMeasurement } from './contact-result';
 import type { Measurement } from '../types';
 import { advanceContactCheck, beginContactCheck, type ContactCheck } from './contact-check';
 

@@ -1,0 +1,14 @@
+import type { SequenceFinding } from '../sequence/finding';
+import type { AnyStep } from './step-common';
+
+type Told = Omit<SequenceFinding, 'stepId' | 'severity' | 'mend'> & Partial<Pick<SequenceFinding, 'mend'>>;
+
+/** A finding where `bad`, else nothing. */
+export function failing(
+  bad: boolean,
+  severity: SequenceFinding['severity'],
+  step: AnyStep,
+  told: Told,
+): SequenceFinding[] {
+  return bad ? [{ severity, stepId: step.id, mend: null, ...told }] : [];
+}
