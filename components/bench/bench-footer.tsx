@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { useBench } from './bench-context';
 import { LotFoot } from './lot-foot';
+import { TrialFoot } from './trial-foot';
 import { RefusalBand } from './refusal-band';
 import { WatcherNote } from './watcher-note';
 
@@ -21,6 +22,8 @@ export function BenchFooter({ note, ending, actions }: BenchFooterProps) {
       <div className="min-w-0 flex-1 max-[900px]:flex-none">
         {note ? (
           <p className="text-b-line text-ink-2">{note}</p>
+        ) : view.engineering ? (
+          <TrialFoot trial={view.engineering} />
         ) : (
           view.lot && <LotFoot lot={view.lot} ending={ending} />
         )}

@@ -3,6 +3,7 @@ import { Button } from '../../ui/button';
 import { Mark } from '../../ui/mark';
 import { SerialStrip } from '../../ui/serial-strip';
 import { useBench } from '../bench-context';
+import { EngineeringBand } from '../engineering-band';
 import { Fitted } from '../fitted';
 import type { Beep } from './flood-machine';
 import { FloodProgress } from './flood-progress';
@@ -17,11 +18,12 @@ export function BeepFlood({ beep }: { beep: Beep }) {
       data-flood={beep}
       className="absolute inset-0 z-20 flex flex-col bg-accent text-on-accent [&_.text-ink-2]:text-on-accent"
     >
+      <EngineeringBand />
       <div className="flex min-h-27 items-center gap-9 max-[900px]:gap-5 px-12 pt-9">
         <Mark size="calc(76 * var(--sw-b))" />
         {view.run && (
           <p className="text-b-serial leading-none max-[900px]:text-[calc(74*var(--sw-b))] [&_.text-ink-2]:text-[0.76em]">
-            <SerialStrip serial={view.run.serial} boardTypeCode={view.lot?.boardTypeCode} />
+            <SerialStrip serial={view.run.serial} boardTypeCode={(view.engineering ?? view.lot)?.boardTypeCode} />
           </p>
         )}
         <p className="ml-auto text-end max-[900px]:hidden text-b-label leading-[1.28]">

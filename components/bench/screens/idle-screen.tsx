@@ -9,9 +9,11 @@ import { BenchFooter } from '../bench-footer';
 import { SerialByHandDialog } from '../dialogs/serial-by-hand-dialog';
 import { Fitted } from '../fitted';
 import { LabelNote } from '../label-note';
+import { OfferPanel } from '../offer-panel';
 import { Panes } from '../panes';
 import { RailsPane } from '../rails-pane';
 import { BarsPicture, ScanFrame } from '../scan-frame';
+import { TrialActions } from '../trial-actions';
 import { useNumbers } from '../use-numbers';
 
 type IdleView = Extract<BenchView['screen'], { kind: 'idle' }>;
@@ -30,14 +32,18 @@ export function IdleScreen({ screen }: { screen: IdleView }) {
       <Panes left={<RailsPane inside={{ boardAbsent: true }} />}>
         <div className="flex h-full flex-col justify-between gap-5 px-16 pt-13 pb-9 pr-12">
           <Fitted as="h1" text={t('title')} most={182} width={1140} className="text-accent" />
-          <ScanFrame>
-            <BarsPicture x={148} y={16} width={846} height={160} />
-          </ScanFrame>
+          {!view.offer && (
+            <ScanFrame>
+              <BarsPicture x={148} y={16} width={846} height={160} />
+            </ScanFrame>
+          )}
           <div className="text-[calc(44*var(--sw-b))] leading-[1.3]">
             {view.lot && <p>{t.rich('anyBoard', { lot: view.lot.code, b: bold })}</p>}
+            {view.engineering && <p>{t.rich('anyOfType', { boardType: view.engineering.boardTypeCode, b: bold })}</p>}
             <p>{t(view.station.hasController ? 'closeLid' : 'confirmLid')}</p>
           </div>
           <div className="min-h-12 text-b-line text-ink-2">
+            {view.engineering?.note && <p className="mb-4 leading-snug">{view.engineering.note}</p>}
             {last && (
               <p className="flex items-center gap-6">
                 <VerdictMark shape={shapes[last.verdict]} size="calc(44 * var(--sw-b))" />
@@ -52,6 +58,7 @@ export function IdleScreen({ screen }: { screen: IdleView }) {
             )}
             <LabelNote onlyProblems />
           </div>
+          <OfferPanel />
         </div>
       </Panes>
       <BenchFooter
@@ -60,9 +67,13 @@ export function IdleScreen({ screen }: { screen: IdleView }) {
             <Button size="bench" onClick={() => setByHand(true)}>
               {t('byHand')}
             </Button>
-            <Button size="bench" onClick={() => send({ kind: 'end-shift' })}>
-              {t('endShift')}
-            </Button>
+            {view.engineering ? (
+              <TrialActions />
+            ) : (
+              <Button size="bench" onClick={() => send({ kind: 'end-shift' })}>
+                {t('endShift')}
+              </Button>
+            )}
           </>
         }
       />

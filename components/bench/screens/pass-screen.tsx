@@ -8,13 +8,14 @@ import { Fitted } from '../fitted';
 import { LabelNote } from '../label-note';
 import { Panes } from '../panes';
 import { RailsPane } from '../rails-pane';
+import { TrialActions } from '../trial-actions';
 import { useNumbers } from '../use-numbers';
 
 /** Pass is green on paper. Scanning the next board starts it. */
 export function PassScreen({ seconds }: { seconds: number }) {
   const t = useTranslations('bench.pass');
   const idle = useTranslations('bench.idle');
-  const { send } = useBench();
+  const { send, view } = useBench();
   const { whole } = useNumbers();
   const bold = (chunks: ReactNode) => <b className="font-num text-ink">{chunks}</b>;
   return (
@@ -29,7 +30,7 @@ export function PassScreen({ seconds }: { seconds: number }) {
             <Fitted as="h1" text={t('title')} most={264} width={690} className="!font-extrabold text-pass" />
             <p className="mt-10 text-b-next leading-[1.16] font-bold whitespace-pre-line">{t('next')}</p>
             <div className="mt-5 text-b-line text-ink-2">
-              <LabelNote />
+              {view.engineering ? <p>{t('noLabel')}</p> : <LabelNote />}
             </div>
           </div>
         </div>
@@ -37,14 +38,18 @@ export function PassScreen({ seconds }: { seconds: number }) {
       <BenchFooter
         ending={t.rich('thisOne', { seconds: whole(seconds), b: bold })}
         actions={
-          <>
-            <Button size="bench" onClick={() => send({ kind: 'end-shift' })}>
-              {idle('endShift')}
-            </Button>
-            <Button size="bench" onClick={() => send({ kind: 'print-label-again' })}>
-              {t('printAgain')}
-            </Button>
-          </>
+          view.engineering ? (
+            <TrialActions />
+          ) : (
+            <>
+              <Button size="bench" onClick={() => send({ kind: 'end-shift' })}>
+                {idle('endShift')}
+              </Button>
+              <Button size="bench" onClick={() => send({ kind: 'print-label-again' })}>
+                {t('printAgain')}
+              </Button>
+            </>
+          )
         }
       />
     </>

@@ -1,12 +1,14 @@
 import { useTranslations } from 'next-intl';
 import type { ReactNode } from 'react';
 import type { RunView } from '@/lib/contracts/bench-view';
+import { useBench } from '../bench-context';
 import { BenchFooter } from '../bench-footer';
 import { BinPicture } from '../bin-picture';
 import { CallButton } from '../call-button';
 import { Fitted } from '../fitted';
 import { Panes } from '../panes';
 import { RailsPane } from '../rails-pane';
+import { TrialActions } from '../trial-actions';
 import { useQuantity } from '../use-quantity';
 
 type RejectView = Extract<RunView['screen'], { kind: 'reject' }>;
@@ -15,6 +17,7 @@ type RejectView = Extract<RunView['screen'], { kind: 'reject' }>;
 export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode: string | null }) {
   const t = useTranslations('bench.reject');
   const words = useTranslations();
+  const { engineering } = useBench().view;
   const { measured, reason, cause } = screen;
   return (
     <>
@@ -36,8 +39,14 @@ export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode:
               </p>
               <ol className="mt-6 grid gap-4 border-t-4 border-on-flood pt-7 text-[calc(48*var(--sw-b))] leading-tight font-bold">
                 <li className="flex gap-9">
-                  <span>1</span>
-                  <Fitted text={t('putInBin')} most={48} width={660} as="span" className="!leading-tight" />
+                  {!engineering && <span>1</span>}
+                  <Fitted
+                    text={t(engineering ? 'keepApart' : 'putInBin')}
+                    most={48}
+                    width={660}
+                    as="span"
+                    className="!leading-tight"
+                  />
                 </li>
                 {binCode !== null && (
                   <li className="flex gap-9">
@@ -57,7 +66,15 @@ export function RejectScreen({ screen, binCode }: { screen: RejectView; binCode:
           </div>
         </div>
       </Panes>
-      <BenchFooter ending={binCode === null ? t('recording') : t('waitingForBin')} actions={<CallButton />} />
+      <BenchFooter
+        ending={binCode === null ? t('recording') : t('waitingForBin')}
+        actions={
+          <>
+            <CallButton />
+            {engineering && <TrialActions />}
+          </>
+        }
+      />
     </>
   );
 }

@@ -9,6 +9,7 @@ import { benchCatalogue, benchLocales } from '@/lib/messages/bench-locales';
 import { benchCommandSchema } from '@/lib/contracts/bench-command';
 import { standingFlood } from '@/tests/browser/gallery/standing-flood';
 import type { GalleryView } from '@/tests/browser/gallery/samples';
+import { trialOffer } from '@/tests/browser/gallery/trial-views';
 import { galleryViews } from '@/tests/browser/gallery/views';
 
 afterEach(cleanup);
@@ -46,7 +47,7 @@ describe.each(benchLocales)('every screen in $name', ({ locale }) => {
   it.each(Object.keys(galleryViews))('%s has all its texts', (name) => {
     const { problems } = show(name, {}, locale);
     expect(problems).toEqual([]);
-    expect(document.body.textContent).not.toMatch(/bench\.|say\.|run\./);
+    expect(document.body.textContent).not.toMatch(/\b(bench|say|run)\.[a-z]/);
   });
 });
 
@@ -67,6 +68,10 @@ describe('what a screen sends', () => {
     ['b2-pin', /another badge/i, { kind: 'another-badge' }],
     ['daily-check', /continue/i, { kind: 'continue' }],
     ['commissioning', /continue/i, { kind: 'continue' }],
+    ['offer-idle', /start the trial/i, { kind: 'start-trial', offerId: trialOffer.offerId }],
+    ['offer-choose-lot', /start the trial/i, { kind: 'start-trial', offerId: trialOffer.offerId }],
+    ['trial-pass', /leave the trial/i, { kind: 'leave-trial' }],
+    ['trial-reject', /end the offer/i, { kind: 'end-trial' }],
   ];
   it.each(presses)('%s: %s', (name, button, command) => {
     const { send } = show(name);
@@ -107,6 +112,14 @@ describe('what a screen sends', () => {
 });
 
 describe('what a screen may say', () => {
+  const inTrial = Object.keys(galleryViews).filter((name) => galleryViews[name]!.view.engineering);
+  it.each(inTrial)('%s says that it is no production', (name) => {
+    show(name);
+    expect(screen.getAllByText('Engineering run. Not production.').length).toBeGreaterThan(0);
+    expect(screen.queryByRole('button', { name: /print label again/i })).toBeNull();
+    expect(document.body.textContent).not.toMatch(/red bin|Lot 2648-B/);
+  });
+
   it('says that the supply is off only after the read-back', () => {
     show('05-fault');
     expect(document.body.textContent).toContain('Supply is off.');
