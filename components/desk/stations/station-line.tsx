@@ -5,6 +5,7 @@ import { useSay } from '@/components/bench/use-say';
 import { Button, ButtonLink } from '@/components/ui/button';
 import { LotRule } from '@/components/ui/lot-rule';
 import { SerialStrip } from '@/components/ui/serial-strip';
+import { TrialMark } from '@/components/ui/trial-mark';
 import type { StationRow } from '@/lib/contracts/station-overview';
 import { Waiting } from '../call-banner';
 import { count } from '../numbers';
@@ -37,9 +38,14 @@ export function StationLine({ station, onCome, busy }: StationLineProps) {
           {stationStateWords[state]}
         </h2>
         <StateReason station={station} />
+        <TrialNote station={station} />
       </div>
       <div className="min-w-0">
-        {serial ? (
+        {serial && station.engineering ? (
+          <span className="text-[20px]">
+            <SerialStrip serial={serial} />
+          </span>
+        ) : serial ? (
           <Link href={`/units/${encodeURIComponent(serial)}`} className="text-[20px] hover:text-accent">
             <SerialStrip serial={serial} boardTypeCode={lot?.boardTypeCode} />
           </Link>
@@ -97,6 +103,20 @@ export function StationLine({ station, onCome, busy }: StationLineProps) {
         )}
       </div>
     </li>
+  );
+}
+
+/** An engineering run is on it, or a draft waits there for somebody to try it. */
+export function TrialNote({ station: { engineering, offer } }: { station: StationRow }) {
+  if (!engineering && !offer) return null;
+  return (
+    <p className="mt-0.5 flex items-center gap-2">
+      <TrialMark size={18} />
+      <span>
+        {engineering ? <b>Engineering run, not production. </b> : null}
+        {offer ? `Draft r${offer.revisionNumber} of ${offer.sequenceName} on offer from ${offer.offeredByName}.` : ''}
+      </span>
+    </p>
   );
 }
 

@@ -19,6 +19,7 @@ import { StaleNote } from '../stale-note';
 import { Time } from '../time';
 import { DailyCheckForm } from './daily-check-form';
 import { Commissionings, DailyChecks } from './station-checks';
+import { TrialNote } from './station-line';
 import { stationStateWords } from './station-words';
 
 const refreshMs = 5_000;
@@ -49,6 +50,7 @@ export function StationLive({ initial, today, recordCheck }: StationLiveProps) {
         actions={<ButtonLink href={`/bench/${encodeURIComponent(station.code)}`}>Watch the bench</ButtonLink>}
       />
       <MayTest station={station} />
+      <TrialNote station={station} />
       <StaleNote updatedAt={query.dataUpdatedAt} failing={query.isError} />
       <div className="grid gap-x-12 lg:grid-cols-2">
         <Section title="What must hold">
