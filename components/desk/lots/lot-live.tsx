@@ -9,6 +9,7 @@ import { fetchJson } from '../fetch-json';
 import { StaleNote } from '../stale-note';
 import { LotBoardsSection } from './lot-boards-section';
 import { LotComponentsSection } from './lot-components-section';
+import { LotFiguresSection } from './lot-figures-section';
 import { LotHeadSection } from './lot-head-section';
 import { LotRejectsSection } from './lot-rejects-section';
 import { LotReviewSection } from './lot-review-section';
@@ -67,6 +68,7 @@ export function LotLive({ initial, initialReview, may, actions }: LotLiveProps) 
       {review.data ? <LotReviewSection {...section} review={review.data} /> : null}
       {lot.state !== 'closed' ? <StaleNote updatedAt={page.dataUpdatedAt} failing={page.isError} /> : null}
       <LotRejectsSection {...section} />
+      {review.data ? <LotFiguresSection {...section} review={review.data} /> : null}
       <LotComponentsSection {...section} />
       <LotBoardsSection {...section} />
     </>
