@@ -1,9 +1,11 @@
 import type { Access } from './access';
 import { benchSurface } from './surface/bench';
+import { dryRunsSurface } from './surface/dry-runs';
 import { engineeringSurface } from './surface/engineering';
 import { offersSurface } from './surface/offers';
 import { peopleSurface } from './surface/people';
 import { qualitySurface } from './surface/quality';
+import { sequencesSurface } from './surface/sequences';
 
 /** One area's share of everything that can be reached from outside. A test fails for anything found but not listed, and the reverse. */
 export interface Surface {
@@ -17,7 +19,15 @@ export interface Surface {
   events: Record<string, Access>;
 }
 
-const areas: Surface[] = [peopleSurface, benchSurface, engineeringSurface, offersSurface, qualitySurface];
+const areas: Surface[] = [
+  peopleSurface,
+  benchSurface,
+  engineeringSurface,
+  dryRunsSurface,
+  offersSurface,
+  qualitySurface,
+  sequencesSurface,
+];
 
 function merged(part: keyof Surface): Record<string, Access> {
   return Object.assign({}, ...areas.map((area) => area[part]));

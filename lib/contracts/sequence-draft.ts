@@ -107,6 +107,13 @@ export interface OtherEditor {
   stepId: string | null;
 }
 
+/** A tab that has the draft open says so, with the step that has the focus. */
+export const presenceSchema = z.object({
+  tabId: z.string().min(1).max(60),
+  stepId: z.string().max(40).nullable(),
+});
+export type Presence = z.infer<typeof presenceSchema>;
+
 /** What the editor opens with. */
 export interface DraftPage {
   sequenceId: string;
