@@ -1,0 +1,82 @@
+import type { RunFacts, Points } from '../run/facts';
+import type { BoardType } from '../contracts/board-type';
+import type { StationKind } from '../sequence/station-kind';
+import { firstOf } from '../sequence/enabled-steps';
+import type { Sequence, Step } from '../sequence/step';
+import type { PlayedStep, StepEntry } from './play-step';
+
+const mostRemembered = 600;
+
+/**
+ * Steps played before, by all that can change them: the step, what it looks up in others, and what it finds on the bench.
+ * One for each open draft; it forgets everything for another board type or station.
+ */
+export class StepMemo {
+  private of = '';
+  private readonly played = new Map<string, PlayedStep>();
+  private readonly texts = new WeakMap<object, string>();
+
+  /** To be called before a prediction. */
+  begin(boardType: BoardType, station: StationKind): void {
+    const of = this.textOf(boardType) + this.textOf(station);
+    if (of === this.of) return;
+    this.of = of;
+    this.played.clear();
+  }
+
+  play(step: Step, entry: StepEntry, play: () => PlayedStep): PlayedStep {
+    const key = this.keyOf(step, entry);
+    const known = this.played.get(key);
+    const result = known ?? play();
+    // Oldest use first, so that the first to go is the one not asked for longest.
+    this.played.delete(key);
+    this.played.set(key, result);
+    if (this.played.size > mostRemembered) this.played.delete(this.played.keys().next().value!);
+    return result;
+  }
+
+  private keyOf(step: Step, { plan, facts, bench }: StepEntry): string {
+    return [
+      this.textOf(step),
+      ...lookedUp(plan.sequence).map((other) => (other ? this.textOf(other) : '')),
+      this.textOf(plan.sequence.decisionRule),
+      JSON.stringify(bench),
+      factsText(facts),
+    ].join('|');
+  }
+
+  /** Drafts keep what they do not change, so a text is made once. */
+  private textOf(part: object): string {
+    const known = this.texts.get(part);
+    if (known !== undefined) return known;
+    const text = JSON.stringify(part);
+    this.texts.set(part, text);
+    return text;
+  }
+}
+
+/** Steps find their windows, the working supply and the contact check in these. */
+function lookedUp(sequence: Sequence): (Step | undefined)[] {
+  return (['seat', 'power-up', 'find-points'] as const).map((kind) => firstOf(sequence, kind));
+}
+
+function factsText({ supply, output, reference, found, trimmed, verified, measurements, ...facts }: RunFacts): string {
+  const points = (each: Points | null | undefined) =>
+    each &&
+    [each.trip, each.release].flatMap(({ volts, standardUncertaintyVolts }) => [volts, standardUncertaintyVolts]);
+  const newest = new Map(measurements.map((m) => [`${m.quantity}:${m.phase}`, [m.value.toFixed(2), m.passed]]));
+  return JSON.stringify([
+    facts.lidClosed,
+    facts.boardPresent,
+    facts.trimBegan,
+    facts.trimFailing,
+    facts.branchesTaken,
+    supply.state,
+    output,
+    reference,
+    points(found),
+    points(trimmed),
+    points(verified.at(-1)),
+    [...newest],
+  ]);
+}
