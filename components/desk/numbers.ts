@@ -19,7 +19,7 @@ export function inSpokenUnit(
       ? [1_000, 1, 'ms']
       : quantity.endsWith('-milliohms')
         ? [1, 0, '']
-        : quantity === 'trip-spread-volts'
+        : quantity === 'trip-spread-volts' || quantity === 'drift-volts'
           ? [1_000, 1, 'mV']
           : [1, 2, 'V'];
   return { text: rounded(value * scale, digits), unit, scale, digits };

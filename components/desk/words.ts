@@ -28,6 +28,8 @@ export const quantityWords: Record<Measurement['quantity'], string> = {
   'ride-through-seconds': 'Ride-through',
   'supply-amps': 'Supply current',
   'operator-check': 'Operator check',
+  'channel-volts': 'Channel',
+  'drift-volts': 'Drift',
 };
 
 export const standingWords: Record<BoardStanding['kind'], string> = {

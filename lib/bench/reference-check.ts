@@ -14,7 +14,7 @@ export function planReferenceCheck(
   { steps }: Sequence,
 ): Pick<RunPlan, 'boardType' | 'sequence'> {
   const around = (volts: number, tolerance: number) => ({ min: volts - tolerance, max: volts + tolerance });
-  const kept = (kind: Step['kind']) => steps.filter((step) => step.kind === kind).slice(0, 1);
+  const kept = (kind: Step['kind']) => steps.filter((step) => step.kind === kind && step.enabled).slice(0, 1);
   const verify = kept('verify').map((step) => ({ ...step, repeats: 1 }) as Step);
   return {
     boardType: {

@@ -21,7 +21,7 @@ export const benchCommandSchema = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('serial-by-hand'), serial, again: serial }),
   z.object({
     kind: z.literal('confirm'),
-    what: z.enum(['lid-and-board', 'lid-open', 'sealed', 'lid-closed', 'fixture-empty']),
+    what: z.enum(['lid-and-board', 'lid-open', 'sealed', 'lid-closed', 'instruction-done', 'fixture-empty']),
   }),
   z.object({ kind: z.literal('answer'), ok: z.boolean() }),
   z.object({ kind: z.literal('will-not-turn') }),

@@ -60,10 +60,13 @@ export interface RunView {
   startedAtMs: number;
   screen:
     | { kind: 'seat'; wants: 'close-lid' | 'place-board' | 'confirm-lid-and-board' | 'nothing' }
-    | { kind: 'measuring'; what: Say; done: number; of: number | null }
+    /** `everyMs`: time from one count to the next where it is fixed, so that what is left is known. */
+    | { kind: 'measuring'; what: Say; done: number; of: number | null; everyMs?: number }
     | { kind: 'trim'; trim: TrimView; clockwiseRaises: boolean }
     | { kind: 'seal'; wants: 'supply-off' | 'open-lid' | 'seal-screw' | 'close-lid' }
     | { kind: 'operator-check'; question: string }
+    /** `supplyOff`: the lid may be opened, once the supply is read back below 2 V. */
+    | { kind: 'instruction'; text: string; pictureId: string | null; supplyOff: boolean }
     | { kind: 'pass'; seconds: number }
     | {
         kind: 'reject';

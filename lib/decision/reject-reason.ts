@@ -14,6 +14,8 @@ const units: Record<Measurement['quantity'], string> = {
   'ride-through-seconds': 's',
   'supply-amps': 'A',
   'operator-check': '',
+  'channel-volts': 'V',
+  'drift-volts': 'V',
 };
 
 const reasons: Record<Measurement['quantity'], { low: RejectReason; high: RejectReason }> = {
@@ -30,6 +32,8 @@ const reasons: Record<Measurement['quantity'], { low: RejectReason; high: Reject
   'ride-through-seconds': { low: 'ride-through', high: 'ride-through' },
   'supply-amps': { low: 'supply-current-at-limit', high: 'supply-current-at-limit' },
   'operator-check': { low: 'operator-check-failed', high: 'operator-check-failed' },
+  'channel-volts': { low: 'channel-out-of-limits', high: 'channel-out-of-limits' },
+  'drift-volts': { low: 'drift-too-large', high: 'drift-too-large' },
 };
 
 /** Why a board with this failed measurement is rejected, and what to show: the specification's limit, not the guarded one. */

@@ -53,6 +53,8 @@ export interface RunFacts {
   turnsAdvised: number;
   /** Turns asked for, on the station's clock. */
   adjustments: readonly Adjustment[];
+  /** How often each branch went another way, by the id of its step. */
+  branchesTaken: Readonly<Record<string, number>>;
   measurements: Measurement[];
 }
 
@@ -71,8 +73,14 @@ export const noFacts: RunFacts = {
   trimRounds: 0,
   turnsAdvised: 0,
   adjustments: [],
+  branchesTaken: {},
   measurements: [],
 };
+
+/** The board's points as last measured; null before. */
+export function newestPoints({ verified, trimmed, found }: RunFacts): Points | null {
+  return verified.at(-1) ?? trimmed ?? found;
+}
 
 /** Supply as it must be taken to be once an effect is asked for: on from the asking, off only from the read-back. */
 export function factsAfterAsking(facts: RunFacts, effect: RunEffect): RunFacts {

@@ -1,4 +1,5 @@
 import type { BoardLimits } from '../contracts/board-type';
+import type { Sequence } from '../sequence/step';
 import type { Points } from './facts';
 import type { RunState } from './state';
 
@@ -10,9 +11,16 @@ export function failingWhenStopped({ facts, plan, stepIndex }: RunState): boolea
   if (facts.measurements.some((m) => m.passed === false) || facts.trimFailing) return true;
   const { limits } = plan.boardType;
   if (facts.verified.some((points) => isOutside(points, limits))) return true;
-  const trimAhead = plan.sequence.steps.some((step, index) => step.kind === 'trim' && index >= stepIndex);
   const last = facts.trimmed ?? facts.found;
-  return !trimAhead && last !== null && isOutside(last, limits);
+  return !trimIsAhead(plan.sequence, stepIndex) && last !== null && isOutside(last, limits);
+}
+
+/** A branch ahead may lead back to a trim. */
+function trimIsAhead({ steps }: Sequence, stepIndex: number): boolean {
+  const ahead = steps.filter((step, index) => step.enabled && index >= stepIndex);
+  const targets = ahead.flatMap((step) => (step.kind === 'branch' ? [step.goTo] : []));
+  const from = Math.min(stepIndex, ...steps.flatMap(({ id }, index) => (targets.includes(id) ? [index] : [])));
+  return steps.some((step, index) => step.enabled && step.kind === 'trim' && index >= from);
 }
 
 function isOutside({ trip, release }: Points, limits: BoardLimits): boolean {

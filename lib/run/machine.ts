@@ -28,8 +28,12 @@ export interface Learned {
   measurements?: Measurement[];
 }
 
-/** A step goes on, asking for something or (`ask` null) waiting for what it asked or for a person; or it has ended. */
-export type StepTurn<M> = Learned & ({ machine: M; ask: Ask | null } | { done: true } | { ending: Ending });
+/**
+ * A step goes on, asking for something or (`ask` null) waiting for what it asked or for a person; or it has ended. `goTo` is the
+ * id of the step that follows where it is not the next one.
+ */
+export type StepTurn<M> = Learned &
+  ({ machine: M; ask: Ask | null } | { done: true; goTo?: string } | { ending: Ending });
 
 /** One kind of step: a small machine that never sees an event not meant for it. */
 export interface StepMachine<S extends AnyStep, M> {

@@ -1,6 +1,7 @@
 import type { RailFlag, RailsView } from '../contracts/bench-view';
 import type { BoardType } from '../contracts/board-type';
 import { drawIn, guardBandOf } from '../decision/judge-value';
+import { firstOf } from '../sequence/enabled-steps';
 import type { Sequence } from '../sequence/step';
 import { combineContributions } from '../uncertainty/combine';
 import { pointBudget } from '../uncertainty/point-budget';
@@ -14,14 +15,13 @@ const roundToHalf = (volts: number) => Math.round(volts * 2) / 2;
 
 /** What is printed beside the rails before anything is measured. */
 export function printedRails({ limits }: BoardType, sequence: Sequence): RailsView {
-  const trimStep = sequence.steps.find((step) => step.kind === 'trim');
   return {
     scaleMinVolts: roundToHalf(limits.tripVolts.min - marginVolts),
     scaleMaxVolts: roundToHalf(limits.releaseVolts.max + marginVolts),
     tripLimits: limits.tripVolts,
     releaseLimits: limits.releaseVolts,
     guardVolts: null,
-    targetVolts: trimStep?.kind === 'trim' ? trimStep.targetVolts : null,
+    targetVolts: firstOf(sequence, 'trim')?.targetVolts ?? null,
     flags: [],
     travelled: noTravel,
     hysteresisVolts: null,
@@ -75,8 +75,8 @@ function guardsOf(plan: RunPlan, facts: RunFacts, expected: PointUncertainty): R
 
 /** U of the points when verified as the sequence asks, where the repeats agree as well as each search does. Volts. */
 export function expectedUncertainty({ sequence, meter, boardType }: RunPlan): PointUncertainty {
-  const step = sequence.steps.find((s) => s.kind === 'verify');
-  const [repeats, search] = step?.kind === 'verify' ? [step.repeats, step.wantedUncertaintyVolts] : [1, 0.001];
+  const step = firstOf(sequence, 'verify');
+  const [repeats, search] = step ? [step.repeats, step.wantedUncertaintyVolts] : [1, 0.001];
   const expandedAt = ({ min, max }: { min: number; max: number }) => {
     const point = { values: [(min + max) / 2], searchUncertainties: [search / Math.sqrt(repeats)] };
     return combineContributions(pointBudget(point, meter)).expanded;

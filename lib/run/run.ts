@@ -1,3 +1,4 @@
+import { nextEnabled } from '../sequence/enabled-steps';
 import { kindOf } from '../steps/step-kinds';
 import { decideVerdict, verdictOf, type Ending } from '../decision/decide-verdict';
 import { failingWhenStopped } from './failing-when-stopped';
@@ -30,6 +31,7 @@ export function beginRun(plan: RunPlan, atMs: number): Advance {
     outstanding: null,
     stepIndex: 0,
     machine: null,
+    path: [],
     facts: noFacts,
     expectedUncertainty: expectedUncertainty(plan),
     phase: { kind: 'steps' },
@@ -72,9 +74,11 @@ function contextOf({ plan, facts, stepIndex, atMs }: RunState): StepContext {
 }
 
 function beginStep(state: RunState): Advance {
-  const step = state.plan.sequence.steps[state.stepIndex];
+  const stepIndex = nextEnabled(state.plan.sequence, state.stepIndex);
+  const step = state.plan.sequence.steps[stepIndex];
   if (!step) return end(state, { kind: 'complete' }, state);
-  return takeTurn(state, kindOf(step).machine.begin(step, contextOf(state)));
+  const there = { ...state, stepIndex };
+  return takeTurn(there, kindOf(step).machine.begin(step, contextOf(there)));
 }
 
 function advanceStep(state: RunState, event: StepEvent): Advance {
@@ -89,7 +93,7 @@ function takeTurn(before: RunState, turn: StepTurn<unknown>): Advance {
     facts: { ...before.facts, ...facts, measurements: [...before.facts.measurements, ...measurements] },
   };
   if ('ending' in turn) return end(state, turn.ending, state);
-  if ('done' in turn) return beginStep({ ...state, stepIndex: state.stepIndex + 1, machine: null });
+  if ('done' in turn) return afterStep(state, turn.goTo ?? null);
   const going = { ...state, machine: turn.machine };
   if (!turn.ask) return { state: going, effects: [] };
   if (turn.ask.kind === 'supply-on' && state.facts.lidClosed === false) {
@@ -97,6 +101,15 @@ function takeTurn(before: RunState, turn: StepTurn<unknown>): Advance {
     return end(going, { kind: 'no-verdict', reason: 'lid-opened', code, detail: null, fault: null }, going);
   }
   return ask(going, turn.ask);
+}
+
+/** A branch that names a step that is not there leads past the end: such a run has no verdict. */
+function afterStep(state: RunState, goTo: string | null): Advance {
+  const { steps } = state.plan.sequence;
+  const jumpedTo = goTo === null ? null : steps.findIndex((step) => step.id === goTo && step.enabled);
+  const visit = { stepIndex: state.stepIndex, measured: state.facts.measurements.length, jumpedTo };
+  const stepIndex = jumpedTo === null ? state.stepIndex + 1 : jumpedTo < 0 ? steps.length : jumpedTo;
+  return beginStep({ ...state, path: [...state.path, visit], stepIndex, machine: null });
 }
 
 function ask(state: RunState, wish: Ask): Advance {
@@ -131,7 +144,7 @@ function end(state: RunState, ending: Ending, before: RunState): Advance {
   const decision = decideVerdict({
     ending,
     sequence: state.plan.sequence,
-    stepsDone: state.stepIndex,
+    path: state.path,
     measurements: state.facts.measurements,
     supplyOff: state.facts.supply.state === 'off' && state.facts.supply.volts !== null,
   });

@@ -15,6 +15,9 @@ export const runSayings = {
   'run.quiescent-current': [],
   'run.ride-through': [],
   'run.operator-check': [],
+  'run.measure-channel': ['channel'],
+  'run.apply-voltage': ['volts'],
+  'run.soak': ['channel'],
   'run.switching-off': [],
   // Why there is no verdict
   'run.fault': ['detail'],

@@ -1,4 +1,4 @@
-import type { Decision } from '../decision/decide-verdict';
+import type { Decision, StepVisit } from '../decision/decide-verdict';
 import type { RunFacts } from './facts';
 import type { RunEvent, RunPlan } from './types';
 
@@ -28,6 +28,8 @@ export interface RunState {
   outstanding: { id: number; answer: AnswerKind } | null;
   stepIndex: number;
   machine: unknown;
+  /** The steps that ended as done, in the order in which they were gone through. */
+  path: readonly StepVisit[];
   facts: RunFacts;
   /** U that the verification is expected to reach, for the guard band drawn before it is known. */
   expectedUncertainty: PointUncertainty;

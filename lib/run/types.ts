@@ -49,6 +49,8 @@ export const rejectReasons = [
   'quiescent-current',
   'ride-through',
   'operator-check-failed',
+  'channel-out-of-limits',
+  'drift-too-large',
 ] as const;
 export type RejectReason = (typeof rejectReasons)[number];
 
@@ -109,7 +111,11 @@ export interface Measurement {
     | 'quiescent-amps'
     | 'ride-through-seconds'
     | 'supply-amps'
-    | 'operator-check';
+    | 'operator-check'
+    /** A scanner channel against limits of its step. */
+    | 'channel-volts'
+    /** What a straight line through a soak's readings moved, as a magnitude. */
+    | 'drift-volts';
   /** `found` before trim, `trimmed` after it, `verified` after sealing; a verdict rests on `verified`. */
   phase: 'found' | 'trimmed' | 'verified' | 'check';
   value: number;
@@ -183,7 +189,7 @@ export type RunEvent = { atMs: number } & (
   | { kind: 'will-not-turn' }
   /** Answers the finding that turning changes nothing: the right screw is found, prompt again. */
   | { kind: 'screw-found' }
-  | { kind: 'confirm'; what: 'lid-and-board' | 'lid-open' | 'sealed' | 'lid-closed' }
+  | { kind: 'confirm'; what: 'lid-and-board' | 'lid-open' | 'sealed' | 'lid-closed' | 'instruction-done' }
   | { kind: 'answer'; ok: boolean }
   /** The bench screen has been gone for over 5 s, or the server shuts down. */
   | { kind: 'bench-lost' }

@@ -9,7 +9,7 @@ import type { RunState } from './state';
 
 /** The words of the step line that a sequence has, in their order. */
 export function groupsOf(sequence: Sequence): StepGroup[] {
-  const present = new Set(sequence.steps.map((step) => kindOf(step).group));
+  const present = new Set(sequence.steps.filter(({ enabled }) => enabled).map((step) => kindOf(step).group));
   return stepGroups.filter((group) => present.has(group));
 }
 
@@ -39,7 +39,7 @@ function stepLine({ plan, stepIndex, phase }: RunState): RunView['stepGroups'] {
   return groupsOf(plan.sequence).map((group) => {
     if (passed) return { group, state: 'done' };
     if (current && kindOf(current).group === group) return { group, state: 'current' };
-    const ahead = steps.some((step, index) => kindOf(step).group === group && index > stepIndex);
+    const ahead = steps.some((step, index) => step.enabled && kindOf(step).group === group && index > stepIndex);
     return { group, state: ahead ? 'ahead' : 'done' };
   });
 }

@@ -48,3 +48,10 @@ export const words = (field: string, label: string): SentenceField => ({ field, 
 export function choice(field: string, label: string, options: NonNullable<SentenceField['options']>): SentenceField {
   return { field, label, input: 'choice', options };
 }
+
+export const channel = choice('channel', 'Channel', [
+  { value: 101, label: 'the supply (channel 101)' },
+  { value: 102, label: 'the output (channel 102)' },
+  { value: 103, label: 'the reference (channel 103)' },
+  { value: 104, label: 'the wiper (channel 104)' },
+]);

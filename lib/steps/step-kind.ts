@@ -60,6 +60,8 @@ export interface StepKindDefinition<S extends AnyStep = Step, M = any> {
   /** One line of the list from which a step is added. */
   purpose: string;
   group: StepGroup;
+  /** The points may have moved: nothing verified before it counts any more. */
+  movesPoints?: true;
   schema: z.ZodType<S>;
   /** A new one with values that suit the board type. */
   fresh(boardType: BoardType): Omit<S, 'id' | 'name' | 'enabled'>;

@@ -1,5 +1,10 @@
 import type { Step } from '../sequence/step';
+import type { StepKindDefinition } from './step-kind';
+import { applyVoltage } from './apply-voltage/kind';
+import { branch } from './branch/kind';
 import { findPoints } from './find-points/kind';
+import { instruction } from './instruction/kind';
+import { measureChannel } from './measure-channel/kind';
 import { operatorCheck } from './operator-check/kind';
 import { outputLevels } from './output-levels/kind';
 import { powerUp } from './power-up/kind';
@@ -9,9 +14,9 @@ import { reference } from './reference/kind';
 import { rideThrough } from './ride-through/kind';
 import { seal } from './seal/kind';
 import { seat } from './seat/kind';
+import { soak } from './soak/kind';
 import { trim } from './trim/kind';
 import { verify } from './verify/kind';
-import type { StepKindDefinition } from './step-kind';
 
 /** Every kind of step, in the order in which a list of them is shown. */
 export const stepKinds = [
@@ -26,6 +31,11 @@ export const stepKinds = [
   quiescentCurrent,
   rideThrough,
   operatorCheck,
+  measureChannel,
+  applyVoltage,
+  soak,
+  branch,
+  instruction,
   record,
 ] as const;
 

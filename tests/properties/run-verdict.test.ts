@@ -1,9 +1,10 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { decideVerdict } from '@/lib/decision/decide-verdict';
+import { decideVerdict, type StepVisit } from '@/lib/decision/decide-verdict';
 import { requiredMeasurements } from '@/lib/decision/required-measurements';
 import { advanceRun, beginRun, resultOf, type RunState } from '@/lib/run/run';
 import type { RunEffect, RunEvent, RunPlan } from '@/lib/run/types';
+import type { Sequence } from '@/lib/sequence/step';
 import { viewRun } from '@/lib/run/view';
 import { planFor } from '../lib/run/play-board';
 import { Plant, seeded } from '../lib/run/plant';
@@ -224,25 +225,36 @@ describe('whatever happens to a run', () => {
   });
 });
 
+/** Every step but the record gone through in order, each with the measurements that are its own. */
+function straight({ steps }: Sequence, measurements: readonly { stepIndex: number }[]): StepVisit[] {
+  return steps.slice(0, -1).map((_, stepIndex) => ({
+    stepIndex,
+    measured: measurements.filter((m) => m.stepIndex <= stepIndex).length,
+    jumpedTo: null,
+  }));
+}
+
 describe('the verdict', () => {
   const { sequence } = planFor('CB1210');
-  const whole = requiredMeasurements(sequence).map((needed) => ({
-    ...needed,
-    stepIndex: needed.stepIndex!,
-    value: 1,
-    standardUncertainty: null,
-    expandedUncertainty: null,
-    min: null,
-    max: null,
-    guardedMin: null,
-    guardedMax: null,
-    passed: true as boolean | null,
-    settles: null,
-  }));
+  const whole = requiredMeasurements(sequence)
+    .sort((a, b) => a.stepIndex! - b.stepIndex!)
+    .map((needed) => ({
+      ...needed,
+      stepIndex: needed.stepIndex!,
+      value: 1,
+      standardUncertainty: null,
+      expandedUncertainty: null,
+      min: null,
+      max: null,
+      guardedMin: null,
+      guardedMax: null,
+      passed: true as boolean | null,
+      settles: null,
+    }));
   const evidence = {
     ending: { kind: 'complete' } as const,
     sequence,
-    stepsDone: sequence.steps.length - 1,
+    path: straight(sequence, whole),
     measurements: whole,
     supplyOff: true,
   };
@@ -257,18 +269,18 @@ describe('the verdict', () => {
           how === 'missing'
             ? whole.filter((_, i) => i !== at)
             : whole.map((m, i) => (i === at ? { ...m, passed: how as boolean | null } : m));
-        const decision = decideVerdict({ ...evidence, measurements });
+        const decision = decideVerdict({ ...evidence, measurements, path: straight(sequence, measurements) });
         expect(decision).toMatchObject({ kind: how === false ? 'reject' : 'no-verdict' });
       }),
     );
   });
   it('is never a pass before every step is done or while the supply is not confirmed off', () => {
-    expect(decideVerdict({ ...evidence, stepsDone: sequence.steps.length - 2 })).toMatchObject({ kind: 'no-verdict' });
+    expect(decideVerdict({ ...evidence, path: evidence.path.slice(0, -1) })).toMatchObject({ kind: 'no-verdict' });
     expect(decideVerdict({ ...evidence, supplyOff: false })).toMatchObject({ reason: 'supply-fault' });
   });
   it('is never a pass for a sequence that verifies nothing', () => {
     const bare = { ...sequence, steps: sequence.steps.filter((s) => s.kind !== 'verify') };
-    const decision = decideVerdict({ ...evidence, sequence: bare, stepsDone: bare.steps.length - 1 });
+    const decision = decideVerdict({ ...evidence, sequence: bare, path: straight(bare, whole) });
     expect(decision).toMatchObject({ kind: 'no-verdict' });
   });
 });

@@ -16,6 +16,8 @@ const order: UnitMeasurement['quantity'][] = [
   'output-low-volts',
   'quiescent-amps',
   'ride-through-seconds',
+  'channel-volts',
+  'drift-volts',
   'supply-amps',
   'contact-milliohms',
   'operator-check',

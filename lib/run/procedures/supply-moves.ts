@@ -1,3 +1,5 @@
+import { firstOf } from '../../sequence/enabled-steps';
+import { newestPoints } from '../facts';
 import type { StepContext } from '../machine';
 import { pathWithin } from '../supply-path';
 
@@ -15,8 +17,7 @@ export function pathToWithinMaximum(volts: number, context: StepContext): number
 
 /** The working supply: where the power-up of the sequence brought the board. */
 export function workingVolts({ plan }: StepContext): number {
-  const step = plan.sequence.steps.find((s) => s.kind === 'power-up');
-  return step?.kind === 'power-up' ? step.volts : plan.boardType.limits.releaseVolts.max;
+  return firstOf(plan.sequence, 'power-up')?.volts ?? plan.boardType.limits.releaseVolts.max;
 }
 
 /** On from wherever it stands, then down to `volts` without an undershoot below `floorVolts`. */
@@ -34,4 +35,23 @@ export function pathOffThenUp(volts: number, ceilingVolts: number, context: Step
     ...pathToWithinMaximum(search.supplyMinVolts, context),
     ...pathWithin(search.supplyMinVolts, volts, ceilingVolts, overshoot),
   ];
+}
+
+/**
+ * Anywhere within the maximum; where the output is latched and can stay as it is at `volts`, no overshoot switches it on the
+ * way. The bound lies midway between the end and the point as last measured, its limit where it was not.
+ */
+export function pathKeepingOutput(volts: number, context: StepContext): number[] {
+  const { facts, plan } = context;
+  const { limits, absoluteMaximumVolts } = plan.boardType;
+  const from = standing(context);
+  const points = newestPoints(facts);
+  const trip = points?.trip.volts ?? limits.tripVolts.max;
+  const release = points?.release.volts ?? limits.releaseVolts.min;
+  const { overshoot } = plan.commissioning;
+  if (volts > from) {
+    const ceiling = facts.output === 'off' && volts < release ? (volts + release) / 2 : absoluteMaximumVolts;
+    return pathWithin(from, volts, Math.min(ceiling, absoluteMaximumVolts), overshoot);
+  }
+  return pathWithin(from, volts, facts.output === 'on' && volts > trip ? (volts + trip) / 2 : 0, overshoot);
 }

@@ -1,4 +1,5 @@
 import type { Ending } from '../../decision/decide-verdict';
+import { firstOf } from '../../sequence/enabled-steps';
 import type { SearchResult } from '../../search/types';
 import type { Answer, Learned, ProcedureTurn, StepContext } from '../machine';
 import { contactLost, contactMeasurement } from './contact-result';
@@ -34,8 +35,8 @@ export function beginUnfound(result: NotFound, { plan }: StepContext): UnfoundTu
     case 'stuck-off':
       return { machine: { stage: 'current' }, ask: { kind: 'measure-supply' } };
     case 'unresolved': {
-      const seat = plan.sequence.steps.find((step) => step.kind === 'seat');
-      if (seat?.kind !== 'seat') return notSteady([]);
+      const seat = firstOf(plan.sequence, 'seat');
+      if (!seat) return notSteady([]);
       const { machine, ask } = beginContactCheck(seat.contactCheck);
       return { machine: { stage: 'contact', check: machine }, ask };
     }

@@ -9,12 +9,15 @@ import {
 import { pointMeasurements } from '../../run/procedures/point-measurements';
 import type { FindPointsStep } from './schema';
 
+/** Searched for again after a trim, the points are once more those before any trimming. */
+const noPointsYet = { found: null, trimmed: null, trimBegan: false, verified: [] };
+
 /** Joint search for trip and release, before any trimming. */
 export const machine: StepMachine<FindPointsStep, LocatePoints> = {
   begin(step, context) {
     const { kind: _kind, ...wish } = step;
     const turn = beginLocatePoints({ ...wish, prior: context.plan.prior, endCheck: true }, context);
-    return { ...turn, facts: { travel: noTravel } };
+    return { ...turn, facts: { travel: noTravel, ...noPointsYet } };
   },
 
   advance(machine, event, _step, context) {

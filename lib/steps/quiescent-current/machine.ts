@@ -1,3 +1,4 @@
+import { newestPoints } from '../../run/facts';
 import { reasonFor } from '../../decision/reject-reason';
 import { measuring, stay, type StepContext, type StepMachine } from '../../run/machine';
 import { judged } from '../../run/measured';
@@ -49,7 +50,7 @@ export const machine: StepMachine<QuiescentCurrentStep, QuiescentMachine> = {
 
 /** Midway between the last points known; their limits stand in where none was measured. */
 function restingPoint({ facts, plan }: StepContext): { volts: number; ceilingVolts: number } {
-  const points = facts.verified.at(-1) ?? facts.trimmed ?? facts.found;
+  const points = newestPoints(facts);
   const { tripVolts, releaseVolts } = plan.boardType.limits;
   const trip = points?.trip.volts ?? tripVolts.max;
   const release = points?.release.volts ?? releaseVolts.min;

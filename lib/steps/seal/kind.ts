@@ -11,6 +11,7 @@ export const seal: StepKindDefinition<SealStep, SealMachine> = {
   word: 'Seal',
   purpose: 'Paint or compound on the screw, with the supply off.',
   group: 'seal',
+  movesPoints: true,
   schema,
   fresh: () => ({ kind: 'seal' }),
   rules,

@@ -10,6 +10,7 @@ export const trim: StepKindDefinition<TrimStep, TrimMachine> = {
   word: 'Trim',
   purpose: 'Tells the operator which way and how far.',
   group: 'trim',
+  movesPoints: true,
   schema,
   fresh: ({ limits }) => ({
     kind: 'trim',

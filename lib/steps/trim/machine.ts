@@ -2,7 +2,7 @@ import { beginTrim, nextTrimCommand, observeTrim, viewTrim, type TrimState } fro
 import type { TrimCommand, TrimObservation, TrimOutcome } from '../../trim/types';
 import { noteAdjustment } from '../../run/adjustments';
 import { faultCodes } from '../../run/fault-codes';
-import { noTravel, type Points } from '../../run/facts';
+import { newestPoints, noTravel, type Points, type RunFacts } from '../../run/facts';
 import { measuring, stay, type Answer, type StepContext, type StepMachine, type StepTurn } from '../../run/machine';
 import { advancePath, beginPath, type FollowPath } from '../../run/procedures/follow-path';
 import { advanceSearchPoints, beginSearchPoints, type SearchPoints } from '../../run/procedures/search-points';
@@ -32,6 +32,8 @@ export interface TrimMachine {
   doing: Doing;
   /** The last search of the trim did not resolve. */
   unresolved: boolean;
+  /** Turns asked for by an earlier trim of the run. */
+  adjustedBefore: RunFacts['adjustments'];
 }
 type Turn = StepTurn<TrimMachine>;
 
@@ -41,7 +43,7 @@ type Turn = StepTurn<TrimMachine>;
  */
 export const machine: StepMachine<TrimStep, TrimMachine> = {
   begin(step, context) {
-    const { found } = context.facts;
+    const found = newestPoints(context.facts);
     if (!found) return { ending: noPoints };
     if (step.procedure === 'wiper-probe' && !context.plan.hasWiperProbe) return { ending: noWiperProbe };
     const settings = trimSettings(step, context);
@@ -53,8 +55,12 @@ export const machine: StepMachine<TrimStep, TrimMachine> = {
     const refusal = refuseUntrimmable(settings, points, context);
     if (refusal) return { ending: refusal };
     const state = beginTrim(settings, points, context.atMs);
-    const turn = obey({ trim: state, doing: { kind: 'asked' }, unresolved: false }, step, context);
-    return { ...turn, facts: { ...turn.facts, trimBegan: true } };
+    const turn = obey(
+      { trim: state, doing: { kind: 'asked' }, unresolved: false, adjustedBefore: context.facts.adjustments },
+      step,
+      context,
+    );
+    return { ...turn, facts: { ...turn.facts, trimBegan: true, trimmed: null, verified: [] } };
   },
 
   advance(machine, event, step, context) {
@@ -141,9 +147,10 @@ function obey(machine: TrimMachine, step: TrimStep, context: StepContext): Turn 
   const asked = { ...machine, doing: { kind: 'asked' } as const };
   const { waypointMs, settleMs } = context.plan.commissioning;
   const view = viewTrim(machine.trim);
+  const { adjustedBefore: before } = machine;
   const facts = {
     trimFailing: view.finding === 'no-effect' || view.finding === 'end-of-travel',
-    adjustments: noteAdjustment(context.facts.adjustments, view, context.atMs),
+    adjustments: [...before, ...noteAdjustment(context.facts.adjustments.slice(before.length), view, context.atMs)],
   };
   switch (command.kind) {
     case 'finished':
@@ -192,7 +199,8 @@ function unfound(machine: TrimMachine, turn: ProcedureTurn<Unfound, UnfoundResul
 }
 
 function conclude(machine: TrimMachine, outcome: TrimOutcome, context: StepContext): Turn {
-  const counts = { trimRounds: outcome.rounds, turnsAdvised: outcome.turnsAdvised };
+  const { trimRounds, turnsAdvised } = context.facts;
+  const counts = { trimRounds: trimRounds + outcome.rounds, turnsAdvised: turnsAdvised + outcome.turnsAdvised };
   if (outcome.kind === 'trimmed') {
     const trimmed: Points = {
       trip: { volts: outcome.tripVolts, standardUncertaintyVolts: outcome.standardUncertaintyVolts },

@@ -1,0 +1,3 @@
+import type { SequenceFinding } from '../../sequence/finding';
+
+export const rules = (): SequenceFinding[] => [];
