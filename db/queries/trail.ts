@@ -15,7 +15,7 @@ export interface TrailEntry {
 /** Adds to the trail, inside the transaction of the change it tells of. `actor` null: the program itself. */
 export async function insertTrail(
   tx: Transaction | Database,
-  actor: Pick<Actor, 'accountId' | 'stationId'> | null,
+  actor: { accountId: Actor['accountId'] | null; stationId: Actor['stationId'] } | null,
   entry: TrailEntry,
 ): Promise<void> {
   await tx.insert(trail).values({ ...entry, accountId: actor?.accountId ?? null, stationId: actor?.stationId ?? null });

@@ -111,6 +111,8 @@ export async function startCluster(folder, { fast = false } = {}) {
     await start().catch(start);
   }
   return {
+    /** False: it was running already, for somebody else. */
+    startedHere: !running,
     url: `postgresql://sillwright:${password}@${loopback}:${port}/postgres`,
     stop: () =>
       runCommand(join(programs, 'pg_ctl'), ['stop', '-D', data, '-m', 'fast', '-w', '-s'], { ...as, stdio: 'ignore' }),

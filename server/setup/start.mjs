@@ -1,9 +1,7 @@
 // The start command: everything a fresh clone needs, then the server. Imports only node: modules until packages are installed.
 import { spawn } from 'node:child_process';
-import { createHash } from 'node:crypto';
 import { mkdirSync } from 'node:fs';
 import { fileURLToPath, pathToFileURL } from 'node:url';
-import { resolve } from 'node:path';
 import { installPackages, packagesAreCurrent } from './packages.mjs';
 import { giveUp, step } from './progress.mjs';
 
@@ -19,12 +17,8 @@ async function prepare() {
   mkdirSync('.sillwright', { recursive: true });
   let cluster = null;
   if (!process.env.DATABASE_URL) {
-    const { postgresCanUse, startCluster } = await import('./postgres-cluster.mjs');
-    const local = resolve('.sillwright/postgres');
-    const folder = postgresCanUse(local)
-      ? local
-      : `/var/lib/sillwright/${createHash('sha256').update(root).digest('hex').slice(0, 12)}`;
-    cluster = await step('Starting PostgreSQL', () => startCluster(folder));
+    const { localCluster } = await import('./local-cluster.mjs');
+    cluster = await step('Starting PostgreSQL', localCluster);
     process.env.DATABASE_URL = cluster.url;
     process.env.SILLWRIGHT_DEMO = '1';
   }

@@ -10,6 +10,7 @@ import type { RunCloser } from '@/lib/contracts/stored-states';
 import { tracesOf } from '@/lib/run/traces';
 import { freezeBaselines } from '../lots/freeze-baselines';
 import { printLabel } from '../labels/print-label';
+import { sealRun } from '../trail/seal-run';
 import type { RunRecord } from './run-record';
 
 type Run = NonNullable<Awaited<ReturnType<typeof findRunForUpdate>>>;
@@ -32,6 +33,7 @@ export async function recordRun(
     if (run.endedAt) return success({ validUntilIso: null });
     await storeResults(tx, record);
     await close(tx, record, closedBy);
+    await sealRun(tx, run, record.result.verdict);
     if (run.kind === 'production' && record.result.verdict !== 'no-verdict') await freezeBaselines(tx, run.lotId!);
     if (run.kind === 'production' && record.result.verdict === 'pass') {
       const printerId = await findStationPrinter(tx, run.stationId);

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { listBenches, type BenchRow } from '@/db/queries/station-benches';
 import { accounts } from '@/db/schema/accounts';
@@ -21,6 +21,7 @@ import { recordRun } from '@/server/operations/runs/record-run';
 import { closeLostRun, recoverOpenRuns } from '@/server/operations/runs/recover-open-runs';
 import type { RunRecord } from '@/server/operations/runs/run-record';
 import { scanBin } from '@/server/operations/runs/scan-bin';
+import { verifyTrail } from '@/server/operations/trail/verify-trail';
 import { temporaryDatabase, type TemporaryDatabase } from '../../database/temporary-postgres';
 import { playBoard, type Played } from '../../lib/run/play-board';
 
@@ -307,5 +308,24 @@ describe('the daily check', () => {
     const [row] = await open.db.select().from(dailyChecks).where(eq(dailyChecks.runId, plan.runId));
     expect(row).toMatchObject({ passed: false });
     expect(await begin(benches[1]!)).toMatchObject({ ok: false, refusal: { code: 'daily-check-failed' } });
+  });
+});
+
+describe('the hash of a closed run', () => {
+  test('enters the chain of its station, and shows a measurement that was altered afterwards', async () => {
+    const plan = await opened();
+    await recordRun(open.db, recordOf(plan, played(plan)), 'station');
+    const before = await verifyTrail(open.db, { runs: true });
+    expect(before.breaks).toEqual([]);
+    expect(before.runs).toBeGreaterThan(0);
+    await open.db.execute(sql`alter table measurements disable trigger user`);
+    await open.db
+      .update(measurements)
+      .set({ value: sql`${measurements.value} + 0.001` })
+      .where(and(eq(measurements.runId, plan.runId), eq(measurements.n, 0)));
+    await open.db.execute(sql`alter table measurements enable trigger user`);
+    const [broken] = (await verifyTrail(open.db, { runs: true })).breaks;
+    expect(broken).toMatchObject({ chain: benches[0]!.code });
+    expect(broken!.sentence).toContain(serial);
   });
 });
