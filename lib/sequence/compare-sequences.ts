@@ -111,22 +111,25 @@ function compareValues(
   stepsBefore: readonly Step[],
   stepsAfter: readonly Step[],
 ): ValueChange[] {
-  const blanks = [...blanksOf(before), ...blanksOf(after)];
-  const fields = new Set([...blanks.map(({ field }) => field), ...fieldsOf(before), ...fieldsOf(after)]);
-  const values = [...fields].flatMap((field) => {
+  const [blanksBefore, blanksAfter] = [blanksOf(before), blanksOf(after)];
+  const spoken = [...blanksAfter, ...blanksBefore].map(({ field }) => field);
+  const values = [...new Set([...spoken, ...fieldsOf(after), ...fieldsOf(before)])].flatMap((field): ValueChange[] => {
     const [a, b] = [fieldValue(before, field), fieldValue(after, field)];
     if (JSON.stringify(a) === JSON.stringify(b)) return [];
-    const blank = finerWhereAlike(a, b, blanks.find((each) => each.field === field) ?? unspoken(field));
+    const of = (blanks: SentenceField[]) => blanks.find((blank) => blank.field === field);
+    const [blankOld, blankNew] = [of(blanksBefore), of(blanksAfter)];
+    const blankAfter = finerWhereAlike(a, b, blankNew ?? blankOld ?? unspoken(field));
+    const blankBefore = finerWhereAlike(a, b, blankOld ?? blankNew ?? unspoken(field));
     return [
       {
         field,
-        label: blank.label,
+        label: blankAfter.label,
         before: a,
         after: b,
-        from: valueWords(a, blank, stepsBefore),
-        to: valueWords(b, blank, stepsAfter),
-        tone: blank.tone ?? null,
-        numbers: numbersOf(a, b, blank),
+        from: valueWords(a, blankBefore, stepsBefore),
+        to: valueWords(b, blankAfter, stepsAfter),
+        tone: blankAfter.tone ?? null,
+        numbers: numbersOf(a, b, blankAfter),
       },
     ];
   });
