@@ -29,6 +29,16 @@ const environmentSchema = z
     /** The local demo: seeded when empty, its accounts printed at start. */
     SILLWRIGHT_DEMO: flag,
     SILLWRIGHT_DATA: z.string().default('.sillwright'),
+    /** Photographs and drawings. Without a bucket nothing can be uploaded; the demo brings its own storage. */
+    S3_BUCKET: z.string().optional(),
+    S3_REGION: z.string().default('us-east-1'),
+    /** Absent: Amazon's. */
+    S3_ENDPOINT: z.url({ protocol: /^https?$/, error: 'S3_ENDPOINT must be an http or https address.' }).optional(),
+    S3_ACCESS_KEY_ID: z.string().optional(),
+    S3_SECRET_ACCESS_KEY: z.string().optional(),
+  })
+  .refine((e) => !e.S3_BUCKET || (e.S3_ACCESS_KEY_ID && e.S3_SECRET_ACCESS_KEY), {
+    error: 'S3_BUCKET needs S3_ACCESS_KEY_ID and S3_SECRET_ACCESS_KEY.',
   })
   .transform((e) => ({
     databaseUrl: e.DATABASE_URL,
@@ -49,6 +59,15 @@ const environmentSchema = z
     clockRate: e.SILLWRIGHT_CLOCK_RATE,
     demo: e.SILLWRIGHT_DEMO,
     dataFolder: e.SILLWRIGHT_DATA,
+    storage: e.S3_BUCKET
+      ? {
+          endpoint: e.S3_ENDPOINT,
+          region: e.S3_REGION,
+          bucket: e.S3_BUCKET,
+          accessKeyId: e.S3_ACCESS_KEY_ID ?? '',
+          secretAccessKey: e.S3_SECRET_ACCESS_KEY ?? '',
+        }
+      : null,
   }))
   .superRefine((e, context) => {
     if (e.loopback) return;

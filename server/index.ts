@@ -1,12 +1,15 @@
 import { createServer as createHttpServer, type IncomingMessage, type ServerResponse } from 'node:http';
 import { createServer as createHttpsServer } from 'node:https';
 import { mkdirSync, readFileSync } from 'node:fs';
+import { join } from 'node:path';
 import next from 'next';
 import pino from 'pino';
 import { closeSharedDatabases } from '@/db/client';
 import { migrate } from '@/db/migrate';
 import { environment, readEnvironment, type Environment } from './environment';
 import { startDemoPrinter } from './demo-printer';
+import { startDryRuns } from './dry-runs/start-dry-runs';
+import { startFakeStorage } from './files/storage/fake-storage';
 import { startLabelSender } from './operations/labels/label-sender';
 import { startLive } from './live/start-live';
 import { localSecret } from './local-secret';
@@ -32,6 +35,12 @@ async function main(): Promise<void> {
     for (const sentence of read.sentences) console.error(sentence);
     process.exit(2);
   }
+  const storage =
+    read.environment.demo && !read.environment.storage
+      ? await startFakeStorage(join(read.environment.dataFolder, 'files'))
+      : null;
+  // Next's copies of the modules read their settings from here too.
+  Object.assign(process.env, storage?.variables);
   const settings = environment();
   process.env.NEXTAUTH_URL = settings.publicUrl;
 
@@ -52,6 +61,7 @@ async function main(): Promise<void> {
   const live = await startLive({ httpServer, log });
   const printer = settings.demo ? await startDemoPrinter(settings.dataFolder) : null;
   const labels = startLabelSender({ db: database(), log });
+  const dryRuns = await startDryRuns({ db: database(), log });
   await app.prepare();
   const pages = app.getRequestHandler();
   handle = (request, response) => void pages(request, response);
@@ -67,7 +77,9 @@ async function main(): Promise<void> {
     stopping = true;
     await live.stop();
     await labels.stop();
+    await dryRuns.stop();
     await printer?.close();
+    await storage?.close();
     httpServer.close();
     httpServer.closeAllConnections();
     await app.close();

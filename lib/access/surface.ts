@@ -1,5 +1,6 @@
 import type { Access } from './access';
 import { benchSurface } from './surface/bench';
+import { boardTypesSurface } from './surface/board-types';
 import { dryRunsSurface } from './surface/dry-runs';
 import { engineeringSurface } from './surface/engineering';
 import { offersSurface } from './surface/offers';
@@ -22,6 +23,7 @@ export interface Surface {
 const areas: Surface[] = [
   peopleSurface,
   benchSurface,
+  boardTypesSurface,
   engineeringSurface,
   dryRunsSurface,
   offersSurface,
