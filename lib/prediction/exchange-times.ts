@@ -10,7 +10,8 @@ export interface MeterRelays {
 
 const turnaroundMs = 0.7;
 const supplyMeasureMs = 1;
-const cycleMs = 20;
+/** The longest power-line period, 50 Hz. */
+export const cycleMs = 20;
 const relaySettleMs = 12;
 /** Integration of a value that is kept, and of one that only tells on from off. */
 export const valueCycles = 1;

@@ -21,8 +21,8 @@ const offTargetVolts = 0.525;
 const mostVisits = 400;
 
 /**
- * Plays a draft on one typical board of its type at a station: nominal parts, a screw below its target, readings without
- * noise, a person who does what is asked. `memo` keeps what was played before; the same one with each edit makes it quick.
+ * Plays a draft on one typical board of its type at a station: nominal parts, a screw below its target, and a
+ * person who does what is asked. `memo` keeps what was played before; the same one with each edit makes it quick.
  */
 export function predictSequence(
   sequence: Sequence,

@@ -6,8 +6,9 @@ import { wiperAt } from '../circuit/trimmer';
 import type { BoardType } from '../contracts/board-type';
 import type { Answer, Ask } from '../run/machine';
 import type { OutputState } from '../search/types';
+import { normalQuantile } from '../statistics/distributions/normal-quantile';
 import type { StationKind } from '../sequence/station-kind';
-import { ExchangeTimes, stateCycles, valueCycles, type MeterRelays } from './exchange-times';
+import { cycleMs, ExchangeTimes, stateCycles, valueCycles, type MeterRelays } from './exchange-times';
 
 /** What a step leaves behind on the bench; with the facts it is all that the next step can notice. */
 export interface BenchState {
@@ -34,27 +35,37 @@ export function pointsOf({ design, trimmer }: BoardType, screwTurns: number): Th
   return found.kind === 'found' ? found : { tripVolts: Infinity, releaseVolts: Infinity };
 }
 
+/** Supplies overshoot by about this share of the bound that their commissioning keeps; *common practice*. */
+const overshootShare = 0.85;
+
+/** Standard normal numbers that fill their range evenly, so that a short search meets neither luck nor bad luck. */
+const evenNormal = (n: number) => normalQuantile((0.5 + n * goldenRatio) % 1 || 0.5);
+const goldenRatio = 0.6180339887498949;
+
 const contactOhms = 0.002;
 const dischargeMs = 15;
 const safeBelowVolts = 2;
 const pauseMs = 50;
 
 /**
- * A bench with one typical board: nominal parts, a supply that is where it is told to be, readings without noise, and the
- * time that every exchange takes. The search is prepared for worse; what it does here it does on a real board, nearly.
+ * A bench with one typical board: nominal parts, the comparator noise that the search expects, a supply that overshoots as
+ * commissioned and comes to where it is told, readings without error, and the time that every exchange takes.
  */
 export class TypicalBench {
   nowMs = 0;
   readonly notes: BenchNote[] = [];
   private points: Thresholds | null = null;
+  private settles = 0;
+  private readonly overshoot: number;
   private readonly times: ExchangeTimes;
   private readonly design: BoardDesign;
 
   constructor(
     readonly boardType: BoardType,
-    station: Pick<StationKind, 'baudRate'>,
+    station: Pick<StationKind, 'baudRate' | 'commissioning'>,
     private state: BenchState,
   ) {
+    this.overshoot = overshootShare * station.commissioning.overshoot;
     this.times = new ExchangeTimes(station.baudRate);
     this.design = boardType.design;
   }
@@ -80,7 +91,7 @@ export class TypicalBench {
     if (screwTurns === this.state.screwTurns) return;
     this.change({ screwTurns });
     this.points = null;
-    this.judge();
+    this.judge(this.state.setVolts);
   }
 
   pollFixture(): void {
@@ -137,21 +148,24 @@ export class TypicalBench {
     }
   }
 
-  /** Off, then read back by meter and supply at once, until below 2 V. */
+  /** Off, then read back by meter and supply at once, until both are below 2 V. */
   private switchOff(): Answered {
+    const { times } = this;
     let volts = this.volts;
-    this.nowMs += this.times.switchOffMs;
+    let sinceMs = this.nowMs;
+    const left = (atMs: number) => volts * Math.exp(-(atMs - sinceMs) / dischargeMs);
+    this.nowMs += times.switchOffMs;
     this.goOff();
     for (;;) {
-      const fromMs = this.nowMs;
+      const bySupply = left(this.nowMs + times.supplyAmpsMs);
       this.read(101, valueCycles);
-      const middleMs = this.nowMs - (valueCycles * 20) / 2;
-      const readVolts = volts * Math.exp(-(middleMs - fromMs) / dischargeMs);
-      volts *= Math.exp(-(this.nowMs - fromMs) / dischargeMs);
-      if (readVolts < safeBelowVolts) return { kind: 'supply-is-off', confirmed: true, volts: readVolts, by: 'meter' };
+      const byMeter = left(this.nowMs - (valueCycles * cycleMs) / 2);
+      if (byMeter < safeBelowVolts && bySupply < safeBelowVolts) {
+        return { kind: 'supply-is-off', confirmed: true, volts: byMeter, by: 'meter' };
+      }
       this.nowMs += pauseMs;
-      volts *= Math.exp(-pauseMs / dischargeMs);
-      this.nowMs += this.times.switchOffMs;
+      volts = left(this.nowMs);
+      sinceMs = this.nowMs;
     }
   }
 
@@ -213,16 +227,21 @@ export class TypicalBench {
   }
 
   private setSupply(volts: number): void {
+    const peakVolts = volts + this.overshoot * (volts - this.state.setVolts);
     this.change({ setVolts: volts });
     this.note({ kind: 'supply', atMs: this.nowMs, volts });
-    this.judge();
+    this.settles++;
+    this.judge(peakVolts);
+    this.judge(volts);
   }
 
-  private judge(): void {
+  /** Lets the latch see a voltage. */
+  private judge(volts: number): void {
     const { output, supplyOn, setVolts } = this.state;
     if (!supplyOn) return;
     const { tripVolts, releaseVolts } = this.thresholds();
-    const flips = output === 'on' ? setVolts < tripVolts : setVolts > releaseVolts;
+    const noise = this.boardType.search.noiseVolts * evenNormal(this.settles);
+    const flips = output === 'on' ? volts < tripVolts + noise : volts > releaseVolts + noise;
     if (!flips) return;
     this.change({ output: output === 'on' ? 'off' : 'on' });
     this.note({ kind: 'flip', atMs: this.nowMs, volts: setVolts, point: output === 'on' ? 'trip' : 'release' });
