@@ -19,6 +19,26 @@ export function stretchWords(stretch: RunStretch): string {
   return `${from === to ? `Board ${from}` : `Boards ${from} to ${to}`}: ${whatOf(stretch)}`;
 }
 
+/** The same for all of them, boards beyond one control limit in a single line. */
+export function stretchList(stretches: readonly RunStretch[]): { rule: RunRule; words: string }[] {
+  const beyond = (['above', 'below'] as const).flatMap((side) => {
+    const single = stretches.filter((stretch) => stretch.rule === 1 && stretch.side === side);
+    if (single.length < 2) return single.map((stretch) => ({ rule: stretch.rule, words: stretchWords(stretch) }));
+    const boards = single.map(({ from }) => from);
+    return [{ rule: 1 as const, words: `Boards ${listed(boards)}: ${whatOf(single[0]!)}` }];
+  });
+  const runs = stretches.filter(({ rule }) => rule !== 1);
+  return [...beyond, ...runs.map((stretch) => ({ rule: stretch.rule, words: stretchWords(stretch) }))];
+}
+
+const mostListed = 8;
+
+function listed(boards: readonly number[]): string {
+  if (boards.length > mostListed)
+    return `${boards.slice(0, mostListed).join(', ')} and ${boards.length - mostListed} more`;
+  return `${boards.slice(0, -1).join(', ')} and ${boards.at(-1)}`;
+}
+
 function whatOf({ rule, boards, side, direction }: RunStretch): string {
   switch (rule) {
     case 1:

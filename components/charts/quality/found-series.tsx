@@ -44,7 +44,7 @@ export function FoundSeries({ review, width, chosen, label, ref }: FoundSeriesPr
       height={height}
       role="img"
       aria-label={label}
-      className="block"
+      className="block h-auto max-w-full"
     >
       <rect
         x={box.plotLeft}

@@ -6,7 +6,7 @@ import { BoardLayer, type DrawnBoard } from './board-layer';
 import { boardX, chartBox, pinnedTo, shownBoards, shownDomain } from './chart-scale';
 import { ControlLines } from './control-lines';
 import { Histogram } from './histogram';
-import { LimitLines } from './limit-lines';
+import { LimitGround, LimitLines } from './limit-lines';
 import { LotRuleAxis } from './lot-rule-axis';
 import { placePinned, type PinnedValue } from './pinned-values';
 import { quantityLooks, scaleText, valueText } from './quantity-look';
@@ -38,7 +38,10 @@ export function IndividualsChart({ review, width, chosen, label, ref }: Individu
   const { boards, pinned } = drawn(review, domain, x, y, shown);
   const brackets = box.narrow ? [] : runBrackets(review.stretches, x, [box.plotLeft, box.plotRight]);
   const texts = { text: (v: number) => scaleText(quantity, v), fineText: (v: number) => valueText(quantity, v) };
-  const histogram = [box.histLeft, box.histRight] as const;
+  const across = [
+    [box.plotLeft, box.plotRight],
+    [box.histLeft, box.histRight],
+  ] as const;
   return (
     <svg
       ref={ref}
@@ -47,18 +50,9 @@ export function IndividualsChart({ review, width, chosen, label, ref }: Individu
       height={box.height}
       role="img"
       aria-label={label}
-      className="block"
+      className="block h-auto max-w-full"
     >
-      <LimitLines
-        y={y}
-        limits={limits}
-        colour={look.colour}
-        across={[[box.plotLeft, box.plotRight], histogram]}
-        jawX={box.histRight}
-        centre={control?.centre ?? null}
-        narrow={box.narrow}
-        {...texts}
-      />
+      <LimitGround y={y} limits={limits} across={across} />
       {brackets.map(({ stretch, left, right }) => (
         <rect
           key={`${stretch.rule} ${stretch.from}`}
@@ -67,9 +61,18 @@ export function IndividualsChart({ review, width, chosen, label, ref }: Individu
           width={right - left}
           height={box.bottom - box.top}
           fill="var(--sw-attn-wash)"
-          opacity={0.75}
         />
       ))}
+      <LimitLines
+        y={y}
+        limits={limits}
+        colour={look.colour}
+        across={across}
+        jawX={box.histRight}
+        centre={control?.centre ?? null}
+        narrow={box.narrow}
+        {...texts}
+      />
       <ValueAxis y={y} x={box.plotLeft - 4} ticks={6} text={texts.text} />
       {control ? (
         <ControlLines

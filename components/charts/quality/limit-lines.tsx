@@ -16,12 +16,19 @@ interface LimitLinesProps {
   narrow: boolean;
 }
 
-/** Limits as gauge jaws with flat faces on the limit; guard bands dashed; what is inside both lies on a lighter ground. */
-export function LimitLines({ y, limits, colour, across, jawX, text, centre, fineText, narrow }: LimitLinesProps) {
+/** The lighter ground between the limits as drawn in by the guard bands. */
+export function LimitGround({ y, limits, across }: Pick<LimitLinesProps, 'y' | 'limits' | 'across'>) {
   const [low, high] = y.domain() as [number, number];
+  const top = y(limits?.guardedMax ?? limits?.max ?? high);
+  const bottom = y(limits?.guardedMin ?? limits?.min ?? low);
+  return across.map(([from, to]) => (
+    <rect key={from} x={from} y={top} width={to - from} height={Math.max(0, bottom - top)} fill="var(--sw-sheet)" />
+  ));
+}
+
+/** Limits as gauge jaws with flat faces on the limit; guard bands dashed. */
+export function LimitLines({ y, limits, colour, across, jawX, text, centre, fineText, narrow }: LimitLinesProps) {
   const { min = null, max = null, guardedMin = null, guardedMax = null } = limits ?? {};
-  const top = y(guardedMax ?? max ?? high);
-  const bottom = y(guardedMin ?? min ?? low);
   const lines = (value: number) => across.map(([from, to]) => `M${from} ${y(value)}H${to}`).join('');
   const solid = [min, max].filter((each) => each !== null);
   const dashed = [guardedMin !== min ? guardedMin : null, guardedMax !== max ? guardedMax : null].filter(
@@ -29,9 +36,6 @@ export function LimitLines({ y, limits, colour, across, jawX, text, centre, fine
   );
   return (
     <g>
-      {across.map(([from, to]) => (
-        <rect key={from} x={from} y={top} width={to - from} height={Math.max(0, bottom - top)} fill="var(--sw-sheet)" />
-      ))}
       <path d={dashed.map(lines).join('')} stroke={colour} strokeDasharray="5 4" />
       <path d={solid.map(lines).join('')} stroke={colour} strokeWidth={2} />
       <g className="font-num" fontSize={14} fontWeight={700} fill={colour}>

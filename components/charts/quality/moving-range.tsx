@@ -44,7 +44,7 @@ export function MovingRange({ review, width, chosen, label, ref }: MovingRangePr
       height={height}
       role="img"
       aria-label={label}
-      className="block"
+      className="block h-auto max-w-full"
     >
       <rect
         x={box.plotLeft}

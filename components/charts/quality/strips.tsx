@@ -2,7 +2,7 @@ import { scaleLinear } from 'd3-scale';
 import type { Ref } from 'react';
 import type { LotReview } from '@/lib/contracts/lot-review';
 import { shownDomain } from './chart-scale';
-import { LimitLines } from './limit-lines';
+import { LimitGround, LimitLines } from './limit-lines';
 import { quantityLooks, scaleText, valueText } from './quantity-look';
 import { ValueAxis } from './value-axis';
 
@@ -47,8 +47,9 @@ export function Strips({ review, width, label, ref }: StripsProps) {
       height={height}
       role="img"
       aria-label={label}
-      className="block"
+      className="block h-auto max-w-full"
     >
+      <LimitGround y={y} limits={limits} across={[[left, right]]} />
       <LimitLines
         y={y}
         limits={limits}

@@ -9,7 +9,7 @@ import { YieldsPanel } from './review/yields-panel';
 /** What follows from the chart: capability, rules, comparisons; and the yields of the lot. */
 export function LotFiguresSection({ review, lot, view, changeView }: LotSectionProps & { review: LotReview }) {
   return (
-    <div className="grid gap-x-12 lg:grid-cols-2">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-x-12 lg:grid-cols-[repeat(2,minmax(0,1fr))]">
       <Section title="Run rules">
         <RuleSwitches review={review} view={view} changeView={changeView} />
       </Section>

@@ -14,10 +14,12 @@ export function useLotView(): [LotView, (change: Partial<LotView>) => void] {
   const view = useMemo(() => lotViewSchema.parse(Object.fromEntries(query)), [query]);
   const change = useCallback(
     (to: Partial<LotView>) => {
-      const next = lotViewQuery({ ...view, ...to });
+      // The address itself is the newest: two changes may come before the page is drawn again.
+      const now = lotViewSchema.parse(Object.fromEntries(new URLSearchParams(window.location.search)));
+      const next = lotViewQuery({ ...now, ...to });
       window.history.pushState(null, '', next ? `${path}?${next}` : path);
     },
-    [path, view],
+    [path],
   );
   return [view, change];
 }
