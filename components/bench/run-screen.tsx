@@ -1,4 +1,5 @@
 import type { RunView } from '@/lib/contracts/bench-view';
+import { InstructionScreen } from './screens/instruction-screen';
 import { MeasuringScreen } from './screens/measuring-screen';
 import { NoVerdictScreen } from './screens/no-verdict-screen';
 import { OperatorCheckScreen } from './screens/operator-check-screen';
@@ -22,6 +23,8 @@ export function RunScreen({ run, binCode }: { run: RunView; binCode: string | nu
       return <SealScreen screen={screen} supply={run.supply} />;
     case 'operator-check':
       return <OperatorCheckScreen question={screen.question} />;
+    case 'instruction':
+      return <InstructionScreen screen={screen} supply={run.supply} />;
     case 'pass':
       return <PassScreen seconds={screen.seconds} />;
     case 'reject':

@@ -15,6 +15,7 @@ type MeasuringView = Extract<RunView['screen'], { kind: 'measuring' }>;
 export function MeasuringScreen({ screen }: { screen: MeasuringView }) {
   const t = useTranslations('bench.measuring');
   const say = useSay();
+  const secondsLeft = secondsLeftOf(screen);
   return (
     <>
       <Panes left={<RailsPane />}>
@@ -26,6 +27,8 @@ export function MeasuringScreen({ screen }: { screen: MeasuringView }) {
               {screen.of === null
                 ? t('readings', { done: screen.done })
                 : t('readingsOf', { done: screen.done, of: screen.of })}
+              {secondsLeft !== null &&
+                `, ${t(secondsLeft < 90 ? 'secondsLeft' : 'minutesLeft', { left: Math.ceil(secondsLeft < 90 ? secondsLeft : secondsLeft / 60) })}`}
             </p>
           </div>
           <LiveVolts />
@@ -34,4 +37,9 @@ export function MeasuringScreen({ screen }: { screen: MeasuringView }) {
       <BenchFooter actions={<StopButton />} />
     </>
   );
+}
+
+/** Of readings on a fixed beat; null where the beat or the count is not known. */
+function secondsLeftOf({ done, of, everyMs }: MeasuringView): number | null {
+  return of === null || everyMs === undefined ? null : ((of - done) * everyMs) / 1000;
 }

@@ -81,7 +81,7 @@ export async function readStationRow(
     sinceIso: since?.toISOString() ?? null,
     reasons: reasons.map(({ code, params }) => ({ code, params })),
     rejectReason: waitsForBin ? run.rejectReason : null,
-    serial: testing || waitsForBin ? run.serial : null,
+    serial: (testing && run.kind !== 'daily-check') || waitsForBin ? run.serial : null,
     operatorNumber: testing ? run.operatorNumber : (operator?.operatorNumber ?? null),
     lot: strip,
     call: call ? { id: call.id, sinceIso: call.at.toISOString() } : null,

@@ -16,6 +16,8 @@ import {
   type GalleryView,
 } from './samples';
 
+const picture = '2f0c7b8e-1a4d-4e63-9b57-0c1d2e3f4a5b';
+
 /** From sealing to the end of a run, and everything that can come between. */
 export const endViews: Record<string, GalleryView> = {
   'seal-supply-off': shown(
@@ -32,6 +34,45 @@ export const endViews: Record<string, GalleryView> = {
   'seal-screw': shown(running('seal', bothFound(10.81, 12.23), { kind: 'seal', wants: 'seal-screw' }, { supply: off })),
   'operator-check': shown(
     running('check', bothFound(10.81, 12.23), { kind: 'operator-check', question: 'Does the green lamp light?' }),
+  ),
+  'instruction-supply-off': shown(
+    running(
+      'check',
+      bothFound(10.81, 12.23),
+      {
+        kind: 'instruction',
+        text: 'Open the lid and move jumper J2 to position B.',
+        pictureId: picture,
+        supplyOff: true,
+      },
+      { supply: off },
+    ),
+  ),
+  'instruction-waits': shown(
+    running(
+      'check',
+      bothFound(10.81, 12.23),
+      { kind: 'instruction', text: 'Open the lid and move jumper J2 to position B.', pictureId: null, supplyOff: true },
+      { supply: { state: 'maybe-on' } },
+    ),
+  ),
+  'instruction-supply-on': shown(
+    running('check', bothFound(10.81, 12.23), {
+      kind: 'instruction',
+      text: 'Look through the window of the lid. Compare the number on the relay with the card beside the bench; call an engineer if the two are not the same number.',
+      pictureId: picture,
+      supplyOff: false,
+    }),
+  ),
+  soak: shown(
+    running('check', bothFound(10.81, 12.23), {
+      kind: 'measuring',
+      what: { code: 'run.soak', params: { channel: 103 } },
+      done: 12,
+      of: 40,
+      everyMs: 5_000,
+    }),
+    { reading: { volts: 12.5, output: 'on', rail: 'falling' } },
   ),
   '03-pass': shown({
     ...running(null, bothFound(10.81, 12.23), { kind: 'pass', seconds: 38 }, { supply: off }),

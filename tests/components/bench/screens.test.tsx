@@ -62,6 +62,8 @@ describe('what a screen sends', () => {
     ['seat-confirm', /board in, lid closed/i, { kind: 'confirm', what: 'lid-and-board' }],
     ['operator-check', /^yes$/i, { kind: 'answer', ok: true }],
     ['operator-check', /^no$/i, { kind: 'answer', ok: false }],
+    ['instruction-supply-off', /^done$/i, { kind: 'confirm', what: 'instruction-done' }],
+    ['instruction-supply-on', /^done$/i, { kind: 'confirm', what: 'instruction-done' }],
     ['03-pass', /print label again/i, { kind: 'print-label-again' }],
     ['05-fault', /try again/i, { kind: 'try-again' }],
     ['02-idle', /end shift/i, { kind: 'end-shift' }],
@@ -112,6 +114,27 @@ describe('what a screen sends', () => {
 });
 
 describe('what a screen may say', () => {
+  it('tells the operator to open the lid for an instruction only after the read-back, and takes no "done" before', () => {
+    show('instruction-supply-off');
+    expect(document.body.textContent).toContain('Supply is off. You may open the lid.');
+    expect(screen.getByRole('img', { name: 'Picture of what to do' }).getAttribute('src')).toMatch(
+      /^\/api\/files\/2f0c/,
+    );
+    cleanup();
+    show('instruction-waits');
+    expect(document.body.textContent).not.toContain('You may open the lid');
+    expect(screen.queryByRole('button', { name: /^done$/i })).toBeNull();
+    cleanup();
+    show('instruction-supply-on');
+    expect(document.body.textContent).not.toContain('You may open the lid');
+    expect(document.body.textContent).toContain('Keep the lid closed.');
+  });
+
+  it('says how long a soak still takes', () => {
+    show('soak');
+    expect(document.body.textContent).toContain('12 of 40 done, about 3 min left');
+  });
+
   const inTrial = Object.keys(galleryViews).filter((name) => galleryViews[name]!.view.engineering);
   it.each(inTrial)('%s says that it is no production', (name) => {
     show(name);

@@ -115,7 +115,7 @@ export class ScreenInTest {
     return this.until(({ view }) => {
       if (view?.run?.serial !== serial) return false;
       const { screen, supply } = view.run;
-      if (screen.kind === 'reject') return view.screen.kind === 'bin';
+      if (screen.kind === 'reject') return view.screen.kind === 'bin' || view.engineering !== null;
       return screen.kind === 'pass' || (screen.kind === 'no-verdict' && supply.state !== 'on');
     }, 120_000);
   }
@@ -156,6 +156,7 @@ export class ScreenInTest {
       await this.act({ kind: 'lid', closed: true });
       await this.command({ kind: 'confirm', what: 'lid-closed' });
     }
+    if (screen.kind === 'instruction') await this.command({ kind: 'confirm', what: 'instruction-done' });
     if (screen.kind === 'operator-check') await this.command({ kind: 'answer', ok: true });
     if (screen.kind === 'trim' && ['beep-1', 'beep-2', 'turn'].includes(screen.trim.stage)) {
       if (screen.trim.finding === 'no-effect') await this.command({ kind: 'will-not-turn' });

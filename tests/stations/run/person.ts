@@ -45,6 +45,9 @@ export class Person {
           this.fixture.setLid(true);
           this.send({ kind: 'confirm', what: 'lid-closed' });
         });
+    } else if (screen.kind === 'instruction') {
+      if (screen.supplyOff) this.later(500, () => this.fixture.setLid(false));
+      this.later(1500, () => this.send({ kind: 'confirm', what: 'instruction-done' }));
     } else if (screen.kind === 'operator-check') this.later(700, () => this.send({ kind: 'answer', ok: true }));
     else if (screen.kind === 'trim') {
       const { stage, direction, turns } = screen.trim;
