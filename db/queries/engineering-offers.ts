@@ -91,6 +91,18 @@ export async function endOpenOffer(
   return row ?? null;
 }
 
+/** Ends what is still open of a revision, on every station. */
+export async function endOpenOffersOf(
+  tx: Transaction,
+  revisionId: string,
+  by: { accountId: string; at: Date },
+): Promise<void> {
+  await tx
+    .update(engineeringOffers)
+    .set({ endedAt: by.at, endedBy: by.accountId })
+    .where(and(eq(engineeringOffers.revisionId, revisionId), isNull(engineeringOffers.endedAt)));
+}
+
 /** What an offer offered, ended or not. */
 export async function findOfferHead(db: Reader, offerId: string) {
   const [row] = await db

@@ -22,6 +22,7 @@ const columns = {
   sequence: sequenceRevisions.data,
   sequenceNumber: sequenceRevisions.number,
   sequenceStatus: sequenceRevisions.status,
+  withdrawnReason: sequenceRevisions.withdrawnReason,
 };
 
 export type BenchLot = NonNullable<Awaited<ReturnType<typeof findBenchLot>>>;

@@ -52,6 +52,7 @@ export const benchSayings = {
   'attempts-used': ['serial', 'most'],
   'station-in-use': [],
   'sequence-not-released': ['boardType'],
+  'sequence-withdrawn': ['revision', 'reason'],
   'needs-controller': [],
   'needs-wiper-probe': [],
   'instruments-away': [],

@@ -1,6 +1,6 @@
 import { say } from '../bench/sayings';
 import type { Say } from '../contracts/bench-view';
-import type { LotState } from '../contracts/stored-states';
+import type { LotState, SequenceRevisionState } from '../contracts/stored-states';
 import type { BoardStanding } from '../decision/board-standing';
 
 /** What is on record of a scanned serial, of the lot in work, and of the sequence that the lot is tested with. */
@@ -12,7 +12,8 @@ export interface BoardFacts {
   unit: { lotCode: string; standing: BoardStanding } | null;
   /** Where its open run is, if it has one. */
   inTestAt: string | null;
-  sequence: { released: boolean };
+  /** `withdrawnReason` null: not withdrawn. */
+  sequence: { number: number; status: SequenceRevisionState; withdrawnReason: string | null };
 }
 
 export type BoardAdmission = { allowed: true; retestOrderId: string | null } | { allowed: false; refusal: Say };
@@ -27,11 +28,22 @@ export function admitBoard({ serial, lot, unit, inTestAt, sequence }: BoardFacts
   if (lot.held) return refuse(say('lot-on-hold', { lot: lot.code }));
   if (lot.state === 'paused') return refuse(say('lot-paused', { lot: lot.code }));
   if (lot.state !== 'open') return refuse(say('lot-not-open', { lot: lot.code }));
-  if (!sequence.released) return refuse(say('sequence-not-released', { boardType: lot.boardTypeCode }));
+  const unusable = refuseSequence(sequence, lot.boardTypeCode);
+  if (unusable) return refuse(unusable);
   if (!new RegExp(lot.serialPattern).test(serial)) return refuse(say('serial-wrong-form', { serial }));
   if (!unit) return refuse(say('serial-unknown', { serial }));
   if (unit.lotCode !== lot.code) return refuse(say('serial-of-other-lot', { serial, lot: unit.lotCode }));
   return admitStanding(serial, unit.standing, inTestAt);
+}
+
+/** Why no board may be begun with the revision that a lot pins; null when it may. A superseded one runs on in its lots. */
+export function refuseSequence(
+  { number, status, withdrawnReason }: BoardFacts['sequence'],
+  boardType: string,
+): Say | null {
+  if (status === 'withdrawn')
+    return say('sequence-withdrawn', { revision: `r${number}`, reason: withdrawnReason ?? '' });
+  return status === 'released' || status === 'superseded' ? null : say('sequence-not-released', { boardType });
 }
 
 function admitStanding(serial: string, standing: BoardStanding, inTestAt: string | null): BoardAdmission {

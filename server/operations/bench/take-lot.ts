@@ -4,6 +4,7 @@ import { findBenchLot } from '@/db/queries/station-lots';
 import { say } from '@/lib/bench/sayings';
 import type { BenchAnswerTo, BenchAsk, BenchPlace, BenchRefusal } from '@/lib/bench/types';
 import type { Say } from '@/lib/contracts/bench-view';
+import { refuseSequence } from '@/lib/run/admit-board';
 import { readLotStrip } from '../runs/lot-strip';
 import { nextRunOf } from './next-run';
 import { readStanding } from './read-standing';
@@ -21,6 +22,9 @@ export async function takeLot(
   if (lot.heldAt) return refuse(say('lot-on-hold', { lot: lot.code }));
   if (lot.state === 'paused') return refuse(say('lot-paused', { lot: lot.code }));
   if (lot.state !== 'open') return refuse(say('lot-not-open', { lot: lot.code }));
+  const { sequenceNumber: number, sequenceStatus: status, withdrawnReason } = lot;
+  const unusable = refuseSequence({ number, status, withdrawnReason }, lot.boardTypeCode);
+  if (unusable) return refuse(unusable);
   const [strip, { standing }] = await Promise.all([
     readLotStrip(db, lot),
     readStanding(db, bench, { ...who, lotId: lot.lotId, offerId: null }),

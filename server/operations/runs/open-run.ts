@@ -56,7 +56,7 @@ export async function openRun(db: Database, bench: BenchRow, ask: BoardAsk, who:
     },
     unit: unit && record && { lotCode: unit.lotCode, standing: boardStanding(record) },
     inTestAt: inTest?.stationCode ?? null,
-    sequence: { released: lot.sequenceStatus === 'released' },
+    sequence: { number: lot.sequenceNumber, status: lot.sequenceStatus, withdrawnReason: lot.withdrawnReason },
   });
   if (!admission.allowed) return refuse(admission.refusal);
 

@@ -18,7 +18,7 @@ const facts = (
   },
   unit: { lotCode: '2648-B', standing },
   inTestAt: null,
-  sequence: { released: true },
+  sequence: { number: 2, status: 'released' as const, withdrawnReason: null },
   ...over,
 });
 const refusal = (over: Partial<BoardFacts>, standing?: BoardStanding) => {
@@ -33,6 +33,10 @@ describe('a board is admitted', () => {
       allowed: true,
       retestOrderId: 'o1',
     });
+  });
+  it('with a superseded revision, which runs on in the lots that pin it', () => {
+    const sequence = { number: 1, status: 'superseded' as const, withdrawnReason: null };
+    expect(admitBoard(facts({ sequence }))).toMatchObject({ allowed: true });
   });
 });
 
@@ -59,7 +63,8 @@ describe('a board is refused, with its reason', () => {
     ['lot-on-hold', { lot: { ...lot, held: true } }],
     ['lot-paused', { lot: { ...lot, state: 'paused' } }],
     ['lot-not-open', { lot: { ...lot, state: 'closed' } }],
-    ['sequence-not-released', { sequence: { released: false } }],
+    ['sequence-not-released', { sequence: { number: 2, status: 'submitted', withdrawnReason: null } }],
+    ['sequence-withdrawn', { sequence: { number: 2, status: 'withdrawn', withdrawnReason: 'Wrong window.' } }],
     ['serial-wrong-form', { serial: 'CB2420264800184' }],
     ['serial-wrong-form', { serial: `${serial}7` }],
     ['serial-unknown', { unit: null }],
