@@ -15,6 +15,7 @@ const menu: readonly MenuItem[] = [
   { href: '/board-types', label: 'Board types' },
   { href: '/sequences', label: 'Sequences' },
   { href: '/instruments', label: 'Instruments' },
+  { href: '/trail', label: 'Trail' },
   { href: '/administration', label: 'Administration' },
 ];
 

@@ -6,6 +6,7 @@ import { engineeringSurface } from './surface/engineering';
 import { offersSurface } from './surface/offers';
 import { peopleSurface } from './surface/people';
 import { qualitySurface } from './surface/quality';
+import { trailSurface } from './surface/trail';
 import { sequencesSurface } from './surface/sequences';
 
 /** One area's share of everything that can be reached from outside. A test fails for anything found but not listed, and the reverse. */
@@ -28,6 +29,7 @@ const areas: Surface[] = [
   dryRunsSurface,
   offersSurface,
   qualitySurface,
+  trailSurface,
   sequencesSurface,
 ];
 
