@@ -3,20 +3,37 @@ import { height, type PointLimits } from './predicted-supply-scale';
 
 type Scale = (value: number) => number;
 
-export function LimitBands({ limits, y, left, right }: { limits: PointLimits; y: Scale; left: number; right: number }) {
-  return (['release', 'trip'] as const).map((point) => {
+interface LimitsProps {
+  limits: PointLimits;
+  y: Scale;
+  left: number;
+  right: number;
+}
+const points = ['release', 'trip'] as const;
+
+export function LimitBands({ limits, y, left, right }: LimitsProps) {
+  return points.map((point) => {
     const { min, max } = limits[`${point}Volts`];
-    const labelAt = left + (right - left) * (point === 'trip' ? 0.16 : 0.4);
-    const labelY = point === 'trip' ? y(min) + 16 : y(max) - 6;
     return (
       <g key={point}>
         <rect x={left} width={right - left} y={y(max)} height={y(min) - y(max)} fill={`var(--sw-${point}-wash)`} />
         <path d={`M${left} ${y(max)}H${right}M${left} ${y(min)}H${right}`} stroke={`var(--sw-${point})`} />
-        <path
-          d={`M${labelAt - 14} ${labelY + (point === 'trip' ? -9 : 0)}h10l-5 ${point === 'trip' ? 9 : -9}z`}
-          fill={`var(--sw-${point})`}
-        />
-        <text x={labelAt} y={labelY} fontSize={13} fill={`var(--sw-${point})`}>
+      </g>
+    );
+  });
+}
+
+/** Over the trace, on a ground of their own. */
+export function LimitNames({ limits, y, left, right }: LimitsProps) {
+  return points.map((point) => {
+    const { min, max } = limits[`${point}Volts`];
+    const isTrip = point === 'trip';
+    const x = left + (right - left) * (isTrip ? 0.2 : 0.4);
+    const textY = isTrip ? y(min) + 16 : y(max) - 7;
+    return (
+      <g key={point} fill={`var(--sw-${point})`} stroke="var(--sw-paper)" strokeWidth={5} paintOrder="stroke">
+        <path d={`M${x - 14} ${textY + (isTrip ? -9 : 0)}h10l-5 ${isTrip ? 9 : -9}z`} />
+        <text x={x} y={textY} fontSize={13}>
           {point} limits
         </text>
       </g>

@@ -5,7 +5,7 @@ import { useId, type KeyboardEvent, type ReactNode } from 'react';
 import { Table, Td, Th } from '@/components/ui/table';
 import type { Prediction } from '@/lib/prediction/types';
 import { ChartWithTable } from './chart-with-table';
-import { LoadBar, LimitBands, SecondsAxis, StepNumbers, VoltsAxis } from './predicted-supply-parts';
+import { LimitBands, LimitNames, LoadBar, SecondsAxis, StepNumbers, VoltsAxis } from './predicted-supply-parts';
 import { height, stepPath, voltScale, type PointLimits } from './predicted-supply-scale';
 import { useElementWidth } from './quality/use-element-width';
 
@@ -141,6 +141,7 @@ function Drawing({ prediction, comparison, limits, steps, selectedId, onSelect }
               fill={`var(--sw-${point})`}
             />
           ))}
+          <LimitNames limits={limits} y={scale.y} left={left} right={width - right} />
           <LoadBar stretches={prediction.loadOn} x={x} left={left} right={width - right} top={scale.bottom + 12} />
           <SecondsAxis x={x} lastMs={lastMs} width={width} />
         </g>

@@ -1,6 +1,7 @@
 'use client';
 
 import { scaleLinear } from 'd3-scale';
+import { useId } from 'react';
 import { Table, Td, Th } from '@/components/ui/table';
 import { PointMark } from '@/components/ui/point-mark';
 import type { ReleaseHistogram as Histogram } from '@/lib/circuit/monte-carlo/types';
@@ -62,7 +63,9 @@ function Drawing(props: ReleaseHistogramProps) {
   const x = scaleLinear([low, high], [margin, width - margin]);
   const most = Math.max(...bins.map(({ count }) => count));
   const y = scaleLinear([0, most], [base, 18]);
-  const ticks = x.ticks(5);
+  const ticks = x.ticks(4).filter((tick) => x(tick) > margin + 12 && x(tick) < width - margin - 12);
+  const hatch = useId();
+  const gap = x(bins[0]!.high) - x(bins[0]!.low) > 3 ? 0.7 : 0;
   return (
     <div ref={box}>
       <svg
@@ -74,7 +77,7 @@ function Drawing(props: ReleaseHistogramProps) {
         className="block max-w-full"
       >
         <defs>
-          <pattern id="outside-hatch" width={5} height={5} patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
+          <pattern id={hatch} width={5} height={5} patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
             <rect width={5} height={5} fill="var(--sw-reject)" />
             <path d="M0 0V5" stroke="var(--sw-paper)" strokeWidth={2} />
           </pattern>
@@ -90,10 +93,10 @@ function Drawing(props: ReleaseHistogramProps) {
           <rect
             key={from}
             x={x(from)}
-            width={Math.max(0.5, x(to) - x(from) - 0.7)}
+            width={Math.max(0.5, x(to) - x(from) - gap)}
             y={y(count)}
             height={base - y(count)}
-            fill={outside ? 'url(#outside-hatch)' : 'var(--sw-release)'}
+            fill={outside ? `url(#${hatch})` : 'var(--sw-release)'}
           />
         ))}
         <path d={`M${x(limits.min)} ${base}V8h-9zM${x(limits.max)} ${base}V8h9z`} fill="var(--sw-release)" />

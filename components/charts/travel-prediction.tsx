@@ -170,14 +170,20 @@ function TravelAxis({ last, unit, x }: { last: number; unit: 'turns' | 'degrees'
   const base = height - margin.bottom + 3;
   return (
     <g className="font-num" fontSize={14} fill="var(--sw-ink-2)" textAnchor="middle">
-      {ticks.map((tick, i) => (
+      {ticks.map((tick) => (
         <g key={tick}>
           <path d={`M${x(toTurns(tick))} ${base}v8`} stroke="var(--sw-ink-2)" />
-          <text x={x(toTurns(tick))} y={height - 7} textAnchor={i === ticks.length - 1 ? 'end' : 'middle'}>
-            {i === ticks.length - 1 ? `${tick} ${unit === 'degrees' ? '°' : 'turns'}` : tick}
-          </text>
+          {tick < whole * 0.8 ? (
+            <text x={x(toTurns(tick))} y={height - 7}>
+              {tick}
+            </text>
+          ) : null}
         </g>
       ))}
+      <path d={`M${x(last)} ${base}v8`} stroke="var(--sw-ink-2)" />
+      <text x={x(last)} y={height - 7} textAnchor="end">
+        {unit === 'degrees' ? `${Math.round(whole)}°` : `${whole} turns`}
+      </text>
     </g>
   );
 }
