@@ -1,5 +1,7 @@
 import { z } from 'zod';
 import type { RejectReason } from '../run/types';
+import type { Sequence } from '../sequence/step';
+import type { BoardType } from './board-type';
 import type { DryRunState } from './stored-states';
 
 /** What a dry run is asked to do. Boards are drawn from the seed, so two drafts meet the same boards. */
@@ -103,3 +105,18 @@ export interface DryRunView {
   askedBy: string;
   askedAtIso: string;
 }
+
+/** A dry run shown whole, with what it ran on. */
+export interface DryRunPage {
+  view: DryRunView;
+  revisionId: string;
+  sequenceId: string;
+  sequenceName: string;
+  sequence: Sequence;
+  releasedSequence: Sequence | null;
+  boardType: BoardType;
+}
+
+export const askDryRunSchema = z.object({ revisionId: z.uuid(), settings: dryRunSettingsSchema });
+export const dryRunIdSchema = z.object({ id: z.uuid() });
+export const keepDryRunSchema = z.object({ id: z.uuid(), kept: z.boolean() });

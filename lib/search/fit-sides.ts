@@ -17,8 +17,20 @@ export const gridsOf = (sides: Pair<Side>, which: 'wide' | 'fine') => ({
   release: sides.release[which],
 });
 
+/** The last weighing of each pair of sides: the outcome of a move is looked at with the beliefs that chose it. */
+const weighed = new WeakMap<Pair<Side>, { level: Level; beliefs: Pair<Belief> }>();
+
+/** Both fine posteriors under the assumptions of a level, as `weighSides` gives them. */
+export function believeSides(settings: SearchSettings, level: Level, sides: Pair<Side>): Pair<Belief> {
+  const known = weighed.get(sides);
+  if (known?.level === level) return known.beliefs;
+  const beliefs = weighSides(settings, level, sides, 'fine');
+  weighed.set(sides, { level, beliefs });
+  return beliefs;
+}
+
 /** Both posteriors under the assumptions of a level. */
-export function weighSides(settings: SearchSettings, level: Level, sides: Pair<Side>, which: 'wide' | 'fine') {
+function weighSides(settings: SearchSettings, level: Level, sides: Pair<Side>, which: 'wide' | 'fine') {
   const grids = gridsOf(sides, which);
   const weights = coupledWeights(settings, level, grids);
   return { trip: weighBelief(grids.trip, weights.trip), release: weighBelief(grids.release, weights.release) };
@@ -58,7 +70,7 @@ export function fitSides(unfitted: Unfitted, lost: Pair<boolean>): Fitted {
         if (placeAnew[name]) placed[name] = refilled(sides[name], windowAround(wide[name], ranges[name], noise));
       sides = placed;
     }
-    let beliefs = weighSides(settings, assumptions, sides, 'fine');
+    let beliefs = believeSides(settings, assumptions, sides);
     for (let i = 0; i < mostResizings; i++) {
       const resized = { ...sides };
       for (const name of pointNames) {
@@ -67,7 +79,7 @@ export function fitSides(unfitted: Unfitted, lost: Pair<boolean>): Fitted {
       }
       if (resized.trip === sides.trip && resized.release === sides.release) break;
       sides = resized;
-      beliefs = weighSides(settings, assumptions, sides, 'fine');
+      beliefs = believeSides(settings, assumptions, sides);
     }
     const allowed = allowedLevel(settings, assumptions, gridsOf(sides, 'wide'), beliefs, unseenMass);
     if (allowed === assumptions) return { sides, assumptions, beliefs };

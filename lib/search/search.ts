@@ -2,7 +2,7 @@ import { type Pair, assumedMass } from './assumptions';
 import type { Belief } from './belief';
 import { atBottom, atTop, decide } from './decide';
 import { freshCheck, observeCheck } from './end-check';
-import { fitSides, gridsOf, weighSides } from './fit-sides';
+import { believeSides, fitSides, gridsOf } from './fit-sides';
 import { type Probe, absorbProbe, flatPosterior } from './grid-posterior';
 import { levelRanges, wideWindow } from './level-ranges';
 import { type MoveValue, valueMove } from './move-value';
@@ -106,7 +106,7 @@ export function observeSearch(state: SearchState, seen: SearchObservation): Sear
     extraVariance: learnt.extraVariance,
   };
 
-  const believed = weighSides(settings, state.assumptions, sides, 'fine')[armed];
+  const believed = believeSides(settings, state.assumptions, sides)[armed];
   valueMove(believed, probe.from, probe.to, Math.hypot(settings.noiseVolts, Math.sqrt(probe.extraVariance)), outcome);
   const predicted = flipped ? outcome.flipChance : 1 - outcome.flipChance;
 

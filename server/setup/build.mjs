@@ -45,7 +45,11 @@ export async function build() {
   await runCommand(process.execPath, ['node_modules/next/dist/bin/next', 'build'], { env: environment });
   const esbuild = await import('esbuild');
   await esbuild.build({
-    entryPoints: { server: 'server/index.ts' },
+    entryPoints: {
+      server: 'server/index.ts',
+      'dry-run-child': 'server/dry-runs/child.ts',
+      'dry-run-worker': 'server/dry-runs/worker.ts',
+    },
     outdir: 'dist',
     outExtension: { '.js': '.mjs' },
     bundle: true,

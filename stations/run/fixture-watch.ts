@@ -1,6 +1,5 @@
 import type { RunEvent } from '@/lib/run/types';
 import type { Clock } from '../clock/clock';
-import type { FixtureController } from '../instruments/fixture-controller';
 import type { Answer } from './perform-effect';
 
 type Change = { kind: 'lid'; closed: boolean } | { kind: 'board'; present: boolean };
@@ -12,14 +11,14 @@ export class FixtureWatch {
   private lastPollMs: number;
 
   constructor(
-    private readonly controller: FixtureController | null,
-    private readonly clock: Clock,
+    private readonly hasController: boolean,
+    private readonly clock: Pick<Clock, 'now'>,
   ) {
     this.lastPollMs = clock.now();
   }
 
   isDue(everyMs: number): boolean {
-    return this.controller !== null && this.clock.now() - this.lastPollMs >= everyMs;
+    return this.hasController && this.clock.now() - this.lastPollMs >= everyMs;
   }
 
   /** An effect of the run read the fixture itself. */
@@ -29,11 +28,8 @@ export class FixtureWatch {
     this.boardPresent = answer.boardPresent;
   }
 
-  /** Reads both switches. Rejects as the controller does. */
-  async poll(): Promise<Change[]> {
-    if (!this.controller) return [];
-    const closed = await this.controller.lidClosed();
-    const present = await this.controller.boardPresent();
+  /** Both switches have just been read: what has changed. */
+  see(closed: boolean, present: boolean): Change[] {
     this.lastPollMs = this.clock.now();
     const changes: Change[] = [];
     if (closed !== this.lidClosed) changes.push({ kind: 'lid', closed });

@@ -19,7 +19,7 @@ export interface Performing {
 
 type Unstamped<E> = E extends unknown ? Omit<E, 'atMs'> : never;
 export type Answer = Unstamped<Extract<RunEvent, { id: number }>>;
-type Effect = Exclude<RunEffect, { kind: 'record-run' }>;
+export type Effect = Exclude<RunEffect, { kind: 'record-run' }>;
 
 /** Does one thing at the bench and says what came of it. Rejects with an instrument's or the station's own fault. */
 export async function performEffect(effect: Effect, performing: Performing): Promise<Answer> {
@@ -117,9 +117,9 @@ async function refuseTripped({ supply }: Bench, commandedVolts: number, volts: n
   if (volts > commandedVolts - shortfallVolts) return;
   if (await supply.overvoltageTripped()) throw overvoltageFault(commandedVolts);
 }
-const shortfallVolts = 0.5;
+export const shortfallVolts = 0.5;
 
-function required<T>(controller: T | null): T {
+export function required<T>(controller: T | null): T {
   if (controller) return controller;
   throw new StationFault({ reason: 'fixture-fault', code: 'F-106', detail: 'This station has no fixture controller.' });
 }

@@ -26,8 +26,9 @@ type Effect = Exclude<RunEffect, { kind: 'record-run' }>;
 type Outcome = { answer: Answer } | { fault: Fault };
 type Unstamped<E> = E extends unknown ? Omit<E, 'atMs'> : never;
 
-const pollBetweenEffectsMs = 400;
-const pollWhileWaitingMs = 100;
+/** How often lid and board are looked at beside the effects, and while a person has to act. */
+export const pollBetweenEffectsMs = 400;
+export const pollWhileWaitingMs = 100;
 
 /** Performs one run: does what the engine asks, one effect at a time, and tells it what came of it. Decides nothing. */
 export class RunPerformer {
@@ -35,6 +36,8 @@ export class RunPerformer {
   private shown: RunView;
   private next: Effect | null = null;
   private current: { effect: Effect; abort: AbortController; superseded: boolean } | null = null;
+  /** Of the effect being performed; kept for the next one until it was needed. */
+  private abort = new AbortController();
   private watching = false;
   private over = false;
   private wake: () => void = () => {};
@@ -44,7 +47,7 @@ export class RunPerformer {
   constructor(private readonly options: RunPerformerOptions) {
     const { plan, clock, bench } = options;
     this.startedAtMs = clock.now();
-    this.fixture = new FixtureWatch(bench.controller, clock);
+    this.fixture = new FixtureWatch(bench.controller !== null, clock);
     const begun = beginRun(plan, this.startedAtMs);
     this.state = begun.state;
     this.shown = viewRun(begun.state);
@@ -53,6 +56,11 @@ export class RunPerformer {
 
   view(): RunView {
     return this.shown;
+  }
+
+  /** Place in the sequence of the step that the run is in, or ended in. */
+  get stepIndex(): number {
+    return this.state.stepIndex;
   }
 
   /** What a person or the bench did. Taken at once, whatever is being performed. */
@@ -73,7 +81,8 @@ export class RunPerformer {
 
   private async performNext(effect: Effect): Promise<void> {
     this.next = null;
-    const performed = { effect, abort: new AbortController(), superseded: false };
+    if (this.abort.signal.aborted) this.abort = new AbortController();
+    const performed = { effect, abort: this.abort, superseded: false };
     this.current = performed;
     const outcome = await this.withinDeadline(effect, performed.abort);
     this.current = null;
@@ -131,7 +140,11 @@ export class RunPerformer {
   }
 
   private async pollFixture(): Promise<void> {
-    for (const change of await this.fixture.poll()) if (!this.over) this.feed(change);
+    const { controller } = this.options.bench;
+    if (!controller) return;
+    const closed = await controller.lidClosed();
+    const present = await controller.boardPresent();
+    for (const change of this.fixture.see(closed, present)) if (!this.over) this.feed(change);
   }
 
   private async readSupply(): Promise<void> {

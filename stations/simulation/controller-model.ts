@@ -12,7 +12,7 @@ export class ControllerModel {
   private pulseEndsMs = -Infinity;
 
   constructor(
-    private readonly clock: Clock,
+    private readonly clock: Pick<Clock, 'now'>,
     readonly fixture: SimulatedFixture,
     private readonly random: Random,
   ) {}

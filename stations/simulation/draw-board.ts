@@ -15,6 +15,8 @@ export interface DrawOptions {
   targetVolts?: number;
   /** The board's own comparator noise; the board type's where none is given. */
   noiseVolts?: number;
+  /** False: as parts come, with boards among them that no screw brings inside the limits. */
+  inspected?: boolean;
 }
 
 const mostDraws = 400;
@@ -36,12 +38,14 @@ export function drawBoard(
   const random = seededRandom(seed);
   const { tripVolts } = boardType.limits;
   const targetVolts = options.targetVolts ?? (tripVolts.min + tripVolts.max) / 2;
+  const { inspected = true } = options;
   for (let draw = 0; draw < mostDraws; draw++) {
     const design = drawParts(boardType.design, tolerancesOf(boardType), () => deviationOf(random.normal()));
     const targetWiper = wiperForTarget(design, targetVolts);
-    if (targetWiper === null || !meetsLimits(boardType, design, targetWiper)) continue;
-    const screwTurns = drawScrew(boardType, design, targetVolts, random);
-    if (screwTurns === null) continue;
+    if (inspected && (targetWiper === null || !meetsLimits(boardType, design, targetWiper))) continue;
+    const drawn = drawScrew(boardType, design, targetVolts, random);
+    if (inspected && drawn === null) continue;
+    const screwTurns = drawn ?? boardType.trimmer.turns * random.uniform();
     const truth: BoardTruth = {
       ...sound,
       design,
@@ -50,7 +54,7 @@ export function drawBoard(
       stops: { minTurns: 0, maxTurns: boardType.trimmer.turns },
       noiseVolts: options.noiseVolts ?? boardType.search.noiseVolts,
     };
-    return fitDefect(truth, defect, { targetTurns: turnsAt(boardType.trimmer, targetWiper), random });
+    return fitDefect(truth, defect, { targetTurns: turnsAt(boardType.trimmer, targetWiper ?? 0.5), random });
   }
   throw new RangeError(`No parts of board type ${boardType.code} reach ${targetVolts} V within its limits.`);
 }

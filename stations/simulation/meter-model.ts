@@ -31,7 +31,7 @@ export class MeterModel {
   private relay = { ms: -Infinity, leftVolts: 0 };
 
   constructor(
-    private readonly clock: Clock,
+    private readonly clock: Pick<Clock, 'now'>,
     private readonly fixture: SimulatedFixture,
     private readonly random: Random,
     private readonly character: MeterCharacter,

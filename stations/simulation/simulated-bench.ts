@@ -11,7 +11,7 @@ import { SimulatedSupply } from './simulated-supply';
 import { drawSupplyCharacter, SupplyModel, type SupplyCharacter } from './supply-model';
 
 export interface SimulatedBenchOptions {
-  clock: Clock;
+  clock: Pick<Clock, 'now'>;
   /** Fixes the station's own offsets and all its noise. */
   seed: number;
   hasController: boolean;
@@ -53,7 +53,7 @@ export function modelBench(options: SimulatedBenchOptions): BenchModels {
   };
 }
 
-export function simulateBench(options: SimulatedBenchOptions): SimulatedBench {
+export function simulateBench(options: SimulatedBenchOptions & { clock: Clock }): SimulatedBench {
   const { clock } = options;
   const { fixture, serialNumber, ...models } = modelBench(options);
   const supply = new SimulatedSupply(clock, models.supply, serialNumber);

@@ -39,7 +39,7 @@ export class SimulatedFixture {
   private atMs = 0;
 
   constructor(
-    private readonly clock: Clock,
+    private readonly clock: Pick<Clock, 'now'>,
     private readonly random: Random,
     readonly character: FixtureCharacter = usualFixture,
   ) {

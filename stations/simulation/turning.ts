@@ -5,7 +5,7 @@ import type { SimulatedFixture } from './simulated-fixture';
 
 interface Screw {
   fixture: SimulatedFixture;
-  clock: Clock;
+  clock: Pick<Clock, 'now' | 'after'>;
 }
 
 /** Turns a second: brisk, and slowly towards the second beep or the dial's end mark. A single-turn part is turned by degrees. */
@@ -27,23 +27,37 @@ const watchEveryMs = 20;
 const patienceMs = 60_000;
 
 /** Turns by hand, at an even pace. Resolves when done. */
-export async function turnScrew({ fixture, clock }: Screw, turns: number): Promise<void> {
+export function turnScrew({ fixture, clock }: Screw, turns: number): Promise<void> {
   fixture.startTurning(turns, freeTurnsPerSecond);
-  await clock.sleep((Math.abs(turns) / freeTurnsPerSecond) * 1000);
-  fixture.stopTurning();
+  return new Promise((resolve) => {
+    clock.after((Math.abs(turns) / freeTurnsPerSecond) * 1000, () => {
+      fixture.stopTurning();
+      resolve();
+    });
+  });
+}
+
+export interface PromptedTurn extends Screw {
+  random: Random;
+  error?: TurnError;
+  prompt(): TrimView | null;
+  onMove(): void;
 }
 
 /**
  * Does what the screen asks as a person does: towards a beep until the screen says it came, plus the time to react; after
  * a dial that counts down until it shows the end; or, where the dial stands still, a stated turn with a person's error.
  */
-export async function turnAsPrompted(
-  job: Screw & { random: Random; error?: TurnError; prompt(): TrimView | null; onMove(): void },
-): Promise<void> {
+export function turnAsPrompted(job: PromptedTurn): Promise<void> {
+  return new Promise((resolve) => beginTurnAsPrompted(job, resolve));
+}
+
+/** The same, calling back when the hand has let go. */
+export function beginTurnAsPrompted(job: PromptedTurn, onDone: () => void): void {
   const { fixture, clock, random, error = usualError, prompt, onMove } = job;
   const asked = prompt();
   const board = fixture.seated;
-  if (!asked?.direction || !board) return;
+  if (!asked?.direction || !board) return onDone();
   const { stage, direction } = asked;
   const listening = stage === 'beep-1' || stage === 'beep-2';
   const { brisk, slow } = paceOf(board.truth.trimmer.turns);
@@ -57,20 +71,30 @@ export async function turnAsPrompted(
   const turns = listening || isLive(asked) ? farthest : Math.max(0, estimate);
   fixture.startTurning(way * turns, pace);
   const doneAt = clock.now() + Math.min(patienceMs, (turns / pace) * 1000);
-  while (clock.now() < doneAt) {
-    await clock.sleep(Math.min(watchEveryMs, doneAt - clock.now()));
+
+  const letGo = () => {
+    fixture.stopTurning();
+    onDone();
+  };
+  const look = () => {
     onMove();
     const view = prompt();
     if (view?.stage !== stage || view.direction !== direction) {
-      await clock.sleep(Math.max(reaction.leastMs, reaction.meanMs + reaction.sdMs * random.normal()));
-      break;
+      clock.after(Math.max(reaction.leastMs, reaction.meanMs + reaction.sdMs * random.normal()), letGo);
+      return;
     }
-    if (!isLive(view)) continue;
-    if (view.turns! < slow * letGoSeconds) break;
-    if (pace > slow * haste && view.turns! < brisk * easeSeconds) {
-      pace = slow * haste;
-      fixture.startTurning(way * farthest, pace);
+    if (isLive(view)) {
+      if (view.turns! < slow * letGoSeconds) return letGo();
+      if (pace > slow * haste && view.turns! < brisk * easeSeconds) {
+        pace = slow * haste;
+        fixture.startTurning(way * farthest, pace);
+      }
     }
-  }
-  fixture.stopTurning();
+    watch();
+  };
+  const watch = () => {
+    if (clock.now() >= doneAt) return letGo();
+    clock.after(Math.min(watchEveryMs, doneAt - clock.now()), look);
+  };
+  watch();
 }
