@@ -15,6 +15,7 @@ import { comparisonFactors, labelReader, type ShiftClock } from './comparison-fa
 import { boardsOfBaseline, limitsOfFrozen, type FrozenFigures } from './frozen-baseline';
 import { binWidth, histogramBins } from './histogram-bins';
 import { lotYields } from './lot-yields';
+import { quotedOfStudy, quotedOfValues } from './quoted-index';
 import { markOf, measuredValues, type ReviewBoard } from './review-board';
 import { countBroken, runStretches } from './run-stretches';
 
@@ -52,6 +53,7 @@ export function reviewLot(question: ReviewQuestion): LotReview {
   const compared = compareGroups(values, boards.map(labelReader(factor, components, shifts)));
   const stationCodes = [...new Set(boards.map((board) => board.stationCode))].sort();
   const width = binWidth(own.values, limits);
+  const study = capabilityOf(own.values, limits);
   return {
     quantity,
     size: question.size,
@@ -70,8 +72,11 @@ export function reviewLot(question: ReviewQuestion): LotReview {
     stretches: runStretches(chosen(own.signals, view.rules), own.z, own.places),
     broken: countBroken(own.signals),
     yields: lotYields(boards, view.interval),
-    quoted: { trip: quotedIndex(question, 'trip-volts'), release: quotedIndex(question, 'release-volts') },
-    capability: capabilityOf(own.values, limits),
+    quoted: {
+      trip: quotedIndex(question, 'trip-volts', { series: own, study }),
+      release: quotedIndex(question, 'release-volts', { series: own, study }),
+    },
+    capability: study,
     deviation: standardDeviation(own.values),
     bins: width === null ? [] : histogramBins(own.values, width),
     factors,
@@ -83,25 +88,34 @@ export function reviewLot(question: ReviewQuestion): LotReview {
 const chosen = (signals: readonly RunSignal[], rules: readonly RunRule[]) =>
   signals.filter((signal) => rules.includes(signal.rule));
 
-/** Values of a quantity with what all eight rules say of them; no rule speaks without a frozen baseline. */
-function ruledSeries({ boards, baselines }: ReviewQuestion, quantity: ChartQuantity) {
+/** Values of a quantity with what the rules say of them; no rule speaks without a frozen baseline. */
+function ruledSeries(
+  { boards, baselines }: ReviewQuestion,
+  quantity: ChartQuantity,
+  rules: readonly RunRule[] = runRules,
+) {
   const { values, places } = measuredValues(boards, quantity);
   const stored = baselines[quantity];
   const z = stored ? standardised(values, limitsOfFrozen(stored)) : [];
-  return { values, places, z, signals: runSignals(z, runRules) };
+  return { values, places, z, signals: runSignals(z, rules) };
 }
 
 function capabilityOf(values: readonly number[], limits: ReviewLimits | null): CapabilityResult {
   return limits ? capabilityStudy(values, limits) : { kind: 'noLimits' };
 }
 
-function quotedIndex(question: ReviewQuestion, quantity: ChartQuantity): QuotedIndex | null {
-  const { values, signals } = ruledSeries(question, quantity);
-  const study = capabilityOf(values, question.limits[quantity] ?? null);
-  if (study.kind !== 'found') return null;
-  const index = study.quoted === 'percentile' ? study.percentile?.cpk : study.shortTerm?.cpk;
-  if (index === undefined) return null;
-  return { index, method: study.quoted, stable: chosen(signals, question.view.rules).length === 0 };
+/** Of the quantity shown from its study; of the other one without a study of its own. */
+function quotedIndex(
+  question: ReviewQuestion,
+  quantity: ChartQuantity,
+  shown: { series: ReturnType<typeof ruledSeries>; study: CapabilityResult },
+): QuotedIndex | null {
+  const isShown = quantity === question.view.quantity;
+  const series = isShown ? shown.series : ruledSeries(question, quantity, question.view.rules);
+  const quoted = isShown
+    ? quotedOfStudy(shown.study)
+    : quotedOfValues(series.values, question.limits[quantity] ?? null);
+  return quoted && { ...quoted, stable: chosen(series.signals, question.view.rules).length === 0 };
 }
 
 function baselineOf({ baselines, view }: ReviewQuestion, values: readonly number[]): LotReview['baseline'] {

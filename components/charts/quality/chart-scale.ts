@@ -21,19 +21,19 @@ export const boardsOnPhone = 80;
 
 export function chartBox(width: number): ChartBox {
   const narrow = width < narrowBelow;
-  const plotRight = width - (narrow ? 142 : 310);
+  const plotRight = width - (narrow ? 152 : 310);
   const top = narrow ? 12 : 36;
   const bottom = top + (narrow ? 240 : 250);
   return {
     width,
     narrow,
-    plotLeft: narrow ? 54 : 64,
+    plotLeft: 64,
     plotRight,
     top,
     bottom,
     height: bottom + 58,
     histLeft: plotRight + (narrow ? 14 : 18),
-    histRight: width - (narrow ? 62 : 92),
+    histRight: width - (narrow ? 74 : 92),
   };
 }
 

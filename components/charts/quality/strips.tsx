@@ -25,7 +25,7 @@ export function Strips({ review, width, label, ref }: StripsProps) {
   const measured = points.values.filter((value) => value !== null);
   const domain = shownDomain({ values: measured, limits, control: baseline.kind === 'frozen' ? baseline : null });
   const y = scaleLinear(domain, [bottom, top]).clamp(true);
-  const right = width - 62;
+  const right = width - 74;
   const pitch = (right - left) / Math.max(comparison.groups.length, 1);
   const half = Math.min(widest, pitch * 0.7) / 2;
   const middle = (group: number) => left + (group + 0.5) * pitch;

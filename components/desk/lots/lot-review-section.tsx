@@ -49,7 +49,9 @@ export function LotReviewSection({ review, ...section }: LotSectionProps & { rev
         </>
       ) : (
         <div className="grid grid-cols-[minmax(0,1fr)] gap-x-12 gap-y-6 lg:grid-cols-[minmax(0,3fr)_minmax(0,1fr)]">
-          <ValuesTable key={review.quantity} review={review} boardTypeCode={lot.boardTypeCode} />
+          <div>
+            <ValuesTable key={review.quantity} review={review} boardTypeCode={lot.boardTypeCode} />
+          </div>
           <BinsTable review={review} />
         </div>
       )}
