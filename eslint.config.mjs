@@ -81,6 +81,9 @@ const config = [
   },
   ...Object.entries(forbidden).map(layer),
   { files: ['lib/messages/**'], rules: { 'no-restricted-imports': 'off' } },
-  { files: ['tests/**', 'server/setup/**', 'server/index.ts', 'server/welcome.ts', 'server/verify-trail.ts'], rules: { 'no-console': 'off' } },
+  {
+    files: ['tests/**', 'server/setup/**', 'server/index.ts', 'server/welcome.ts', 'server/verify-trail.ts'],
+    rules: { 'no-console': 'off' },
+  },
 ];
 export default config;

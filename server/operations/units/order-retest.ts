@@ -6,7 +6,8 @@ import type { RetestOrderForm } from '@/lib/contracts/disposition';
 import { done, refusal, type Outcome } from '@/lib/contracts/outcome';
 import { boardStanding } from '@/lib/decision/board-standing';
 import { database } from '@/server/postgres';
-import { confirmSignature } from './confirm-signature';
+import { confirmSignature } from '../signatures/confirm-signature';
+import { recordSignature } from '../signatures/record-signature';
 
 /**
  * Quality orders one more run of a board that passed or waits; its verdict replaces the one before. Codes: unit-unknown,
@@ -30,6 +31,12 @@ export async function orderRetest(actor: Actor, form: RetestOrderForm): Promise<
             : 'Only a board that passed or waits for quality is tested again.',
       );
     const { id } = await insertRetestOrder(tx, { unitId: unit.id, reason: form.reason, signedBy: actor.accountId });
+    await recordSignature(tx, actor, {
+      subject: 'retest-order',
+      subjectId: id,
+      meaning: 'The board is tested once more; the new result replaces the old one.',
+      content: { serial: unit.serial, reason: form.reason },
+    });
     await insertTrail(tx, actor, {
       action: 'unit.retest-ordered',
       entity: 'unit',

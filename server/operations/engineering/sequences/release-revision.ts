@@ -7,7 +7,8 @@ import type { Actor } from '@/lib/access/actor';
 import { done, refusal, type Outcome, type Refusal } from '@/lib/contracts/outcome';
 import { releaseMeanings, type releaseRevisionSchema } from '@/lib/contracts/sequence-draft';
 import { database } from '@/server/postgres';
-import { confirmSignature } from '../../units/confirm-signature';
+import { confirmSignature } from '../../signatures/confirm-signature';
+import { recordSignature } from '../../signatures/record-signature';
 import { mayRelease } from './may-release';
 import { releaseBlock } from './release-blocks';
 
@@ -36,6 +37,17 @@ export async function releaseRevision(
       releasedAt: at,
       releaseMeaning: words,
     });
+    await recordSignature(
+      tx,
+      actor,
+      {
+        subject: 'sequence-revision',
+        subjectId: revisionId,
+        meaning: words,
+        content: { revision: `r${row.number}`, version, note: row.note, sequence: row.data },
+      },
+      at,
+    );
     await insertTrail(tx, actor, {
       action: 'sequence.released',
       entity: 'sequence-revision',

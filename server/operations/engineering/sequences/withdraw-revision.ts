@@ -6,7 +6,7 @@ import type { Actor } from '@/lib/access/actor';
 import { done, refusal, type Outcome } from '@/lib/contracts/outcome';
 import type { withdrawRevisionSchema } from '@/lib/contracts/sequence-draft';
 import { database } from '@/server/postgres';
-import { confirmSignature } from '../../units/confirm-signature';
+import { confirmSignature } from '../../signatures/confirm-signature';
 
 /**
  * Takes a released or superseded revision out of use, signed: no board is begun with it, in any lot. A run under way finishes.
