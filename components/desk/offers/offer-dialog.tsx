@@ -13,7 +13,7 @@ import { offerDraftSchema } from '@/lib/contracts/sequence-draft';
 import type { StationRow, StationsOverview } from '@/lib/contracts/station-overview';
 import { fetchJson } from '../fetch-json';
 import { FormProblem } from '../form-problem';
-import { stationStateWords } from '../stations/station-words';
+import { stationStateWords } from '@/components/desk/stations/station-words';
 import { useActionForm } from '../use-action-form';
 
 type OfferDraft = z.infer<typeof offerDraftSchema>;

@@ -54,7 +54,7 @@ export function OfferResults({ revisionId, initial, endOffer }: OfferResultsProp
       <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-2">
         <h3 className="flex items-center gap-3 font-bold">
           <TrialMark size={20} />
-          {offer.endedIso === null ? `On offer at ${offer.stationName}` : `Tried at ${offer.stationName}`}
+          {titleOf(offer)}
         </h3>
         {offer.endedIso === null && endOffer ? (
           <Button onClick={() => void end(offer)} pending={ending === offer.id ? 'Ending' : null}>
@@ -80,6 +80,11 @@ export function OfferResults({ revisionId, initial, endOffer }: OfferResultsProp
       )}
     </section>
   ));
+}
+
+function titleOf({ endedIso, runs, stationName }: OfferedDraft): string {
+  if (endedIso === null) return `On offer at ${stationName}`;
+  return runs.length > 0 ? `Tried at ${stationName}` : `Was on offer at ${stationName}`;
 }
 
 function Runs({ runs }: { runs: readonly OfferRun[] }) {
