@@ -55,6 +55,7 @@ export const benchSayings = {
   'sequence-withdrawn': ['revision', 'reason'],
   'needs-controller': [],
   'needs-wiper-probe': [],
+  'sequence-has-errors': [],
   'instruments-away': [],
   'wrong-instrument': ['which'],
   'supply-not-confirmed-off': [],

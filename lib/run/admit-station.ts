@@ -23,6 +23,8 @@ export interface StationFacts {
   hasWiperProbe: boolean;
   /** Of the lot; null while none is chosen. */
   sequence: Sequence | null;
+  /** Errors that the rules find in it for this station. */
+  sequenceErrors: number;
 }
 
 export interface InstrumentFacts {
@@ -129,13 +131,14 @@ function training({ training: trained, nowIso }: StationFacts): Verdict[] {
   return [verdict('training', state, sentence, 'T-331', { validUntil })];
 }
 
-function equipment({ sequence, hasController, hasWiperProbe }: StationFacts): Verdict[] {
+function equipment({ sequence, sequenceErrors, hasController, hasWiperProbe }: StationFacts): Verdict[] {
   if (!sequence) return [];
-  return missingEquipment(sequence, { hasController, hasWiperProbe }).map((missing) =>
+  const lacks = missingEquipment(sequence, { hasController, hasWiperProbe }).map((missing) =>
     missing === 'fixture-controller'
       ? verdict('fixture', 'bad', say('needs-controller'), 'F-361')
       : verdict('fixture', 'bad', say('needs-wiper-probe'), 'F-362'),
   );
+  return sequenceErrors > 0 ? [...lacks, verdict('fixture', 'bad', say('sequence-has-errors'), 'F-363')] : lacks;
 }
 
 function links({ silent, stranger }: StationFacts): Verdict {

@@ -3,8 +3,7 @@ import type { BoardType } from '../contracts/board-type';
 import { drawIn, guardBandOf } from '../decision/judge-value';
 import { firstOf } from '../sequence/enabled-steps';
 import type { Sequence } from '../sequence/step';
-import { combineContributions } from '../uncertainty/combine';
-import { pointBudget } from '../uncertainty/point-budget';
+import { expectedUncertaintyAt } from './expected-uncertainty';
 import { noTravel, type Points, type RunFacts } from './facts';
 import type { PointUncertainty, RunState } from './state';
 import type { RunPlan } from './types';
@@ -73,16 +72,8 @@ function guardsOf(plan: RunPlan, facts: RunFacts, expected: PointUncertainty): R
   return { tripMin: trip.min, tripMax: trip.max, releaseMin: release.min, releaseMax: release.max };
 }
 
-/** U of the points when verified as the sequence asks, where the repeats agree as well as each search does. Volts. */
+/** U of the points when verified as the sequence asks. Volts. */
 export function expectedUncertainty({ sequence, meter, boardType }: RunPlan): PointUncertainty {
-  const step = firstOf(sequence, 'verify');
-  const [repeats, search] = step ? [step.repeats, step.wantedUncertaintyVolts] : [1, 0.001];
-  const expandedAt = ({ min, max }: { min: number; max: number }) => {
-    const point = { values: [(min + max) / 2], searchUncertainties: [search / Math.sqrt(repeats)] };
-    return combineContributions(pointBudget(point, meter)).expanded;
-  };
-  return {
-    tripVolts: expandedAt(boardType.limits.tripVolts),
-    releaseVolts: expandedAt(boardType.limits.releaseVolts),
-  };
+  const at = ({ min, max }: { min: number; max: number }) => expectedUncertaintyAt((min + max) / 2, sequence, meter);
+  return { tripVolts: at(boardType.limits.tripVolts), releaseVolts: at(boardType.limits.releaseVolts) };
 }

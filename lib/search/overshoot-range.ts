@@ -25,8 +25,9 @@ export interface OvershootPrior {
 
 const spacing = 0.01;
 const gridEdges = { min: 0.005, max: 0.09 };
-/** Standard deviation of the commissioned value, and the flat share beside its peak of 1. */
-const commissionedSd = 0.004;
+/** Standard deviation of the commissioned value. */
+export const commissionedSd = 0.004;
+/** The flat share beside its peak of 1. */
 const flatShare = 0.02;
 
 export function overshootPrior(commissioned: number): OvershootPrior {

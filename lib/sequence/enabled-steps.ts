@@ -1,6 +1,8 @@
-import type { Sequence, Step, StepKind, StepOf } from './step';
+import type { Step, StepKind, StepOf } from './step';
 
-type Steps = Pick<Sequence, 'steps'>;
+interface Steps {
+  steps: readonly Step[];
+}
 
 /** Index of the first step from `from` on that is run; the number of steps when none is. */
 export function nextEnabled({ steps }: Steps, from: number): number {

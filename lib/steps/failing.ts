@@ -1,4 +1,4 @@
-import type { SequenceFinding } from '../sequence/finding';
+import type { FieldChange, SequenceFinding } from '../sequence/finding';
 import type { AnyStep } from './step-common';
 
 type Told = Omit<SequenceFinding, 'stepId' | 'severity' | 'mend'> & Partial<Pick<SequenceFinding, 'mend'>>;
@@ -11,4 +11,14 @@ export function failing(
   told: Told,
 ): SequenceFinding[] {
   return bad ? [{ severity, stepId: step.id, mend: null, ...told }] : [];
+}
+
+/** One value put right: "Use 4 ms". */
+export function setTo(
+  step: AnyStep,
+  field: string,
+  value: FieldChange['value'],
+  text: string,
+): NonNullable<SequenceFinding['mend']> {
+  return { label: `Use ${text}`, changes: [{ stepId: step.id, field, value }] };
 }

@@ -15,6 +15,8 @@ export interface RuleContext {
   /** The enabled steps, in order, and the place of this one among them. */
   steps: readonly Step[];
   index: number;
+  /** Those that are not enabled too. */
+  allSteps: readonly Step[];
 }
 
 /** A blank of a step's sentence. `field` is a path into the step; the value shown is the stored one times `scale`. */

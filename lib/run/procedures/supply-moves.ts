@@ -1,3 +1,4 @@
+import { overshootBound } from '../../search/overshoot-range';
 import { firstOf } from '../../sequence/enabled-steps';
 import { newestPoints } from '../facts';
 import type { StepContext } from '../machine';
@@ -11,8 +12,20 @@ function standing({ facts }: StepContext): number {
 export function pathToWithinMaximum(volts: number, context: StepContext): number[] {
   const from = standing(context);
   const { plan } = context;
-  const bound = volts > from ? plan.boardType.absoluteMaximumVolts : 0;
-  return pathWithin(from, volts, bound, plan.commissioning.overshoot);
+  return volts > from
+    ? pathUp(from, volts, ceilingVolts(context), context)
+    : pathWithin(from, volts, 0, plan.commissioning.overshoot);
+}
+
+/** Where the protection would trip, and never above the board's absolute maximum. */
+function ceilingVolts({ plan }: StepContext): number {
+  const protection = firstOf(plan.sequence, 'power-up')?.overvoltageVolts ?? Infinity;
+  return Math.min(plan.boardType.absoluteMaximumVolts, protection);
+}
+
+/** Towards a ceiling the largest overshoot considered counts: one that exceeds the commissioned one would do harm. */
+function pathUp(from: number, volts: number, ceiling: number, { plan }: StepContext): number[] {
+  return pathWithin(from, volts, ceiling, Math.max(overshootBound, plan.commissioning.overshoot));
 }
 
 /** The working supply: where the power-up of the sequence brought the board. */
@@ -43,15 +56,15 @@ export function pathOffThenUp(volts: number, ceilingVolts: number, context: Step
  */
 export function pathKeepingOutput(volts: number, context: StepContext): number[] {
   const { facts, plan } = context;
-  const { limits, absoluteMaximumVolts } = plan.boardType;
+  const { limits } = plan.boardType;
   const from = standing(context);
   const points = newestPoints(facts);
   const trip = points?.trip.volts ?? limits.tripVolts.max;
   const release = points?.release.volts ?? limits.releaseVolts.min;
   const { overshoot } = plan.commissioning;
   if (volts > from) {
-    const ceiling = facts.output === 'off' && volts < release ? (volts + release) / 2 : absoluteMaximumVolts;
-    return pathWithin(from, volts, Math.min(ceiling, absoluteMaximumVolts), overshoot);
+    const mayRise = facts.output === 'off' && volts < release ? (volts + release) / 2 : Infinity;
+    return pathUp(from, volts, Math.min(mayRise, ceilingVolts(context)), context);
   }
   return pathWithin(from, volts, facts.output === 'on' && volts > trip ? (volts + trip) / 2 : 0, overshoot);
 }

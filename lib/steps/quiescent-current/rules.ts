@@ -1,3 +1,7 @@
 import type { SequenceFinding } from '../../sequence/finding';
+import { settleRules } from '../common-rules';
+import type { RuleContext } from '../step-kind';
+import type { QuiescentCurrentStep } from './schema';
 
-export const rules = (): SequenceFinding[] => [];
+export const rules = (step: QuiescentCurrentStep, context: RuleContext): SequenceFinding[] =>
+  settleRules(step, context);

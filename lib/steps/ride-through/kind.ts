@@ -1,7 +1,7 @@
-import { middleOf } from '../fresh-values';
 import { checks } from '../required';
 import type { StepKindDefinition } from '../step-kind';
 import { machine, type RideThroughMachine } from './machine';
+import { rideThroughVolts } from './ride-through-volts';
 import { rules } from './rules';
 import { schema, type RideThroughStep } from './schema';
 import { sentence } from './sentence';
@@ -15,7 +15,7 @@ export const rideThrough: StepKindDefinition<RideThroughStep, RideThroughMachine
   fresh: ({ limits }) => ({
     kind: 'ride-through',
     milliseconds: limits.rideThroughSeconds.min * 1000,
-    atVolts: middleOf({ min: limits.tripVolts.max, max: limits.releaseVolts.min }),
+    atVolts: rideThroughVolts(limits),
   }),
   rules,
   needs: () => ['fixture-controller'],

@@ -6,12 +6,15 @@ import { listOpenSessions } from '@/db/queries/sessions';
 import { listBenches, type BenchRow } from '@/db/queries/station-benches';
 import { findStationCall } from '@/db/queries/station-calls';
 import { findBenchLot, type BenchLot } from '@/db/queries/station-lots';
-import { readStationFacts } from '@/db/queries/station-readiness';
+import { findCommissioning, readStationFacts } from '@/db/queries/station-readiness';
 import { listOpenRuns } from '@/db/queries/runs-open';
 import { mayDo } from '@/lib/access/permissions';
 import type { BenchPlace, PendingBin, Standing } from '@/lib/bench/types';
 import { linkHasController } from '@/lib/contracts/station-link';
 import { admitStation } from '@/lib/run/admit-station';
+import { checkSequence } from '@/lib/sequence/check-sequence';
+import type { StationKind } from '@/lib/sequence/station-kind';
+import { stationKindOf } from '../engineering/station-kind';
 import { readLotStrip } from '../runs/lot-strip';
 import { nextRunOf, trialOfferOf } from './next-run';
 
@@ -52,9 +55,12 @@ export async function admitBench(
   db: Database,
   bench: BenchRow,
   accountId: string | null,
-  lot: Pick<BenchLot, 'boardTypeId' | 'sequence'> | null,
+  lot: Pick<BenchLot, 'boardTypeId' | 'boardType' | 'sequence'> | null,
 ): Promise<Pick<Standing, 'readiness' | 'reasons'>> {
-  const facts = await readStationFacts(db, bench, { accountId, boardTypeId: lot?.boardTypeId ?? null });
+  const [facts, commissioning] = await Promise.all([
+    readStationFacts(db, bench, { accountId, boardTypeId: lot?.boardTypeId ?? null }),
+    findCommissioning(db, bench.id),
+  ]);
   const { readiness, reasons } = admitStation({
     ...facts,
     nowIso: new Date().toISOString(),
@@ -64,8 +70,14 @@ export async function admitBench(
     hasController: linkHasController(bench.link),
     hasWiperProbe: bench.hasWiperProbe,
     sequence: lot?.sequence ?? null,
+    sequenceErrors: lot && commissioning ? countErrors(lot, stationKindOf(bench, commissioning)) : 0,
   });
   return { readiness: readiness.filter(({ key }) => key !== 'links' && key !== 'database'), reasons };
+}
+
+/** The rules of the editor, at this station as it was commissioned. */
+function countErrors({ sequence, boardType }: Pick<BenchLot, 'sequence' | 'boardType'>, station: StationKind): number {
+  return checkSequence(sequence, boardType, station).filter(({ severity }) => severity === 'error').length;
 }
 
 /** As for production, but whoever may make engineering runs needs no training for the board type. */

@@ -16,6 +16,7 @@ const good: StationFacts = {
   hasController: true,
   hasWiperProbe: false,
   sequence: sequences[0]!.sequence,
+  sequenceErrors: 0,
 };
 const reasonsWith = (over: Partial<StationFacts>) => admitStation({ ...good, ...over }).reasons;
 
@@ -64,6 +65,7 @@ describe('a station is refused, with a code for the engineer', () => {
     ['C-323', 'overshoot-outside-search', { commissioning: { ...good.commissioning!, overshoot: 0.12 } }],
     ['T-331', 'training-ended', { training: { boardTypeCode: 'CB1210', validUntilIso: '2026-11-01T00:00:00Z' } }],
     ['T-332', 'training-missing', { training: { boardTypeCode: 'CB1210', validUntilIso: null } }],
+    ['F-363', 'sequence-has-errors', { sequenceErrors: 1 }],
     ['F-361', 'needs-controller', { hasController: false }],
     ['F-362', 'needs-wiper-probe', { sequence: sequences[3]!.sequence }],
     ['L-341', 'supply-silent', { silent: ['supply'] }],

@@ -26,7 +26,7 @@ describe('a sequence', () => {
     ['working-volts-too-low', changed('power-up', { volts: 12.4 })],
     ['working-volts-too-high', changed('power-up', { volts: 14.5 })],
     ['overvoltage-above-maximum', changed('power-up', { overvoltageVolts: 15.5 })],
-    ['window-above-maximum', changed('find-points', { windowMaxVolts: 15.2 })],
+    ['supply-above-maximum', changed('find-points', { windowMaxVolts: 15.2 })],
     ['window-too-narrow', changed('find-points', { windowMinVolts: 9 })],
     ['target-outside-limits', changed('trim', { targetVolts: 10.89 })],
     ['ride-through-not-between-points', changed('ride-through', { atVolts: 12.6 })],

@@ -8,14 +8,15 @@ import type { Actor } from '@/lib/access/actor';
 import { refusal, success, type Outcome, type Refusal } from '@/lib/contracts/outcome';
 import type { offerDraftSchema } from '@/lib/contracts/sequence-draft';
 import { linkHasController } from '@/lib/contracts/station-link';
-import { checkSequence, missingEquipment, type MissingEquipment } from '@/lib/sequence/check-sequence';
+import { checkSequence, missingEquipment } from '@/lib/sequence/check-sequence';
+import type { Equipment } from '@/lib/steps/step-kind';
 import { database } from '@/server/postgres';
 import type { z } from 'zod';
 import { stationKindOf } from '../station-kind';
 
 type Revision = NonNullable<Awaited<ReturnType<typeof findRevisionToOffer>>>;
 
-const equipmentWords: Record<MissingEquipment, string> = {
+const equipmentWords: Record<Equipment, string> = {
   'fixture-controller': 'a fixture controller',
   'wiper-probe': 'a wiper probe',
 };
