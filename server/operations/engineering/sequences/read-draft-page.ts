@@ -1,4 +1,4 @@
-import { findSequence, getSpecification, listRevisions } from '@/db/queries/sequence-revisions';
+import { findSequence, listRevisions } from '@/db/queries/sequence-revisions';
 import { actorMay, type Actor } from '@/lib/access/actor';
 import type { DraftPage } from '@/lib/contracts/sequence-draft';
 import { database } from '@/server/postgres';
@@ -6,30 +6,26 @@ import { listStationKinds } from './list-station-kinds';
 import { mayRelease } from './may-release';
 import { headsOf } from './revision-head';
 
-/** What the editor opens with: the draft or the submitted revision, else the newest; null when there is no such sequence. */
+/** The draft of a sequence or what waits for release, else its newest revision; null when there is no such sequence. */
 export async function readDraftPage(actor: Actor, sequenceId: string): Promise<DraftPage | null> {
   const db = database();
-  const sequence = await findSequence(db, sequenceId);
-  if (!sequence) return null;
-  const [revisions, boardType, stations] = await Promise.all([
-    listRevisions(db, sequenceId),
-    getSpecification(db, sequence.boardTypeId),
+  const [sequence, revisions] = await Promise.all([findSequence(db, sequenceId), listRevisions(db, sequenceId)]);
+  const shown = revisions.find(({ status }) => status === 'draft' || status === 'submitted') ?? revisions[0];
+  if (!sequence || !shown) return null;
+  const released = revisions.find(({ status }) => status === 'released') ?? null;
+  const [[head, releasedHead], stations] = await Promise.all([
+    headsOf(db, released ? [shown, released] : [shown], revisions),
     listStationKinds(db),
   ]);
-  const open = revisions.find(({ status }) => status === 'draft' || status === 'submitted') ?? revisions[0];
-  if (!open) return null;
-  const heads = await headsOf(db, revisions);
-  const headOf = (id: string) => heads.find((head) => head.id === id)!;
-  const released = revisions.find(({ status }) => status === 'released');
   return {
     sequenceId,
     sequenceName: sequence.name,
-    boardType,
-    head: headOf(open.id),
-    sequence: open.data,
-    released: released && released.id !== open.id ? { head: headOf(released.id), sequence: released.data } : null,
+    boardType: sequence.boardType,
+    head: head!,
+    sequence: shown.data,
+    released: released && { head: releasedHead!, sequence: released.data },
     stations,
-    mayEdit: open.status === 'draft' && actorMay(actor, 'edit-sequences'),
-    mayRelease: open.status === 'submitted' && mayRelease(actor, open),
+    mayEdit: shown.status === 'draft' && actorMay(actor, 'edit-sequences'),
+    mayRelease: shown.status === 'submitted' && mayRelease(actor, shown),
   };
 }

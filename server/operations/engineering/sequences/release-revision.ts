@@ -9,6 +9,7 @@ import { releaseMeanings, type releaseRevisionSchema } from '@/lib/contracts/seq
 import { database } from '@/server/postgres';
 import { confirmSignature } from '../../signatures/confirm-signature';
 import { recordSignature } from '../../signatures/record-signature';
+import { recordSignature } from '../../signatures/record-signature';
 import { mayRelease } from './may-release';
 import { releaseBlock } from './release-blocks';
 
@@ -48,12 +49,19 @@ export async function releaseRevision(
       },
       at,
     );
+    const content = { revision: `r${row.number}`, version, sequence: row.data };
+    await recordSignature(
+      tx,
+      actor,
+      { subject: 'sequence-revision', subjectId: revisionId, meaning: words, content },
+      at,
+    );
     await insertTrail(tx, actor, {
       action: 'sequence.released',
       entity: 'sequence-revision',
       entityId: revisionId,
       before: superseded && { revision: `r${superseded.number}` },
-      after: { revision: `r${row.number}`, version, meaning: words, sequence: row.data },
+      after: { ...content, meaning: words },
     });
     return done;
   });

@@ -7,6 +7,9 @@ import { done, refusal, type Outcome } from '@/lib/contracts/outcome';
 import type { withdrawRevisionSchema } from '@/lib/contracts/sequence-draft';
 import { database } from '@/server/postgres';
 import { confirmSignature } from '../../signatures/confirm-signature';
+import { recordSignature } from '../../signatures/record-signature';
+
+const withdrawalMeaning = 'The revision is out of use, in every lot.';
 
 /**
  * Takes a released or superseded revision out of use, signed: no board is begun with it, in any lot. A run under way finishes.
@@ -31,6 +34,13 @@ export async function withdrawRevision(
       withdrawnAt: at,
       withdrawnReason: reason,
     });
+    const content = { revision: `r${number}`, reason };
+    await recordSignature(
+      tx,
+      actor,
+      { subject: 'sequence-revision', subjectId: revisionId, meaning: withdrawalMeaning, content },
+      at,
+    );
     await insertTrail(tx, actor, {
       action: 'sequence.withdrawn',
       entity: 'sequence-revision',
