@@ -4,7 +4,6 @@ export function standaloneSvg(svg: SVGSVGElement): string {
   const style = getComputedStyle(svg);
   copy.querySelectorAll('[data-chosen-mark]').forEach((mark) => mark.remove());
   const number = style.getPropertyValue('--sw-num').trim();
-  copy.setAttribute('xmlns', 'http://www.w3.org/2000/svg');
   copy.setAttribute('font-family', style.getPropertyValue('--sw-text').trim() || style.fontFamily);
   copy.removeAttribute('class');
   for (const node of [copy, ...copy.querySelectorAll('*')]) {
