@@ -9,7 +9,6 @@ import { releaseMeanings, type releaseRevisionSchema } from '@/lib/contracts/seq
 import { database } from '@/server/postgres';
 import { confirmSignature } from '../../signatures/confirm-signature';
 import { recordSignature } from '../../signatures/record-signature';
-import { recordSignature } from '../../signatures/record-signature';
 import { mayRelease } from './may-release';
 import { releaseBlock } from './release-blocks';
 
@@ -38,18 +37,7 @@ export async function releaseRevision(
       releasedAt: at,
       releaseMeaning: words,
     });
-    await recordSignature(
-      tx,
-      actor,
-      {
-        subject: 'sequence-revision',
-        subjectId: revisionId,
-        meaning: words,
-        content: { revision: `r${row.number}`, version, note: row.note, sequence: row.data },
-      },
-      at,
-    );
-    const content = { revision: `r${row.number}`, version, sequence: row.data };
+    const content = { revision: `r${row.number}`, version, note: row.note, sequence: row.data };
     await recordSignature(
       tx,
       actor,
