@@ -59,8 +59,21 @@ export class ExchangeTimes {
     return this.setVoltsMs + this.command(lengths.switchOn);
   }
 
+  /** Until the supply has taken it in; nothing answers. */
+  get switchOffMs(): number {
+    return this.send(lengths.switchOff);
+  }
+
   get supplyAmpsMs(): number {
     return this.query(lengths.measureSupply, lengths.supplyReading) + supplyMeasureMs;
+  }
+
+  /** From the reading to its last character. */
+  get supplyAnswerMs(): number {
+    return lengths.supplyReading * this.byteMs;
+  }
+  get meterAnswerMs(): number {
+    return lengths.reading * this.byteMs;
   }
 
   /** Lid and board. */
@@ -78,7 +91,8 @@ export class ExchangeTimes {
 
   pulseMs(seconds: number): number {
     const { pulseWidth, trigger, achieved, achievedReading } = lengths;
-    const left = Math.max(0, seconds * 1000 - this.send(achieved));
+    // The pulse begins while the trigger is still being answered.
+    const left = Math.max(0, seconds * 1000 - noError * this.byteMs - this.send(achieved));
     return this.command(pulseWidth) + this.command(trigger) + left + this.query(achieved, achievedReading);
   }
 
@@ -90,7 +104,7 @@ export class ExchangeTimes {
     return { ms, relays: { channel, cycles } };
   }
 
-  /** Sent without an answer, until the instrument has taken it in. */
+  /** Without an answer, until the instrument has taken it in. */
   private send(length: number): number {
     return (length + 1) * this.byteMs + turnaroundMs;
   }
@@ -101,9 +115,5 @@ export class ExchangeTimes {
 
   private command(length: number): number {
     return this.query(length + errorQuery, noError);
-  }
-
-  get switchOffMs(): number {
-    return this.send(lengths.switchOff);
   }
 }

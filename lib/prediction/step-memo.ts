@@ -37,19 +37,24 @@ export class StepMemo {
 
   private keyOf(step: Step, { plan, facts, bench }: StepEntry): string {
     return [
-      this.textOf(step),
-      ...lookedUp(plan.sequence).map((other) => (other ? this.textOf(other) : '')),
+      this.textOfStep(step),
+      ...lookedUp(plan.sequence).map((other) => (other ? this.textOfStep(other) : '')),
       this.textOf(plan.sequence.decisionRule),
       JSON.stringify(bench),
       factsText(facts),
     ].join('|');
   }
 
+  /** What a step is called changes nothing. */
+  private textOfStep(step: Step): string {
+    return this.textOf(step, { ...step, name: '' });
+  }
+
   /** Drafts keep what they do not change, so a text is made once. */
-  private textOf(part: object): string {
+  private textOf(part: object, written = part): string {
     const known = this.texts.get(part);
     if (known !== undefined) return known;
-    const text = JSON.stringify(part);
+    const text = JSON.stringify(written);
     this.texts.set(part, text);
     return text;
   }

@@ -150,22 +150,21 @@ export class TypicalBench {
 
   /** Off, then read back by meter and supply at once, until both are below 2 V. */
   private switchOff(): Answered {
-    const { times } = this;
-    let volts = this.volts;
-    let sinceMs = this.nowMs;
-    const left = (atMs: number) => volts * Math.exp(-(atMs - sinceMs) / dischargeMs);
-    this.nowMs += times.switchOffMs;
-    this.goOff();
+    const { times, volts } = this;
+    const offMs = this.nowMs + times.switchOffMs;
+    const left = (atMs: number) => volts * Math.exp(-Math.max(0, atMs - offMs) / dischargeMs);
     for (;;) {
-      const bySupply = left(this.nowMs + times.supplyAmpsMs);
+      const fromMs = this.nowMs;
+      const supplyMs = fromMs + times.switchOffMs + times.supplyAmpsMs;
+      const bySupply = left(supplyMs - times.supplyAnswerMs);
       this.read(101, valueCycles);
-      const byMeter = left(this.nowMs - (valueCycles * cycleMs) / 2);
+      const byMeter = left(this.nowMs - times.meterAnswerMs - (valueCycles * cycleMs) / 2);
+      this.nowMs = Math.max(this.nowMs, supplyMs);
       if (byMeter < safeBelowVolts && bySupply < safeBelowVolts) {
+        this.goOff(offMs);
         return { kind: 'supply-is-off', confirmed: true, volts: byMeter, by: 'meter' };
       }
       this.nowMs += pauseMs;
-      volts = left(this.nowMs);
-      sinceMs = this.nowMs;
     }
   }
 
@@ -248,10 +247,10 @@ export class TypicalBench {
     this.note({ kind: 'load', atMs: this.nowMs, on: output === 'off' });
   }
 
-  private goOff(): void {
+  private goOff(atMs = this.nowMs): void {
     if (!this.state.supplyOn) return;
-    this.note({ kind: 'supply', atMs: this.nowMs, volts: 0 });
-    if (this.state.output === 'on') this.note({ kind: 'load', atMs: this.nowMs, on: false });
+    this.note({ kind: 'supply', atMs, volts: 0 });
+    if (this.state.output === 'on') this.note({ kind: 'load', atMs, on: false });
     this.change({ supplyOn: false, setVolts: 0, output: 'off' });
   }
 
