@@ -15,6 +15,7 @@ type MayNotTestView = Extract<BenchView['screen'], { kind: 'may-not-test' }>;
 /** Why this station may not test, and what to do about it. */
 export function MayNotTestScreen({ screen }: { screen: MayNotTestView }) {
   const t = useTranslations('bench.mayNotTest');
+  const trial = useTranslations('bench.engineering');
   const say = useSay();
   const { view, send } = useBench();
   const first = screen.reasons[0];
@@ -53,9 +54,15 @@ export function MayNotTestScreen({ screen }: { screen: MayNotTestView }) {
         note={t('note')}
         actions={
           <>
-            <Button size="bench" onClick={() => send({ kind: 'end-shift' })}>
-              {t('signOut')}
-            </Button>
+            {view.engineering ? (
+              <Button size="bench" onClick={() => send({ kind: 'leave-trial' })}>
+                {trial('leave')}
+              </Button>
+            ) : (
+              <Button size="bench" onClick={() => send({ kind: 'end-shift' })}>
+                {t('signOut')}
+              </Button>
+            )}
             <CallButton kind="filled" />
           </>
         }

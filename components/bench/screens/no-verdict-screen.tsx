@@ -21,7 +21,9 @@ export function NoVerdictScreen({ screen, run }: { screen: NoVerdictView; run: R
   const t = useTranslations('bench.noVerdict');
   const words = useTranslations('noVerdict');
   const say = useSay();
-  const { send } = useBench();
+  const { send, view } = useBench();
+  // A trial makes no board wait for quality.
+  const failing = screen.failingWhenStopped && !view.engineering;
   const { supply } = run;
   const off = supply.state === 'off' && supply.volts < 2;
   const stopped = screen.reason === 'operator-stop';
@@ -67,11 +69,9 @@ export function NoVerdictScreen({ screen, run }: { screen: NoVerdictView; run: R
             </div>
             <p className="text-b-line leading-[1.3] text-ink-2">
               {t.rich('notJudged', { serial, b: bold })} {off && words(`${screen.reason}.next`)}
-              {screen.failingWhenStopped && <b className="block text-ink">{t('failing')}</b>}
+              {failing && <b className="block text-ink">{t('failing')}</b>}
             </p>
-            {!stopped && !screen.failingWhenStopped && (
-              <p className="text-b-line leading-[1.3] text-ink-2">{t('again')}</p>
-            )}
+            {!stopped && !failing && <p className="text-b-line leading-[1.3] text-ink-2">{t('again')}</p>}
           </div>
           <div className="w-108 flex-none max-[900px]:w-full">
             <SupplyGauge supply={supply} />

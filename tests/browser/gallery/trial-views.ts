@@ -1,6 +1,7 @@
 import type { BenchView, TrialOffer } from '@/lib/contracts/bench-view';
 import { endViews } from './end-views';
 import { base, idleLot, shown, type GalleryView } from './samples';
+import { shiftViews } from './shift-views';
 import { trimViews } from './trim-views';
 
 export const trialOffer: TrialOffer = {
@@ -40,4 +41,6 @@ export const trialViews: Record<string, GalleryView> = {
   'trial-pass': trialOf(endViews['03-pass']!),
   'trial-reject': trialOf(endViews['04-reject']!, { screen: { kind: 'run' } }),
   'trial-fault': trialOf(endViews['05-fault']!),
+  'trial-failing': trialOf(endViews['fault-not-confirmed']!),
+  'trial-may-not-test': trialOf(shiftViews['b3-may-not-test']!),
 };

@@ -72,6 +72,7 @@ describe('what a screen sends', () => {
     ['commissioning', /continue/i, { kind: 'continue' }],
     ['offer-idle', /start the trial/i, { kind: 'start-trial', offerId: trialOffer.offerId }],
     ['offer-choose-lot', /start the trial/i, { kind: 'start-trial', offerId: trialOffer.offerId }],
+    ['trial-may-not-test', /leave the trial/i, { kind: 'leave-trial' }],
     ['trial-pass', /leave the trial/i, { kind: 'leave-trial' }],
     ['trial-reject', /end the offer/i, { kind: 'end-trial' }],
   ];
@@ -140,7 +141,7 @@ describe('what a screen may say', () => {
     show(name);
     expect(screen.getAllByText('Engineering run. Not production.').length).toBeGreaterThan(0);
     expect(screen.queryByRole('button', { name: /print label again/i })).toBeNull();
-    expect(document.body.textContent).not.toMatch(/red bin|Lot 2648-B/);
+    expect(document.body.textContent).not.toMatch(/red bin|Lot 2648-B|waits for quality/);
   });
 
   it('says that the supply is off only after the read-back', () => {
