@@ -13,7 +13,8 @@ import { compareBoardTypes } from '@/lib/board-type/compare-board-types';
 import { approvalMeanings, type approveLimitsSchema } from '@/lib/contracts/board-type-revision';
 import { done, refusal, type Outcome, type Refusal } from '@/lib/contracts/outcome';
 import { database } from '@/server/postgres';
-import { confirmSignature } from '../../units/confirm-signature';
+import { confirmSignature } from '../../signatures/confirm-signature';
+import { recordSignature } from '../../signatures/record-signature';
 
 /** Whoever made, changed or asked for a revision: none of them approves it. */
 export const makersOf = ({ madeBy, editedBy, submittedBy }: BoardTypeRevision) => [
@@ -42,6 +43,10 @@ export async function approveLimits(
     if (before) await updateBoardTypeRevision(tx, before.id, { status: 'superseded', supersededAt: at });
     await updateBoardTypeRevision(tx, row.id, { status: 'approved', approvedBy: actor.accountId, approvedAt: at });
     await updateBoardTypeName(tx, row.boardTypeId, row.specification.name);
+    const { words } = approvalMeanings.find(({ key }) => key === meaning)!;
+    const content = { number: row.number, version, note: row.note, specification: row.specification };
+    const bound = { subject: 'board-type-revision', subjectId: row.id, meaning: words, content };
+    await recordSignature(tx, actor, bound, at);
     await insertTrail(tx, actor, {
       action: 'board-type.approved',
       entity: 'board-type-revision',
@@ -52,7 +57,7 @@ export async function approveLimits(
         version,
         limits: row.specification.limits,
         changes: before && compareBoardTypes(before.specification, row.specification),
-        meaning: approvalMeanings.find(({ key }) => key === meaning)!.words,
+        meaning: words,
       },
       reason: row.note,
     });
