@@ -32,28 +32,34 @@ const decided = (lotId: SQL | string) =>
 
 /** The newest measurement of its kind in a run. */
 const measuredOf = (quantity: string, phase: string) =>
-  sql<number | null>`(array_agg(${measurements.value} order by ${measurements.n} desc)
-    filter (where ${measurements.quantity} = ${quantity} and ${measurements.phase} = ${phase}))[1]`;
+  sql<number | null>`(max(array[${measurements.n}::float8, ${measurements.value}])
+    filter (where ${measurements.quantity} = ${quantity} and ${measurements.phase} = ${phase}))[2]`;
 
 /** Every board of the lot that has a verdict, in test order of its first attempt. */
 export async function listFirstAttempts(db: Reader, lotId: string): Promise<FirstAttempt[]> {
+  const ofUnit = sql`(partition by ${runs.unitId} order by ${runs.attempt}`;
   const attempts = db
     .select({
       id: runs.id,
       unitId: runs.unitId,
-      place: sql<number>`row_number() over (partition by ${runs.unitId} order by ${runs.attempt})`.as('place'),
-      lastVerdict: sql<
-        'pass' | 'reject'
-      >`first_value(${runs.verdict}) over (partition by ${runs.unitId} order by ${runs.attempt} desc)`.as(
-        'last_verdict',
-      ),
+      stationId: runs.stationId,
+      operatorId: runs.operatorId,
+      verdict: runs.verdict,
+      rejectReason: runs.rejectReason,
+      startedAt: runs.startedAt,
+      endedAt: runs.endedAt,
+      trimRounds: runs.trimRounds,
+      turns: runs.turnsAdvised,
+      seconds: runs.seconds,
+      place: sql<number>`row_number() over ${ofUnit})`.as('place'),
+      lastVerdict: sql<'pass' | 'reject'>`last_value(${runs.verdict}) over ${ofUnit}
+        rows between unbounded preceding and unbounded following)`.as('last_verdict'),
     })
     .from(runs)
     .where(decided(lotId))
     .as('attempts');
   const points = db
     .select({
-      runId: measurements.runId,
       trip: measuredOf('trip-volts', 'verified').as('trip'),
       release: measuredOf('release-volts', 'verified').as('release'),
       hysteresis: measuredOf('hysteresis-volts', 'verified').as('hysteresis'),
@@ -62,25 +68,29 @@ export async function listFirstAttempts(db: Reader, lotId: string): Promise<Firs
       foundHysteresis: measuredOf('hysteresis-volts', 'found').as('found_hysteresis'),
     })
     .from(measurements)
-    .innerJoin(attempts, and(eq(attempts.id, measurements.runId), eq(attempts.place, 1)))
-    .where(inArray(measurements.quantity, ['trip-volts', 'release-volts', 'hysteresis-volts']))
-    .groupBy(measurements.runId)
+    .where(
+      and(
+        eq(measurements.runId, attempts.id),
+        inArray(measurements.quantity, ['trip-volts', 'release-volts', 'hysteresis-volts']),
+        inArray(measurements.phase, ['found', 'verified']),
+      ),
+    )
     .as('points');
   const rows = await db
     .select({
-      runId: runs.id,
+      runId: attempts.id,
       serial: units.serial,
-      verdict: runs.verdict,
-      rejectReason: runs.rejectReason,
+      verdict: attempts.verdict,
+      rejectReason: attempts.rejectReason,
       lastVerdict: attempts.lastVerdict,
-      startedAt: runs.startedAt,
-      endedAt: runs.endedAt,
+      startedAt: attempts.startedAt,
+      endedAt: attempts.endedAt,
       stationCode: stations.code,
-      operatorId: runs.operatorId,
+      operatorId: attempts.operatorId,
       operatorNumber: accounts.operatorNumber,
-      trimRounds: runs.trimRounds,
-      turns: runs.turnsAdvised,
-      seconds: runs.seconds,
+      trimRounds: attempts.trimRounds,
+      turns: attempts.turns,
+      seconds: attempts.seconds,
       trip: points.trip,
       release: points.release,
       hysteresis: points.hysteresis,
@@ -89,13 +99,12 @@ export async function listFirstAttempts(db: Reader, lotId: string): Promise<Firs
       foundHysteresis: points.foundHysteresis,
     })
     .from(attempts)
-    .innerJoin(runs, eq(runs.id, attempts.id))
-    .innerJoin(units, eq(units.id, runs.unitId))
-    .innerJoin(stations, eq(stations.id, runs.stationId))
-    .innerJoin(accounts, eq(accounts.id, runs.operatorId))
-    .leftJoin(points, eq(points.runId, runs.id))
+    .innerJoin(units, eq(units.id, attempts.unitId))
+    .innerJoin(stations, eq(stations.id, attempts.stationId))
+    .innerJoin(accounts, eq(accounts.id, attempts.operatorId))
+    .leftJoinLateral(points, sql`true`)
     .where(eq(attempts.place, 1))
-    .orderBy(runs.endedAt, units.position);
+    .orderBy(attempts.endedAt, units.position);
   return rows.map(({ turns, seconds, ...row }) => ({
     runId: row.runId,
     serial: row.serial,
