@@ -1,7 +1,8 @@
-import { asc, count, desc, eq, ne, sql } from 'drizzle-orm';
+import { and, asc, count, desc, eq, inArray, ne, sql } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import { boardTypeRevisions } from '@/db/schema/board-type-revisions';
 import { boardTypes } from '@/db/schema/board-types';
+import { files } from '@/db/schema/files';
 import { lots } from '@/db/schema/lots';
 import { sequenceRevisions } from '@/db/schema/sequence-revisions';
 import { sequences } from '@/db/schema/sequences';
@@ -78,4 +79,22 @@ export function listLotsOfSequence(db: Reader, sequenceId: string) {
     .innerJoin(sequenceRevisions, eq(sequenceRevisions.id, lots.sequenceRevisionId))
     .where(eq(sequenceRevisions.sequenceId, sequenceId))
     .orderBy(desc(lots.createdAt));
+}
+
+export async function findSequenceNamed(db: Reader, boardTypeId: string, name: string): Promise<{ id: string } | null> {
+  const [row] = await db
+    .select({ id: sequences.id })
+    .from(sequences)
+    .where(and(eq(sequences.boardTypeId, boardTypeId), eq(sequences.name, name)));
+  return row ?? null;
+}
+
+/** Of these ids of pictures, those of which no file is kept. */
+export async function listMissingPictures(db: Reader, ids: readonly string[]): Promise<string[]> {
+  if (ids.length === 0) return [];
+  const kept = await db
+    .select({ id: files.id })
+    .from(files)
+    .where(inArray(files.id, [...ids]));
+  return ids.filter((id) => !kept.some((file) => file.id === id));
 }

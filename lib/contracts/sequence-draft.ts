@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { sequenceSchema, type Sequence } from '../sequence/step';
+import type { FileProblem } from '../sequence/sequence-file';
 import type { BoardType } from './board-type';
 import type { SequenceRevisionState } from './stored-states';
 import type { StationKind } from '../sequence/station-kind';
@@ -67,6 +68,16 @@ export const newSequenceSchema = z.object({
     .min(3, { error: 'Use at least 3 characters.' })
     .max(60, { error: 'Use at most 60 characters.' }),
 });
+/** A file as it was chosen. `sequenceId` null: into the sequence of its board type and name, made where there is none. */
+export const importSequenceSchema = z.object({
+  text: z
+    .string()
+    .min(1, { error: 'Choose a file.' })
+    .max(500_000, { error: 'The file is larger than 500 kB. Choose a sequence.' }),
+  sequenceId: z.uuid().nullable(),
+});
+export type ImportedSequence =
+  { made: true; sequenceId: string; number: number } | { made: false; problems: FileProblem[] };
 export const moveLotSchema = z.object({ lotId: z.uuid(), toRevisionId: z.uuid(), reason: reason('why the lot moves') });
 export const offerDraftSchema = z.object({
   revisionId: z.uuid(),
