@@ -30,6 +30,8 @@ export interface PlantOptions {
   pulseShare?: number;
   /** Parts that differ from the nominal ones. */
   parts?: Partial<BoardDesign>;
+  /** How fast the reference node walks away. */
+  driftVoltsPerSecond?: number;
 }
 
 type Answer = Extract<RunEvent, { id: number }>;
@@ -55,10 +57,12 @@ export class Plant {
   private readonly offsetVolts: number;
   private readonly boardType: BoardType;
   private readonly pulseShare: number;
+  private readonly driftVoltsPerSecond: number;
 
   constructor(options: PlantOptions) {
     this.boardType = options.boardType;
     this.pulseShare = options.pulseShare ?? 1;
+    this.driftVoltsPerSecond = options.driftVoltsPerSecond ?? 0;
     this.random = seeded(options.seed);
     this.defect = options.defect ?? 'none';
     this.offsetVolts = 0.002 * normal(this.random);
@@ -154,7 +158,8 @@ export class Plant {
         if (this.defect === 'zener-open') return this.read(supply);
         if (this.defect === 'zener-reversed') return this.read(0.7);
         const node = referenceAt(this.design.reference, supply);
-        return this.read(node.kind === 'found' ? node.x : 0);
+        const walked = (this.driftVoltsPerSecond * this.nowMs) / 1000;
+        return this.read((node.kind === 'found' ? node.x : 0) + walked);
       }
       case 104:
         return this.read(this.wiperVolts(supply));

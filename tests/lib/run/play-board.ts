@@ -84,7 +84,8 @@ function screenName(screen: RunView['screen']): string {
   return 'wants' in screen ? `${screen.kind}:${screen.wants}` : screen.kind;
 }
 
-class Operator {
+/** Does what the screen says, at once. */
+export class Operator {
   private reactAtMs = 0;
   private stage = '';
   private leftTurns = 0;
@@ -102,6 +103,7 @@ class Operator {
       return { atMs, kind: 'lid', closed };
     };
     if (screen.kind === 'operator-check') return { atMs, kind: 'answer', ok: this.answer };
+    if (screen.kind === 'instruction') return this.instructed(screen.supplyOff, atMs);
     if (screen.kind === 'seat') {
       if (screen.wants === 'confirm-lid-and-board') {
         plant.boardPresent = plant.lidClosed = true;
@@ -128,6 +130,16 @@ class Operator {
       default:
         return null;
     }
+  }
+
+  /** Opens the lid where it may be opened, and says that it is done. */
+  private instructed(mayOpen: boolean, atMs: number): RunEvent {
+    if (mayOpen && this.plant.lidClosed && this.plan.hasController) {
+      this.plant.lidClosed = false;
+      return { atMs, kind: 'lid', closed: false };
+    }
+    if (mayOpen) this.plant.lidClosed = false;
+    return { atMs, kind: 'confirm', what: 'instruction-done' };
   }
 
   /** The hand goes on until it has reacted to the stage that the screen shows. */
