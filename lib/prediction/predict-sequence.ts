@@ -8,7 +8,7 @@ import { isFastLink, pollMsAt } from '../run/link-pace';
 import type { RunPlan } from '../run/types';
 import { firstOf, nextEnabled } from '../sequence/enabled-steps';
 import type { StationKind } from '../sequence/station-kind';
-import type { Sequence } from '../sequence/step';
+import type { Sequence, Step } from '../sequence/step';
 import { playStep, type PlayedStep } from './play-step';
 import { settledBench, settledFacts } from './settled-facts';
 import { StepMemo } from './step-memo';
@@ -42,9 +42,9 @@ export function predictSequence(
     const step = sequence.steps[stepIndex];
     if (!step) break;
     const entry = { plan, stepIndex, facts, bench };
-    const played = memo.play(step, entry, () => playStep(step, entry, station));
+    const played = memo.play(step, entry, (watched) => playStep(step, watched, station));
     line.add(step.id, played);
-    bench = settledBench(played.bench);
+    bench = settledBench(played.bench, trimmedTo(step, played, boardType));
     const own = played.facts.measurements.map((measurement) => ({ ...measurement, stepIndex }));
     const measurements = [...facts.measurements, ...own];
     facts = { ...settledFacts(played.facts, pointsOf(boardType, bench.screwTurns)), measurements };
@@ -99,21 +99,32 @@ function planOf(sequence: Sequence, boardType: BoardType, station: StationKind):
 
 /** The board as it comes: below the trim's target, or, where nothing trims it, as a trimmed one. */
 function freshBench(sequence: Sequence, boardType: BoardType): BenchState {
-  const { limits, trimmer, design, search } = boardType;
+  const { limits, search } = boardType;
   const trim = firstOf(sequence, 'trim');
   const middle = (limits.tripVolts.min + limits.tripVolts.max) / 2;
   const tripVolts = trim ? trim.targetVolts - offTargetVolts : middle;
-  const within = Math.max(search.tripVolts.min, tripVolts);
-  const node = referenceAt(design.reference, within);
-  const wiper = node.kind === 'found' ? wiperForTrip(design, within, node.x) : 0.5;
   return {
     supplyOn: false,
     setVolts: 0,
     output: 'off',
-    screwTurns: turnsAt(trimmer, Math.min(1, Math.max(0, wiper))),
+    screwTurns: turnsFor(boardType, Math.max(search.tripVolts.min, tripVolts)),
     relays: { channel: null, cycles: null },
     lidClosed: false,
   };
+}
+
+/** Where the screw stands after a trim that reached its target; null after any other step. */
+function trimmedTo(step: Step, { facts, ending }: PlayedStep, boardType: BoardType): number | null {
+  if (step.kind !== 'trim' || ending || !facts.trimmed) return null;
+  const missed = Math.abs(facts.trimmed.trip.volts - step.targetVolts);
+  return missed <= step.toleranceVolts ? turnsFor(boardType, step.targetVolts) : null;
+}
+
+/** As near as the travel comes. */
+function turnsFor({ design, trimmer }: BoardType, tripVolts: number): number {
+  const node = referenceAt(design.reference, tripVolts);
+  const wiper = node.kind === 'found' ? wiperForTrip(design, tripVolts, node.x) : 0.5;
+  return turnsAt(trimmer, Math.min(1, Math.max(0, wiper)));
 }
 
 /** Gathers what the steps did, on one clock. */

@@ -32,8 +32,10 @@ export function settledFacts(facts: RunFacts, board: Thresholds): RunFacts {
   };
 }
 
-export function settledBench(bench: BenchState): BenchState {
-  return { ...bench, setVolts: rounded(bench.setVolts, 1e-3), screwTurns: rounded(bench.screwTurns, 1e-2) };
+/** `trimmedTurns`: where a trim that reached its target leaves the screw, whichever way it came. */
+export function settledBench(bench: BenchState, trimmedTurns: number | null): BenchState {
+  const screwTurns = rounded(trimmedTurns ?? bench.screwTurns, 1e-3);
+  return { ...bench, setVolts: rounded(bench.setVolts, 1e-3), screwTurns };
 }
 
 function near(point: PointEstimate, trueVolts: number): PointEstimate {

@@ -2,10 +2,18 @@ import type { RunFacts, Points } from '../run/facts';
 import type { BoardType } from '../contracts/board-type';
 import type { StationKind } from '../sequence/station-kind';
 import { firstOf } from '../sequence/enabled-steps';
-import type { Sequence, Step } from '../sequence/step';
+import type { Step } from '../sequence/step';
+import { readsTheSame, watchedSequence, type LookedUp } from './looked-up';
 import type { PlayedStep, StepEntry } from './play-step';
 
 const mostRemembered = 600;
+/** Plays of one step that differ only in what it read in others. */
+const mostAlike = 4;
+
+interface Remembered {
+  played: PlayedStep;
+  lookedUp: readonly LookedUp[];
+}
 
 /**
  * Steps played before, by all that can change them: the step, what it looks up in others, and what it finds on the bench.
@@ -13,7 +21,7 @@ const mostRemembered = 600;
  */
 export class StepMemo {
   private of = '';
-  private readonly played = new Map<string, PlayedStep>();
+  private readonly played = new Map<string, Remembered[]>();
   private readonly texts = new WeakMap<object, string>();
 
   /** To be called before a prediction. */
@@ -24,24 +32,25 @@ export class StepMemo {
     this.played.clear();
   }
 
-  play(step: Step, entry: StepEntry, play: () => PlayedStep): PlayedStep {
+  play(step: Step, entry: StepEntry, play: (entry: StepEntry) => PlayedStep): PlayedStep {
     const key = this.keyOf(step, entry);
-    const known = this.played.get(key);
-    const result = known ?? play();
+    const alike = this.played.get(key) ?? [];
+    const known = alike.find(({ lookedUp }) => readsTheSame(entry.plan.sequence, lookedUp));
+    const remembered = known ?? playWatched(entry, play);
     // Oldest use first, so that the first to go is the one not asked for longest.
     this.played.delete(key);
-    this.played.set(key, result);
+    this.played.set(key, [remembered, ...alike.filter((each) => each !== known)].slice(0, mostAlike));
     if (this.played.size > mostRemembered) this.played.delete(this.played.keys().next().value!);
-    return result;
+    return remembered.played;
   }
 
   private keyOf(step: Step, { plan, facts, bench }: StepEntry): string {
     return [
       this.textOfStep(step),
-      ...lookedUp(plan.sequence).map((other) => (other ? this.textOfStep(other) : '')),
+      ...lookedInto.map((kind) => firstOf(plan.sequence, kind)?.id ?? ''),
       this.textOf(plan.sequence.decisionRule),
       JSON.stringify(bench),
-      factsText(facts),
+      factsText(step, facts),
     ].join('|');
   }
 
@@ -60,12 +69,18 @@ export class StepMemo {
   }
 }
 
-/** Steps find their windows, the working supply and the contact check in these. */
-function lookedUp(sequence: Sequence): (Step | undefined)[] {
-  return (['seat', 'power-up', 'find-points'] as const).map((kind) => firstOf(sequence, kind));
+/** Steps find their windows, the working supply and the contact check in these, or do without. */
+const lookedInto = ['seat', 'power-up', 'find-points'] as const;
+
+function playWatched(entry: StepEntry, play: (entry: StepEntry) => PlayedStep): Remembered {
+  const { sequence, lookedUp } = watchedSequence(entry.plan.sequence);
+  return { played: play({ ...entry, plan: { ...entry.plan, sequence } }), lookedUp };
 }
 
-function factsText({ supply, output, reference, found, trimmed, verified, measurements, ...facts }: RunFacts): string {
+function factsText(
+  { kind }: Step,
+  { supply, output, reference, found, trimmed, verified, measurements, ...facts }: RunFacts,
+): string {
   const points = (each: Points | null | undefined) =>
     each &&
     [each.trip, each.release].flatMap(({ volts, standardUncertaintyVolts }) => [volts, standardUncertaintyVolts]);
@@ -79,7 +94,8 @@ function factsText({ supply, output, reference, found, trimmed, verified, measur
     supply.state,
     output,
     reference,
-    points(found),
+    // Only a trim starts from these once there are newer ones.
+    kind === 'trim' || !trimmed ? points(found) : null,
     points(trimmed),
     points(verified.at(-1)),
     [...newest],

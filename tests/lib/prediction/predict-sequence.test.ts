@@ -22,9 +22,9 @@ const idOf = (kind: Step['kind']) => cutoff.steps.find((step) => step.kind === k
 class CountingMemo extends StepMemo {
   playedAgain: string[] = [];
   override play(...[step, entry, play]: Parameters<StepMemo['play']>) {
-    return super.play(step, entry, () => {
+    return super.play(step, entry, (watched) => {
       this.playedAgain.push(step.id);
-      return play();
+      return play(watched);
     });
   }
 }
@@ -70,13 +70,27 @@ describe('prediction of a sequence', () => {
     ['reference', { settleMs: 500 }, ['reference']],
     ['verify', { mostSpreadVolts: 0.02 }, ['verify']],
     ['output-levels', { settleMs: 90 }, ['output-levels']],
+    ['power-up', { settleMs: 400 }, ['power-up', 'seal']],
+    ['find-points', { wantedUncertaintyVolts: 0.002 }, ['find-points', 'trim', 'seal']],
     ['operator-check', { question: 'Is the red lamp dark?' }, ['operator-check']],
-  ] as const)('a change in %s plays no other step again', (kind, change, kinds) => {
+  ] as const)('a change in %s plays only what depends on it again', (kind, change, kinds) => {
     const memo = new CountingMemo();
     predictSequence(cutoff, cb1210, usualStation, memo);
     memo.playedAgain = [];
     predictSequence(changed(cutoff, idOf(kind), change), cb1210, usualStation, memo);
     expect(memo.playedAgain).toEqual(kinds.map(idOf));
+  });
+
+  it.each([
+    ['seat', { contactCheck: { volts: 1.5, currentLimitAmps: 0.02, mostMilliohms: 5_000 } }],
+    ['power-up', { volts: 13.8 }],
+    ['find-points', { windowMinVolts: 8, mostSettles: 140 }],
+    ['trim', { targetVolts: 10.82 }],
+  ] as const)('what other steps read of %s plays them again', (kind, change) => {
+    const memo = new StepMemo();
+    predictSequence(cutoff, cb1210, usualStation, memo);
+    const edited = changed(cutoff, idOf(kind), change);
+    expect(predictSequence(edited, cb1210, usualStation, memo)).toEqual(predictSequence(edited, cb1210, usualStation));
   });
 
   it('another name plays nothing again', () => {
