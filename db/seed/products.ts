@@ -1,19 +1,19 @@
 import type { Transaction } from '@/db/client';
 import { boardTypeRevisions } from '@/db/schema/board-type-revisions';
 import { boardTypes as boardTypeTable } from '@/db/schema/board-types';
-import { sequenceRevisions } from '@/db/schema/sequence-revisions';
 import { sequences as sequenceTable } from '@/db/schema/sequences';
 import { boardTypeSchema } from '@/lib/contracts/board-type';
 import { sequenceSchema, type Sequence } from '@/lib/sequence/step';
 import { boardTypes } from './board-types';
 import { daysFrom } from './days';
 import type { SeededPeople } from './people';
+import { historyOf, seedRevisions } from './sequence-history';
 import { sequences } from './sequences';
 
 export interface SeededProducts {
   boardTypeIds: Record<string, string>;
   boardTypeRevisionIds: Record<string, string>;
-  /** By the sequence's name. */
+  /** The revision in use, by the sequence's name. */
   sequenceRevisionIds: Record<string, string>;
 }
 
@@ -56,22 +56,9 @@ export async function seedProducts(tx: Transaction, people: SeededPeople, now: D
       .insert(sequenceTable)
       .values({ boardTypeId: made.boardTypeIds[boardTypeCode]!, name })
       .returning();
-    const [revision] = await tx
-      .insert(sequenceRevisions)
-      .values({
-        sequenceId: row!.id,
-        number: 1,
-        data: sequenceSchema.parse(sequence),
-        status: 'released',
-        note: 'First release.',
-        madeBy: people.engineerId,
-        madeAt: daysFrom(now, -60),
-        submittedAt: daysFrom(now, -58),
-        releasedBy: people.secondEngineerId,
-        releasedAt: daysFrom(now, -56),
-      })
-      .returning();
-    made.sequenceRevisionIds[name] = revision!.id;
+    const history = historyOf(name, sequenceSchema.parse(sequence));
+    const inUse = await seedRevisions(tx, { sequenceId: row!.id, history, people, now });
+    made.sequenceRevisionIds[name] = inUse;
   }
   return made;
 }

@@ -6,11 +6,14 @@ import { demoAccounts, demoPassword } from '@/db/seed/demo-accounts';
 import { yearAndWeek } from '@/db/seed/days';
 import { accounts } from '@/db/schema/accounts';
 import { lots } from '@/db/schema/lots';
+import { sequenceRevisions } from '@/db/schema/sequence-revisions';
+import { sequences } from '@/db/schema/sequences';
 import { simulatedBoards } from '@/db/schema/simulated-boards';
 import { stations } from '@/db/schema/stations';
 import { units } from '@/db/schema/units';
 import { boardTypeSchema } from '@/lib/contracts/board-type';
 import { linkHasController, stationLinkSchema } from '@/lib/contracts/station-link';
+import { checkSequence } from '@/lib/sequence/check-sequence';
 import { sequenceSchema } from '@/lib/sequence/step';
 import { findBadge } from '@/server/operations/people/find-badge';
 import { signInAtBench } from '@/server/operations/people/sign-in-bench';
@@ -79,9 +82,32 @@ describe('the demo', () => {
     const revisions = await open.db.query.sequenceRevisions.findMany();
     for (const row of revisions) {
       expect(sequenceSchema.parse(row.data)).toEqual(row.data);
-      expect(row.status).toBe('released');
+      const released = row.status === 'released' || row.status === 'superseded';
+      expect(row.releasedBy !== null).toBe(released);
       expect(row.releasedBy).not.toBe(row.madeBy);
     }
+  });
+
+  test('has a sequence with a history: superseded, in use by its lots, and a draft with one warning', async () => {
+    const sequence = await open.db.query.sequences.findFirst({ where: eq(sequences.name, 'CB1210 cutoff trim') });
+    const revisions = await open.db.query.sequenceRevisions.findMany({
+      where: eq(sequenceRevisions.sequenceId, sequence!.id),
+      orderBy: sequenceRevisions.number,
+    });
+    expect(revisions.map(({ status }) => status)).toEqual(['superseded', 'released', 'draft']);
+    const findings = checkSequence(revisions[2]!.data, boardTypes[0]!);
+    expect(findings.map(({ severity }) => severity)).toEqual(['warning']);
+    const pinned = await open.db.query.lots.findMany({ where: eq(lots.sequenceRevisionId, revisions[1]!.id) });
+    expect(pinned.length).toBeGreaterThan(0);
+  });
+
+  test('has a revision that waits for its release, in which the rules find nothing', async () => {
+    const [row] = await open.db.query.sequenceRevisions.findMany({
+      where: eq(sequenceRevisions.status, 'submitted'),
+      with: { sequence: { with: { boardType: true } } },
+    });
+    const boardType = boardTypes.find(({ code }) => code === row!.sequence.boardType.code)!;
+    expect(checkSequence(row!.data, boardType)).toEqual([]);
   });
 
   test('has three simulated stations, one of them without controller, and a sequence that it can run', async () => {
