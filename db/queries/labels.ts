@@ -1,4 +1,5 @@
 import { and, asc, desc, eq, inArray, isNotNull, isNull, lt, lte, or, sql } from 'drizzle-orm';
+import type { LabelLayout } from '@/lib/contracts/board-type';
 import type { Database, Transaction } from '../client';
 import { boardTypeRevisions } from '../schema/board-type-revisions';
 import { boardTypes } from '../schema/board-types';
@@ -6,6 +7,7 @@ import { labels } from '../schema/labels';
 import { lots } from '../schema/lots';
 import { measurements } from '../schema/measurements';
 import { printers } from '../schema/printers';
+import { runs } from '../schema/runs';
 import { units } from '../schema/units';
 
 type Reader = Database | Transaction;
@@ -58,6 +60,8 @@ export interface LabelJob {
   /** As verified in the run that passed. Null: not measured. */
   tripVolts: number | null;
   releaseVolts: number | null;
+  /** As the board type of the lot lays it out; absent: both lines. */
+  lines?: LabelLayout;
 }
 
 /** Null when the label has been printed, or has no printer, since it was claimed. */
@@ -85,11 +89,18 @@ export async function findLabelJob(db: Reader, labelId: string): Promise<LabelJo
   return { ...job, ...(await labelledPoints(db, runId)) };
 }
 
-/** The points that a label states: those verified last in the run. */
+/** What a label states: the points verified last in the run, and which lines its board type wants. */
 export async function labelledPoints(
   db: Reader,
   runId: string,
-): Promise<{ tripVolts: number | null; releaseVolts: number | null }> {
+): Promise<Pick<LabelJob, 'tripVolts' | 'releaseVolts' | 'lines'>> {
+  const [laidOut] = await db
+    .select({ specification: boardTypeRevisions.specification })
+    .from(runs)
+    .innerJoin(units, eq(units.id, runs.unitId))
+    .innerJoin(lots, eq(lots.id, units.lotId))
+    .innerJoin(boardTypeRevisions, eq(boardTypeRevisions.id, lots.boardTypeRevisionId))
+    .where(eq(runs.id, runId));
   const points = await db
     .select({ quantity: measurements.quantity, value: measurements.value })
     .from(measurements)
@@ -102,7 +113,11 @@ export async function labelledPoints(
     )
     .orderBy(desc(measurements.n));
   const last = (quantity: string) => points.find((point) => point.quantity === quantity)?.value ?? null;
-  return { tripVolts: last('trip-volts'), releaseVolts: last('release-volts') };
+  return {
+    tripVolts: last('trip-volts'),
+    releaseVolts: last('release-volts'),
+    lines: laidOut?.specification.label,
+  };
 }
 
 export type LabelChange = Partial<

@@ -10,6 +10,8 @@ export interface LabelContent {
   boardTypeName: string;
   tripVolts: number | null;
   releaseVolts: number | null;
+  /** Which lines the board type wants beside barcode and serial. Absent: both. */
+  lines?: { typeLine: boolean; pointsLine: boolean };
 }
 
 export interface LabelText {
@@ -44,7 +46,7 @@ const leastModuleMm = 0.19;
 
 const shortened = (text: string, most: number) => (text.length <= most ? text : `${text.slice(0, most - 1)}…`);
 
-function pointsLine({ tripVolts, releaseVolts }: LabelContent): string {
+function pointsText({ tripVolts, releaseVolts }: LabelContent): string {
   const parts = [];
   if (tripVolts !== null) parts.push(`off ${tripVolts.toFixed(2)} V`);
   if (releaseVolts !== null) parts.push(`on ${releaseVolts.toFixed(2)} V`);
@@ -75,6 +77,7 @@ export function layoutLabel(content: LabelContent): LabelOutcome {
       sentence: `Serial ${content.serial} does not fit on a label of 40 × 20 mm. Use a shorter serial for the next lot.`,
     };
   const barWidthMm = widthInModules(code) * moduleMm;
+  const { typeLine, pointsLine } = content.lines ?? { typeLine: true, pointsLine: true };
   return {
     ok: true,
     layout: {
@@ -87,9 +90,9 @@ export function layoutLabel(content: LabelContent): LabelOutcome {
           sizePt: 5,
           anchor: 'start',
           font: 'text',
-          text: shortened(`${content.boardTypeCode}, ${content.boardTypeName}`, 38),
+          text: typeLine ? shortened(`${content.boardTypeCode}, ${content.boardTypeName}`, 38) : '',
         },
-        { xMm: 2.3, yMm: 5.9, sizePt: 5, anchor: 'start', font: 'text', text: pointsLine(content) },
+        { xMm: 2.3, yMm: 5.9, sizePt: 5, anchor: 'start', font: 'text', text: pointsLine ? pointsText(content) : '' },
         {
           xMm: widthMm / 2,
           yMm: 18,

@@ -1,3 +1,4 @@
+import type { TrimmerPhoto } from './board-type';
 import type { StepGroup } from '../sequence/step';
 import type { CommissioningValues, LikelyCause, NoVerdictReason, RejectReason } from '../run/types';
 import type { TrimView } from '../trim/types';
@@ -62,7 +63,8 @@ export interface RunView {
     | { kind: 'seat'; wants: 'close-lid' | 'place-board' | 'confirm-lid-and-board' | 'nothing' }
     /** `everyMs`: time from one count to the next where it is fixed, so that what is left is known. */
     | { kind: 'measuring'; what: Say; done: number; of: number | null; everyMs?: number }
-    | { kind: 'trim'; trim: TrimView; clockwiseRaises: boolean }
+    /** `photo`: where the screw sits on boards of this type. */
+    | { kind: 'trim'; trim: TrimView; clockwiseRaises: boolean; photo?: TrimmerPhoto }
     | { kind: 'seal'; wants: 'supply-off' | 'open-lid' | 'seal-screw' | 'close-lid' }
     | { kind: 'operator-check'; question: string }
     /** `supplyOff`: the lid may be opened, once the supply is read back below 2 V. */

@@ -60,6 +60,8 @@ export const trimmerFrameSchema = z.object({
   height: z.number().min(0.02).max(1),
 });
 export type TrimmerFrame = z.infer<typeof trimmerFrameSchema>;
+const trimmerPhotoSchema = z.object({ fileId: z.uuid(), frame: trimmerFrameSchema });
+export type TrimmerPhoto = z.infer<typeof trimmerPhotoSchema>;
 
 /** Lines of the label beside barcode and serial; the label itself is 40 by 20 mm. */
 export const labelLayoutSchema = z.object({ typeLine: z.boolean(), pointsLine: z.boolean() });
@@ -125,7 +127,7 @@ export const boardTypeSchema = z.object({
   /** Absent: both lines. */
   label: labelLayoutSchema.optional(),
   /** Photograph of the board, shown where turning has no effect. Absent: none. */
-  trimmerPhoto: z.object({ fileId: z.uuid(), frame: trimmerFrameSchema }).optional(),
+  trimmerPhoto: trimmerPhotoSchema.optional(),
   fixtureDrawing: z.object({ fileId: z.uuid() }).optional(),
 });
 /** A board type as the engine and the simulator see it. */

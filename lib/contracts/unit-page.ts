@@ -1,5 +1,6 @@
 import type { BoardStanding } from '../decision/board-standing';
 import type { Adjustment, LikelyCause, Measurement, NoVerdictReason, RejectReason, Verdict } from '../run/types';
+import type { LabelLayout } from './board-type';
 import type { DispositionKind, LabelState, RunCloser, RunKind } from './stored-states';
 
 /** Readings of one stretch; equally long arrays. Output 1 on, 0 off, -1 not read. */
@@ -97,5 +98,5 @@ export interface UnitPage {
   dispositions: UnitDisposition[];
   retestOrders: UnitRetestOrder[];
   /** What the label of the newest pass states; null before a pass. */
-  label: { tripVolts: number | null; releaseVolts: number | null } | null;
+  label: { tripVolts: number | null; releaseVolts: number | null; lines?: LabelLayout } | null;
 }

@@ -11,9 +11,9 @@ type TrimScreenView = Extract<RunView['screen'], { kind: 'trim' }>;
 
 /** Which of the trim screens: a finding first, then the stage. Without a way to turn the station is measuring. */
 export function TrimScreen({ screen }: { screen: TrimScreenView }) {
-  const { trim } = screen;
+  const { trim, photo } = screen;
   const t = useTranslations('bench.trim');
-  if (trim.finding === 'no-effect') return <NoEffectScreen trim={trim} />;
+  if (trim.finding === 'no-effect') return <NoEffectScreen trim={trim} photo={photo} />;
   if (trim.finding !== null) return <FindingScreen trim={trim} finding={trim.finding} />;
   const advised = trim.direction !== null && trim.turns !== null && trim.words !== null;
   if (trim.stage === 'beep-2') return <SecondBeepScreen trim={trim} />;

@@ -1,4 +1,6 @@
 import { useTranslations } from 'next-intl';
+import { TrimmerPicture } from '@/components/ui/trimmer-picture';
+import type { TrimmerPhoto } from '@/lib/contracts/board-type';
 import type { TrimView } from '@/lib/trim/types';
 import { useBench } from '../bench-context';
 import { BenchFooter } from '../bench-footer';
@@ -11,7 +13,7 @@ import { BoardPicture } from './board-picture';
 import { heldReading, trimInside } from './trim-inside';
 
 /** Turning changed nothing: the wrong screw, or a trimmer that will not work. The operator says which. */
-export function NoEffectScreen({ trim }: { trim: TrimView }) {
+export function NoEffectScreen({ trim, photo }: { trim: TrimView; photo?: TrimmerPhoto }) {
   const t = useTranslations('bench.noEffect');
   const { send, leads } = useBench();
   return (
@@ -23,7 +25,16 @@ export function NoEffectScreen({ trim }: { trim: TrimView }) {
         <div className="flex min-h-0 flex-1 flex-col justify-between gap-5 px-12 py-6">
           <div className="flex min-h-0 items-center gap-14 max-[900px]:flex-col">
             <div className="w-160 max-w-full">
-              <BoardPicture label={t('screw')} />
+              {photo ? (
+                <TrimmerPicture
+                  photo={photo}
+                  label={t('screw')}
+                  className="max-h-[calc(420*var(--sw-b))]"
+                  otherwise={<BoardPicture label={t('screw')} />}
+                />
+              ) : (
+                <BoardPicture label={t('screw')} />
+              )}
             </div>
             <p className="text-[calc(44*var(--sw-b))] leading-[1.28]">{t('look')}</p>
           </div>

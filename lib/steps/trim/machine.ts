@@ -102,6 +102,7 @@ export const machine: StepMachine<TrimStep, TrimMachine> = {
       kind: 'trim',
       trim: viewTrim(machine.trim),
       clockwiseRaises: plan.boardType.trimmer.clockwise === 'raises',
+      photo: plan.boardType.trimmerPhoto,
     };
   },
 };

@@ -60,6 +60,16 @@ describe('a label', () => {
     ]);
   });
 
+  it('leaves out the lines that its board type does not want; barcode and serial stay', () => {
+    const textsOf = (lines: LabelContent['lines']) => {
+      const outcome = layoutLabel({ ...content('CB1210264800042'), lines });
+      return outcome.ok ? outcome.layout.texts.map(({ text }) => text) : [];
+    };
+    expect(textsOf({ typeLine: false, pointsLine: true })).toEqual(['off 10.81 V, on 12.23 V', 'CB1210 2648 00042']);
+    expect(textsOf({ typeLine: true, pointsLine: false })).toEqual(['CB1210, 12 V 10 A', 'CB1210 2648 00042']);
+    expect(textsOf({ typeLine: false, pointsLine: false })).toEqual(['CB1210 2648 00042']);
+  });
+
   it('is refused for a serial whose bars would be too fine to read', () => {
     expect(layoutLabel(content('ABCDEFGHIJKLMNOPQRSTUVWXYZ'))).toMatchObject({
       ok: false,
