@@ -1,10 +1,12 @@
 import { asc, eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { chartBaselines } from '@/db/schema/chart-baselines';
+import { siteSettings } from '@/db/schema/site-settings';
 import { trail } from '@/db/schema/trail';
 import { units } from '@/db/schema/units';
 import type { Actor } from '@/lib/access/actor';
 import { lotViewSchema } from '@/lib/contracts/lot-view';
+import { operatorNamingKey } from '@/lib/contracts/operator-naming';
 import { chooseBaseline } from '@/server/operations/lots/choose-baseline';
 import { createLot } from '@/server/operations/lots/create-lot';
 import { freezeBaselines } from '@/server/operations/lots/freeze-baselines';
@@ -80,6 +82,17 @@ describe('the review of a lot', () => {
     const view = (quantity: 'turns' | 'seconds') => readLotReview(lot.code, lotViewSchema.parse({ quantity }));
     expect((await view('turns'))!).toMatchObject({ points: { values: [0.5] }, limits: null });
     expect((await view('seconds'))!).toMatchObject({ points: { values: [15] }, capability: { kind: 'noLimits' } });
+  });
+
+  it('names operators by their number only where the site allows it', async () => {
+    const lot = await makeLot(1);
+    await lot.run(1);
+    const groups = async () =>
+      (await readLotReview(lot.code, lotViewSchema.parse({ compare: 'operator' })))!.comparison.groups;
+    expect(await groups()).toMatchObject([{ label: 'A', boards: 1 }]);
+    await open.db.insert(siteSettings).values({ key: operatorNamingKey, value: { shown: true } });
+    expect(await groups()).toMatchObject([{ label: '14', boards: 1 }]);
+    await open.db.delete(siteSettings);
   });
 
   it('is null for a lot that does not exist', async () => {

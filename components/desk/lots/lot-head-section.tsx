@@ -9,17 +9,19 @@ import { YieldSentence } from './yield-sentence';
 export function LotHeadSection({ review, ...section }: LotSectionProps & { review: LotReview | null }) {
   const { lot, may, actions, onChanged } = section;
   return (
-    <div className="grid items-start gap-x-14 gap-y-5 lg:grid-cols-[minmax(0,5fr)_minmax(0,3fr)]">
-      <div>
+    <div className="grid items-start gap-x-14 gap-y-4 lg:grid-cols-[minmax(0,5fr)_minmax(0,3fr)] lg:gap-y-0 lg:[grid-template-areas:'head_moves''words_hold']">
+      <div className="lg:[grid-area:head]">
         <PageHead title={<>Lot {lot.code}</>} lede={<LotLine lot={lot} />} />
+      </div>
+      <div className="lg:[grid-area:hold]">
+        <LotHold lot={lot} mayRelease={may.hold} actions={actions} onChanged={onChanged} />
+      </div>
+      <div className="lg:[grid-area:words]">
         <YieldSentence summary={lot.summary} quoted={review?.quoted ?? null} />
       </div>
-      <div className="grid gap-4 max-lg:-order-none">
-        <div className="sw-screen-only flex flex-wrap items-center gap-3 lg:justify-end">
-          <LotSheetLink code={lot.code} />
-          {may.manage ? <LotActions lot={lot} actions={actions} onChanged={onChanged} /> : null}
-        </div>
-        <LotHold lot={lot} mayRelease={may.hold} actions={actions} onChanged={onChanged} />
+      <div className="sw-screen-only flex flex-wrap items-center gap-3 lg:justify-end lg:[grid-area:moves]">
+        <LotSheetLink code={lot.code} />
+        {may.manage ? <LotActions lot={lot} actions={actions} onChanged={onChanged} /> : null}
       </div>
     </div>
   );

@@ -21,7 +21,11 @@ export function RuleSwitches({ review, view, changeView }: RuleSwitchesProps) {
           <CheckField
             key={rule}
             label={`${rule}  ${ruleWords[rule]}`}
-            hint={baseline.kind === 'frozen' && broken[rule] > 0 ? `broken at ${broken[rule]} ${broken[rule] === 1 ? 'board' : 'boards'}` : undefined}
+            hint={
+              baseline.kind === 'frozen' && broken[rule] > 0
+                ? `broken at ${broken[rule]} ${broken[rule] === 1 ? 'board' : 'boards'}`
+                : undefined
+            }
             checked={view.rules.includes(rule)}
             onChange={(event) => changeView({ rules: withRule(view.rules, rule, event.target.checked) })}
           />
