@@ -110,7 +110,7 @@ export function factsAfter(facts: RunFacts, event: RunEvent): RunFacts {
         event.volts,
       );
     case 'sensed':
-      return { ...facts, output: event.output };
+      return event.output === facts.output ? facts : { ...facts, output: event.output };
     case 'supply-is-off':
       return {
         ...facts,
@@ -120,6 +120,16 @@ export function factsAfter(facts: RunFacts, event: RunEvent): RunFacts {
     default:
       return facts;
   }
+}
+
+/** The same facts where a turn of a step told nothing new, as most do. */
+export function factsAfterTurn(
+  before: RunFacts,
+  { facts = {}, measurements = [] }: { facts?: Partial<RunFacts>; measurements?: Measurement[] },
+): RunFacts {
+  const names = Object.keys(facts) as (keyof RunFacts)[];
+  if (measurements.length === 0 && names.every((name) => Object.is(facts[name], before[name]))) return before;
+  return { ...before, ...facts, measurements: [...before.measurements, ...measurements] };
 }
 
 function withVolts(facts: RunFacts, volts: number): RunFacts {

@@ -3,7 +3,7 @@ import { kindOf } from '../steps/step-kinds';
 import { decideVerdict, verdictOf, type Ending } from '../decision/decide-verdict';
 import { failingWhenStopped } from './failing-when-stopped';
 import { faultCodes } from './fault-codes';
-import { factsAfter, factsAfterAsking, noFacts, type RunFacts } from './facts';
+import { factsAfter, factsAfterAsking, factsAfterTurn, noFacts, type RunFacts } from './facts';
 import { interruptionBy } from './interruption';
 import { expectedUncertainty } from './rails';
 import type { Ask, StepContext, StepEvent, StepTurn } from './machine';
@@ -87,20 +87,17 @@ function advanceStep(state: RunState, event: StepEvent): Advance {
 }
 
 function takeTurn(before: RunState, turn: StepTurn<unknown>): Advance {
-  const { measurements = [], facts = {} } = turn;
-  const state: RunState = {
-    ...before,
-    facts: { ...before.facts, ...facts, measurements: [...before.facts.measurements, ...measurements] },
-  };
+  const facts = factsAfterTurn(before.facts, turn);
+  const state: RunState = facts === before.facts ? before : { ...before, facts };
   if ('ending' in turn) return end(state, turn.ending, state);
   if ('done' in turn) return afterStep(state, turn.goTo ?? null);
-  const going = { ...state, machine: turn.machine };
-  if (!turn.ask) return { state: going, effects: [] };
-  if (turn.ask.kind === 'supply-on' && state.facts.lidClosed === false) {
+  if (turn.ask?.kind === 'supply-on' && state.facts.lidClosed === false) {
     const code = faultCodes.lidOpened;
+    const going = { ...state, machine: turn.machine };
     return end(going, { kind: 'no-verdict', reason: 'lid-opened', code, detail: null, fault: null }, going);
   }
-  return ask(going, turn.ask);
+  if (turn.ask) return ask(state, turn.ask, turn.machine);
+  return { state: { ...state, machine: turn.machine }, effects: [] };
 }
 
 /** A branch that names a step that is not there leads past the end: such a run has no verdict. */
@@ -112,11 +109,12 @@ function afterStep(state: RunState, goTo: string | null): Advance {
   return beginStep({ ...state, path: [...state.path, visit], stepIndex, machine: null });
 }
 
-function ask(state: RunState, wish: Ask): Advance {
+function ask(state: RunState, wish: Ask, machine: unknown = state.machine): Advance {
   const effect = { ...wish, id: state.nextId } as RunEffect;
   return {
     state: {
       ...state,
+      machine,
       nextId: state.nextId + 1,
       outstanding: { id: state.nextId, answer: answerTo[wish.kind] },
       facts: factsAfterAsking(state.facts, effect),

@@ -45,10 +45,10 @@ function tripWeights(settings: SearchSettings, level: Level, grid: Window): Floa
   if (level > 0) return weights;
   const { prior } = settings;
   const half = 0.5 * grid.cell;
+  const sd = prior ? Math.hypot(prior.tripSdVolts, 0.3 * grid.cell) : 0;
   for (let i = 0; i < grid.cells; i++) {
     const volts = centre(grid, i);
-    if (prior)
-      weights[i] = bell((volts - prior.tripMeanVolts) / Math.hypot(prior.tripSdVolts, 0.3 * grid.cell), tripCut);
+    if (prior) weights[i] = bell((volts - prior.tripMeanVolts) / sd, tripCut);
     else {
       const inside = Math.min(volts + half, settings.tripMaxVolts) - Math.max(volts - half, settings.tripMinVolts);
       weights[i] = Math.max(0, inside) / grid.cell;
@@ -66,20 +66,23 @@ function weighByHysteresis(
 ): void {
   const sd = Math.hypot(prior.hysteresisSdVolts, 0.3 * grids.trip.cell, 0.3 * grids.release.cell);
   const step = grids.release.cell / sd;
-  for (let i = 0; i < weights.trip.length; i++) {
-    if (weights.trip[i]! === 0) continue;
+  const { trip: ownTrip, release: ownRelease } = own;
+  const { trip, release } = weights;
+  for (let i = 0; i < trip.length; i++) {
+    if (trip[i]! === 0) continue;
     // In fall coordinates the release cell at this trip's expected release lies at position `middle`.
     const expected = -(centre(grids.trip, i) + prior.hysteresisMeanVolts);
     const middle = (expected - grids.release.low) / grids.release.cell - 0.5;
     const first = Math.max(0, Math.ceil(middle - hysteresisCut / step));
-    const last = Math.min(weights.release.length - 1, Math.floor(middle + hysteresisCut / step));
+    const last = Math.min(release.length - 1, Math.floor(middle + hysteresisCut / step));
+    const ownOfTrip = ownTrip[i]!;
     let sum = 0;
     for (let j = first; j <= last; j++) {
       const w = bell((j - middle) * step, hysteresisCut);
-      sum += own.release[j]! * w;
-      weights.release[j]! += own.trip[i]! * w;
+      sum += ownRelease[j]! * w;
+      release[j]! += ownOfTrip * w;
     }
-    weights.trip[i]! *= sum;
+    trip[i]! *= sum;
   }
 }
 

@@ -43,12 +43,15 @@ export function massBelow(low: number, cell: number, cumulative: Float64Array, x
  */
 export function weighBelief(posterior: GridPosterior, weights: Float64Array): Belief {
   const { low, cell, cells, overshoots } = posterior;
-  const mass = new Float64Array(posterior.mass.length);
+  const given = posterior.mass;
+  const mass = new Float64Array(given.length);
   let total = 0;
-  for (let k = 0; k < overshoots.length; k++)
-    for (let i = 0; i < cells; i++) total += mass[k * cells + i] = posterior.mass[k * cells + i]! * weights[i]!;
+  for (let k = 0; k < overshoots.length; k++) {
+    const first = k * cells;
+    for (let i = 0; i < cells; i++) total += mass[first + i] = given[first + i]! * weights[i]!;
+  }
   if (!(total > 1e-12)) {
-    mass.set(posterior.mass);
+    mass.set(given);
     total = 1;
   }
   const scale = 1 / total;
@@ -57,9 +60,10 @@ export function weighBelief(posterior: GridPosterior, weights: Float64Array): Be
   let overshootFrom = overshoots.length;
   let overshootTo = -1;
   for (let k = 0; k < overshoots.length; k++) {
+    const first = k * cells;
     let share = 0;
     for (let i = 0; i < cells; i++) {
-      const m = (mass[k * cells + i]! *= scale);
+      const m = (mass[first + i]! *= scale);
       marginal[i]! += m;
       share += m;
     }

@@ -17,10 +17,12 @@ export type DryRunTold =
   | { kind: 'done'; done: number; result: DryRunResult }
   | { kind: 'failed'; problem: string };
 
-/** What a worker thread does at once: some boards, one after another. */
+/** What a worker thread does at once: some boards, each by every sequence, so that all of them come on evenly. */
 export interface BoardsTask {
   trial: Trial;
+  sequences: Sequence[];
   from: number;
   to: number;
 }
-export type BoardsAnswer = DryBoardOutcome[];
+/** By sequence, then by board. */
+export type BoardsAnswer = DryBoardOutcome[][];

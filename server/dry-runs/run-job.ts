@@ -5,7 +5,7 @@ import type { Sequence } from '@/lib/sequence/step';
 import type { BoardsAnswer, BoardsTask, DryRunJob, DryRunTold } from './job';
 
 /** Few, so that progress moves from the first moment on; many boards a task would save little. */
-const boardsATask = 4;
+const boardsATask = 2;
 const tellEveryMs = 500;
 
 type Outcomes = (DryBoardOutcome | undefined)[];
@@ -36,15 +36,16 @@ export async function runJob(
     }),
     elapsedMs: performance.now() - startedMs,
   });
-  const run = async (sequence: Sequence, into: Outcomes, from: number, to: number) => {
-    const answer = await runBoards({ trial: { ...job.draft, sequence }, from, to });
-    answer.forEach((outcome, i) => (into[from + i] = outcome));
-    done += answer.length;
+  type Side = { sequence: Sequence; into: Outcomes };
+  const run = async (sides: Side[], from: number, to: number) => {
+    const answers = await runBoards({ trial: job.draft, sequences: sides.map(({ sequence }) => sequence), from, to });
+    answers.forEach((outcomes, side) => outcomes.forEach((outcome, i) => (sides[side]!.into[from + i] = outcome)));
+    done += sides.length * (to - from);
     if (performance.now() - toldMs < tellEveryMs) return;
     toldMs = performance.now();
     tell({ kind: 'progress', done, result: result() });
   };
-  const passes: { sequence: Sequence; into: Outcomes }[][] = [
+  const passes: Side[][] = [
     [
       { sequence: job.draft.sequence, into: draft },
       ...(job.released && released ? [{ sequence: job.released, into: released }] : []),
@@ -54,8 +55,7 @@ export async function runJob(
   for (const sides of passes) {
     const tasks: Promise<void>[] = [];
     for (let from = 0; from < boards; from += boardsATask)
-      for (const { sequence, into } of sides)
-        tasks.push(run(sequence, into, from, Math.min(boards, from + boardsATask)));
+      tasks.push(run(sides, from, Math.min(boards, from + boardsATask)));
     await Promise.all(tasks);
   }
   tell({ kind: 'done', done, result: result() });

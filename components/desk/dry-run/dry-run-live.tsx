@@ -8,6 +8,7 @@ import { FormProblem } from '../form-problem';
 import { count } from '../numbers';
 import { Time } from '../time';
 import { CostsAndGains } from './costs-and-gains';
+import { LimitHistograms } from './limit-histograms';
 import { LostBoards, LostDifference } from './lost-boards';
 import { lostAtSteps } from './lost-at';
 import { RunProgress } from './run-progress';
@@ -87,6 +88,7 @@ export function DryRunLive({ page, actions }: DryRunLiveProps) {
         <aside className="border-t-2 border-ink pt-2.5 max-lg:mt-8">
           <div className="mx-auto max-w-[440px]">
             <RunRails boardType={boardType} result={result} {...names} />
+            {result ? <LimitHistograms limits={boardType.limits} result={result} /> : null}
           </div>
           <div className="mt-3 grid gap-2 border-t-2 border-ink pt-2.5">
             <h2 className="font-bold">

@@ -6,6 +6,7 @@ import { Button } from '@/components/ui/button';
 import type { BoardType } from '@/lib/contracts/board-type';
 import { usualDryRun } from '@/lib/contracts/dry-run';
 import { FormProblem } from '../form-problem';
+import { LimitHistograms } from './limit-histograms';
 import { RunProgress } from './run-progress';
 import { RunRails } from './run-rails';
 import { RunSentence } from './run-sentence';
@@ -48,6 +49,7 @@ export function DryRunPane(props: DryRunPaneProps) {
     <section aria-label={`Dry run of r${revisionNumber}`} className="grid gap-3">
       <div className="mx-auto w-full max-w-[460px]">
         <RunRails boardType={boardType} result={result} draftName={`r${revisionNumber}`} releasedName={releasedName} />
+        {result ? <LimitHistograms limits={boardType.limits} result={result} /> : null}
       </div>
       <div className="border-t-2 border-ink pt-2.5">
         <h2 className="mb-1 font-bold">Dry run of r{revisionNumber}</h2>
