@@ -1,7 +1,9 @@
 import { and, eq, sql } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
+import { listHolds } from '@/db/queries/lot-holds';
 import { listBenches, type BenchRow } from '@/db/queries/station-benches';
 import { accounts } from '@/db/schema/accounts';
+import { commissionings } from '@/db/schema/commissionings';
 import { dailyChecks } from '@/db/schema/daily-checks';
 import { labels } from '@/db/schema/labels';
 import { lots } from '@/db/schema/lots';
@@ -134,6 +136,20 @@ describe('opening a run', () => {
       ok: false,
       refusal: { code: 'serial-of-other-lot', params: { lot: lot.code } },
     });
+  });
+
+  test('is refused where the rules find an error in the sequence for this station as it was commissioned', async () => {
+    const bench = benches[0]!;
+    const [usual] = await open.db.select().from(commissionings).where(eq(commissionings.stationId, bench.id)).limit(1);
+    const { id: _id, at: _at, ...values } = usual!;
+    const [slow] = await open.db
+      .insert(commissionings)
+      .values({ ...values, settleMs: 70, at: new Date() })
+      .returning();
+    expect(await begin(bench)).toMatchObject({ ok: false, refusal: { code: 'sequence-has-errors' } });
+    await open.db.delete(commissionings).where(eq(commissionings.id, slow!.id));
+    const plan = await opened(bench);
+    await recordRun(open.db, recordOf(plan, played(plan)), 'station');
   });
 
   test('is for whoever may test boards: an engineer without that role is refused', async () => {
@@ -327,5 +343,34 @@ describe('the hash of a closed run', () => {
     const [broken] = (await verifyTrail(open.db, { runs: true })).breaks;
     expect(broken).toMatchObject({ chain: benches[0]!.code });
     expect(broken!.sentence).toContain(serial);
+  });
+});
+
+describe('a hold by rule', () => {
+  const reject = async (seed: number) => {
+    const boards = await open.db.select().from(units).where(eq(units.lotId, lot.id)).orderBy(units.position);
+    serial = boards[used++]!.serial;
+    const plan = await opened();
+    const play = played(plan, { seed, defect: 'wrong-zener' });
+    await recordRun(open.db, recordOf(plan, play), 'station');
+    await scanBin(open.db, who, benches[0]!, { runId: plan.runId, binCode: 'SWR-12-A' }).catch(() => null);
+    return play.result.rejectReason;
+  };
+
+  test('is raised with the run that breaks it, stops the next scan with its reason, and begins afresh after a release', async () => {
+    const reasons = [await reject(31), await reject(32)];
+    const held = async () => (await open.db.select().from(lots).where(eq(lots.id, lot.id)))[0]!;
+    expect((await held()).heldAt).toBeNull();
+    reasons.push(await reject(33));
+    expect(new Set(reasons).size).toBe(1);
+    const { heldAt, heldBy, holdReason } = await held();
+    expect(heldAt).not.toBeNull();
+    expect(heldBy).toBeNull();
+    expect(holdReason).toContain('3 boards in a row');
+    const [hold] = await listHolds(open.db, lot.id);
+    expect(hold!.hold).toMatchObject({ cause: 'same-reason', detail: { times: 3, reason: reasons[0] } });
+    const refused = await begin(benches[0]!);
+    expect(refused).toMatchObject({ ok: false });
+    expect(JSON.stringify(refused)).toContain('hold');
   });
 });
