@@ -9,11 +9,14 @@ import { Dialog } from '@/components/ui/dialog';
 import { TextAreaField } from '@/components/ui/text-area-field';
 import type { Outcome } from '@/lib/contracts/outcome';
 import { FormProblem } from './form-problem';
+import { SignatureField } from './signature-field';
 import { useActionForm } from './use-action-form';
 
-const schema = z.object({
+const plain = z.object({
   reason: z.string().trim().min(1, { error: 'Enter the reason.' }).max(300, { error: 'Use at most 300 characters.' }),
+  password: z.string(),
 });
+const signedToo = plain.extend({ password: z.string().min(1, { error: 'Enter your password.' }) });
 
 interface ReasonDialogProps {
   open: boolean;
@@ -23,16 +26,32 @@ interface ReasonDialogProps {
   /** Button that repeats the verb, and the safe one. */
   verb: string;
   keep: string;
-  send: (reason: string) => Promise<Outcome>;
+  /** Signed with the password as well. */
+  signed?: boolean;
+  send: (reason: string, password: string) => Promise<Outcome>;
   onDone: () => void;
 }
 
-/** Asks for the reason of a change. Focus starts in the reason. */
-export function ReasonDialog({ open, onClose, title, consequence, verb, keep, send, onDone }: ReasonDialogProps) {
-  const form = useForm({ resolver: zodResolver(schema), defaultValues: { reason: '' } });
+/** Asks for the reason of a change. Focus starts in the reason; a wrong password keeps it. */
+export function ReasonDialog({
+  open,
+  onClose,
+  title,
+  consequence,
+  verb,
+  keep,
+  signed = false,
+  send,
+  onDone,
+}: ReasonDialogProps) {
+  const form = useForm({
+    resolver: zodResolver(signed ? signedToo : plain),
+    defaultValues: { reason: '', password: '' },
+  });
+  const { errors } = form.formState;
   const sending = useActionForm(
     form,
-    ({ reason }) => send(reason),
+    ({ reason, password }) => send(reason, password),
     () => {
       form.reset();
       onDone();
@@ -56,7 +75,8 @@ export function ReasonDialog({ open, onClose, title, consequence, verb, keep, se
         </>
       }
     >
-      <TextAreaField {...form.register('reason')} label="Reason" error={form.formState.errors.reason?.message} />
+      <TextAreaField {...form.register('reason')} label="Reason" error={errors.reason?.message} />
+      {signed ? <SignatureField {...form.register('password')} error={errors.password?.message} /> : null}
       <FormProblem problem={sending.problem} />
     </Dialog>
   );

@@ -5,11 +5,11 @@ import { TextField } from '@/components/ui/text-field';
 export function SignatureField({
   signer,
   ...input
-}: Omit<ComponentProps<typeof TextField>, 'label'> & { signer: string }) {
+}: Omit<ComponentProps<typeof TextField>, 'label'> & { /** Absent: whoever is signed in. */ signer?: string }) {
   return (
     <TextField
       {...input}
-      label={`Password of ${signer}`}
+      label={signer ? `Password of ${signer}` : 'Your password'}
       type="password"
       autoComplete="current-password"
       onKeyDown={(event) => {

@@ -1,15 +1,11 @@
 import en from '@/lib/messages/en.json';
 import type { DispositionKind, LabelState, LotState } from '@/lib/contracts/stored-states';
 import type { BoardStanding } from '@/lib/decision/board-standing';
-import type { LikelyCause, Measurement, NoVerdictReason, RejectReason, Verdict } from '@/lib/run/types';
+import type { LikelyCause, Measurement, NoVerdictReason, Verdict } from '@/lib/run/types';
 
 /** What desk pages call things, in English; the bench speaks the operator's language. */
 
-/** The same words as at the bench. */
-export const rejectWords: Record<RejectReason, string> = {
-  ...en.reject,
-  'operator-check-failed': 'Operator check failed',
-};
+export { rejectWords } from '@/lib/messages/reject-words';
 export const causeWords: Record<LikelyCause, string> = en.cause;
 export const noVerdictWords = (reason: NoVerdictReason): string => en.noVerdict[reason].title;
 

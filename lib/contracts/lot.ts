@@ -52,6 +52,10 @@ export const changeLotSchema = z.object({ lotId: z.uuid(), change: z.enum(lotCha
 export type LotChange = (typeof lotChanges)[number];
 
 export const lotReasonSchema = z.object({ lotId: z.uuid(), reason: line('the reason', 300) });
+/** A release is signed with the password. */
+export const lotReleaseSchema = lotReasonSchema.extend({
+  password: z.string().min(1, { error: 'Enter your password.' }).max(200),
+});
 
 export const componentBatchSchema = z.object({
   lotId: z.uuid(),

@@ -1,10 +1,12 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { accounts } from '@/db/schema/accounts';
 import { trail } from '@/db/schema/trail';
 import { units } from '@/db/schema/units';
 import type { Actor } from '@/lib/access/actor';
 import { changeLot } from '@/server/operations/lots/change-lot';
 import { checkLotSerials } from '@/server/operations/lots/check-lot-serials';
 import { createLot } from '@/server/operations/lots/create-lot';
+import { hashSecret } from '@/server/auth/secret-hash';
 import { holdLot, releaseLot } from '@/server/operations/lots/hold-lot';
 import { listLotsForDesk } from '@/server/operations/lots/list-lots';
 import { readLotPage } from '@/server/operations/lots/read-lot-page';
@@ -15,12 +17,16 @@ import { temporaryDatabase, type TemporaryDatabase } from '../database/temporary
 import { actorOf, insertReleasedSequence } from './bases';
 import { insertRun } from './runs';
 
+const password = 'a password of quality';
 let open: TemporaryDatabase;
 let actor: Actor;
 let basis: Awaited<ReturnType<typeof insertReleasedSequence>>;
 beforeAll(async () => {
   open = await temporaryDatabase();
-  actor = actorOf(await insertAccount(open.db, ['quality-manager']));
+  const account = await insertAccount(open.db, ['quality-manager']);
+  const passwordHash = await hashSecret(password);
+  await open.db.update(accounts).set({ passwordHash }).where(eq(accounts.id, account.id));
+  actor = actorOf(account);
   basis = await insertReleasedSequence(open.db);
 });
 afterAll(() => open.close());
@@ -124,8 +130,11 @@ describe('a lot', () => {
     expect(await holdLot(actor, lot.id, 'Trip points drift')).toMatchObject({ ok: true });
     expect(await holdLot(actor, lot.id, 'again')).toMatchObject({ ok: false, code: 'lot-held' });
     expect((await readLotPage(lot.code))!.hold).toMatchObject({ reason: 'Trip points drift', byName: actor.name });
-    expect(await releaseLot(actor, lot.id, 'Meter was off')).toMatchObject({ ok: true });
-    expect(await releaseLot(actor, lot.id, 'again')).toMatchObject({ ok: false, code: 'lot-not-held' });
+    expect(await releaseLot(actor, { lotId: lot.id, reason: 'Meter was off', password })).toMatchObject({ ok: true });
+    expect(await releaseLot(actor, { lotId: lot.id, reason: 'again', password })).toMatchObject({
+      ok: false,
+      code: 'lot-not-held',
+    });
     expect((await readLotPage(lot.code))!.hold).toBeNull();
   });
 

@@ -8,16 +8,19 @@ import {
   componentBatchSchema,
   createLotSchema,
   lotReasonSchema,
+  lotReleaseSchema,
 } from '@/lib/contracts/lot';
 import { chooseBaselineSchema } from '@/lib/contracts/lot-review';
 import type { Outcome } from '@/lib/contracts/outcome';
 import { parseForm } from '@/lib/contracts/parse-form';
+import { moveLotSchema } from '@/lib/contracts/sequence-draft';
 import { authorise } from '@/server/auth/authorise';
 import { changeLot } from '@/server/operations/lots/change-lot';
 import { checkLotSerials } from '@/server/operations/lots/check-lot-serials';
 import { chooseBaseline } from '@/server/operations/lots/choose-baseline';
 import { createLot } from '@/server/operations/lots/create-lot';
 import { holdLot, releaseLot } from '@/server/operations/lots/hold-lot';
+import { moveLot } from '@/server/operations/lots/move-lot';
 import { recordComponentBatch } from '@/server/operations/lots/record-component-batch';
 
 export async function checkLotSerialsAction(input: unknown): Promise<Outcome<SerialRow[]>> {
@@ -55,9 +58,9 @@ export async function holdLotAction(input: unknown): Promise<Outcome> {
 
 export async function releaseLotAction(input: unknown): Promise<Outcome> {
   const actor = await authorise('hold-lots');
-  const form = parseForm(lotReasonSchema, input);
+  const form = parseForm(lotReleaseSchema, input);
   if (!form.ok) return form;
-  const outcome = await releaseLot(actor, form.value.lotId, form.value.reason);
+  const outcome = await releaseLot(actor, form.value);
   if (outcome.ok) revalidatePath('/lots', 'layout');
   return outcome;
 }
@@ -67,6 +70,15 @@ export async function recordComponentBatchAction(input: unknown): Promise<Outcom
   const form = parseForm(componentBatchSchema, input);
   if (!form.ok) return form;
   const outcome = await recordComponentBatch(actor, form.value);
+  if (outcome.ok) revalidatePath('/lots', 'layout');
+  return outcome;
+}
+
+export async function moveLotAction(input: unknown): Promise<Outcome> {
+  const actor = await authorise('manage-lots');
+  const form = parseForm(moveLotSchema, input);
+  if (!form.ok) return form;
+  const outcome = await moveLot(actor, form.value);
   if (outcome.ok) revalidatePath('/lots', 'layout');
   return outcome;
 }

@@ -122,9 +122,10 @@ export function LotHold({ lot, mayRelease, actions, onChanged }: LotActionsProps
             ? `${left} boards have no verdict; benches may test them again. Your reason is recorded.`
             : 'Your reason is recorded.'
         }
-        verb="Release the lot"
+        verb="Sign and release"
         keep="Keep it on hold"
-        send={(given) => actions.release({ lotId: lot.id, reason: given })}
+        signed
+        send={(given, password) => actions.release({ lotId: lot.id, reason: given, password })}
         onDone={() => {
           setAsking(false);
           toast(`Lot ${lot.code} is released`);

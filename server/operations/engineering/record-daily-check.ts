@@ -5,6 +5,7 @@ import type { Actor } from '@/lib/access/actor';
 import type { DailyCheckForm } from '@/lib/contracts/daily-check';
 import { refusal, success, type Outcome } from '@/lib/contracts/outcome';
 import { database } from '@/server/postgres';
+import { holdAfterFailedCheck } from '../holds/check-holds';
 
 /**
  * A daily check measured beside the station and entered by hand; judged like one that the bench made. Code:
@@ -22,6 +23,7 @@ export async function recordDailyCheck(
     const within = (measured: number, known: number) => Math.abs(measured - known) <= reference.toleranceVolts + 1e-9;
     const passed = within(form.tripVolts, reference.tripVolts) && within(form.releaseVolts, reference.releaseVolts);
     await insertDailyCheck(tx, { ...form, passed, at, byAccountId: actor.accountId });
+    if (!passed) await holdAfterFailedCheck(tx, form.stationId, at);
     await insertTrail(tx, actor, {
       action: 'station.daily-check',
       entity: 'station',

@@ -7,6 +7,7 @@ import type { LotPage } from '@/lib/contracts/lot-page';
 import { boardsPerPage, lotViewSchema, type LotView } from '@/lib/contracts/lot-view';
 import { summariseLot } from '@/lib/statistics/lot-summary';
 import { database } from '@/server/postgres';
+import { readLotRevision } from './read-lot-revision';
 import { boardRow, isChosen, sortsByNewestRun, sortRows } from './lot-board-rows';
 
 type BoardsView = Pick<LotView, 'boards' | 'sort' | 'order' | 'page'>;
@@ -16,10 +17,11 @@ export async function readLotPage(code: string, view: BoardsView = lotViewSchema
   const db = database();
   const lot = await findLotByCode(db, code.toUpperCase());
   if (!lot) return null;
-  const [records, components, span] = await Promise.all([
+  const [records, components, span, revision] = await Promise.all([
     listUnitRecordsOfLot(db, lot.id),
     listComponentBatches(db, lot.id),
     getLotSpan(db, lot.id),
+    readLotRevision(lot.id, lot.sequenceRevisionId),
   ]);
   const chosen = records.filter((record) => isChosen(record, view.boards));
   const rowsOf = async (shown: typeof records) => {
@@ -45,6 +47,7 @@ export async function readLotPage(code: string, view: BoardsView = lotViewSchema
     boardTypeCode: lot.boardTypeCode,
     boardTypeName: lot.boardTypeName,
     sequenceNumber: lot.sequenceNumber,
+    revision,
     createdAtIso: lot.createdAt.toISOString(),
     createdByName: lot.createdByName,
     closedAtIso: lot.closedAt?.toISOString() ?? null,

@@ -8,6 +8,7 @@ import { compareReference } from '@/lib/bench/reference-check';
 import { refusal, success, type Outcome } from '@/lib/contracts/outcome';
 import type { RunCloser } from '@/lib/contracts/stored-states';
 import { tracesOf } from '@/lib/run/traces';
+import { checkHolds, holdAfterFailedCheck } from '../holds/check-holds';
 import { freezeBaselines } from '../lots/freeze-baselines';
 import { printLabel } from '../labels/print-label';
 import { sealRun } from '../trail/seal-run';
@@ -34,7 +35,10 @@ export async function recordRun(
     await storeResults(tx, record);
     await close(tx, record, closedBy);
     await sealRun(tx, run, record.result.verdict);
-    if (run.kind === 'production' && record.result.verdict !== 'no-verdict') await freezeBaselines(tx, run.lotId!);
+    if (run.kind === 'production' && record.result.verdict !== 'no-verdict') {
+      await freezeBaselines(tx, run.lotId!);
+      await checkHolds(tx, { id: run.id, lotId: run.lotId!, stationId: run.stationId });
+    }
     if (run.kind === 'production' && record.result.verdict === 'pass') {
       const printerId = await findStationPrinter(tx, run.stationId);
       await printLabel(tx, { unitId: run.unitId!, runId: run.id, printerId });
@@ -86,5 +90,6 @@ async function storeDailyCheck(tx: Transaction, run: Run, { result, endedAtIso }
     validHours,
     byAccountId: run.operatorId,
   });
+  if (!passed) await holdAfterFailedCheck(tx, run.stationId, at);
   return passed ? new Date(at.getTime() + validHours * 3_600_000).toISOString() : null;
 }

@@ -6,6 +6,7 @@ import { accounts } from '@/db/schema/accounts';
 import { commissionings } from '@/db/schema/commissionings';
 import { dailyChecks } from '@/db/schema/daily-checks';
 import { labels } from '@/db/schema/labels';
+import { lotHolds } from '@/db/schema/lot-holds';
 import { lots } from '@/db/schema/lots';
 import { measurements } from '@/db/schema/measurements';
 import { retestOrders } from '@/db/schema/retest-orders';
@@ -17,6 +18,7 @@ import { seedDemo } from '@/db/seed/demo';
 import type { BenchPlace } from '@/lib/bench/types';
 import type { RunPlan } from '@/lib/run/types';
 import { appendEvents } from '@/server/operations/runs/append-events';
+import { releaseLot } from '@/server/operations/lots/hold-lot';
 import { readLotStrip } from '@/server/operations/runs/lot-strip';
 import { openRun } from '@/server/operations/runs/open-run';
 import { recordRun } from '@/server/operations/runs/record-run';
@@ -25,6 +27,7 @@ import type { RunRecord } from '@/server/operations/runs/run-record';
 import { scanBin } from '@/server/operations/runs/scan-bin';
 import { verifyTrail } from '@/server/operations/trail/verify-trail';
 import { temporaryDatabase, type TemporaryDatabase } from '../../database/temporary-postgres';
+import { actorOf } from '../../desk/bases';
 import { playBoard, type Played } from '../../lib/run/play-board';
 
 let open: TemporaryDatabase;
@@ -353,7 +356,6 @@ describe('a hold by rule', () => {
     const plan = await opened();
     const play = played(plan, { seed, defect: 'wrong-zener' });
     await recordRun(open.db, recordOf(plan, play), 'station');
-    await scanBin(open.db, who, benches[0]!, { runId: plan.runId, binCode: 'SWR-12-A' }).catch(() => null);
     return play.result.rejectReason;
   };
 
@@ -372,5 +374,18 @@ describe('a hold by rule', () => {
     const refused = await begin(benches[0]!);
     expect(refused).toMatchObject({ ok: false });
     expect(JSON.stringify(refused)).toContain('hold');
+
+    const [quality] = await open.db.select().from(accounts).where(eq(accounts.name, 'A. Boyle'));
+    const release = { lotId: lot.id, reason: 'Wrong reel of D1 taken off', password: 'gauge jaws demo' };
+    const actor = actorOf(quality!);
+    expect(await releaseLot(actor, { ...release, password: 'not it' })).toMatchObject({ code: 'wrong-password' });
+    expect(await releaseLot(actor, release)).toMatchObject({ ok: true });
+    await reject(34);
+    expect((await held()).heldAt).toBeNull();
+    const [released] = await listHolds(open.db, lot.id);
+    expect(released).toMatchObject({ releasedBy: 'A. Boyle', hold: { releaseReason: release.reason } });
+    await expect(
+      open.db.update(lotHolds).set({ reason: 'x' }).where(eq(lotHolds.id, released!.hold.id)),
+    ).rejects.toMatchObject({ cause: { code: 'SW002' } });
   });
 });
