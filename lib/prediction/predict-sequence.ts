@@ -1,6 +1,3 @@
-import { wiperForTrip } from '../circuit/inverse';
-import { referenceAt } from '../circuit/soft-knee';
-import { turnsAt } from '../circuit/trimmer';
 import type { BoardType } from '../contracts/board-type';
 import { decideVerdict, verdictOf, type StepVisit } from '../decision/decide-verdict';
 import { noFacts, type RunFacts } from '../run/facts';
@@ -12,7 +9,7 @@ import type { Sequence, Step } from '../sequence/step';
 import { playStep, type PlayedStep } from './play-step';
 import { settledBench, settledFacts } from './settled-facts';
 import { StepMemo } from './step-memo';
-import { pointsOf, type BenchNote, type BenchState } from './typical-bench';
+import { pointsOf, turnsFor, type BenchNote, type BenchState } from './typical-bench';
 import type { PredictedStep, Prediction } from './types';
 
 /** The middle of how far off its target a board comes. */
@@ -118,13 +115,6 @@ function trimmedTo(step: Step, { facts, ending }: PlayedStep, boardType: BoardTy
   if (step.kind !== 'trim' || ending || !facts.trimmed) return null;
   const missed = Math.abs(facts.trimmed.trip.volts - step.targetVolts);
   return missed <= step.toleranceVolts ? turnsFor(boardType, step.targetVolts) : null;
-}
-
-/** As near as the travel comes. */
-function turnsFor({ design, trimmer }: BoardType, tripVolts: number): number {
-  const node = referenceAt(design.reference, tripVolts);
-  const wiper = node.kind === 'found' ? wiperForTrip(design, tripVolts, node.x) : 0.5;
-  return turnsAt(trimmer, Math.min(1, Math.max(0, wiper)));
 }
 
 /** Gathers what the steps did, on one clock. */

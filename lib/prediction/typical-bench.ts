@@ -1,8 +1,9 @@
 import type { BoardDesign } from '../circuit/board-design';
 import { wiperConductances } from '../circuit/divider';
+import { wiperForTrip } from '../circuit/inverse';
 import { referenceAt, softKneeThresholds } from '../circuit/soft-knee';
 import type { Thresholds } from '../circuit/thresholds';
-import { wiperAt } from '../circuit/trimmer';
+import { turnsAt, wiperAt } from '../circuit/trimmer';
 import type { BoardType } from '../contracts/board-type';
 import type { Answer, Ask } from '../run/machine';
 import type { OutputState } from '../search/types';
@@ -33,6 +34,13 @@ export type Answered = WithoutStamp<Answer>;
 export function pointsOf({ design, trimmer }: BoardType, screwTurns: number): Thresholds {
   const found = softKneeThresholds(design, wiperAt(trimmer, screwTurns));
   return found.kind === 'found' ? found : { tripVolts: Infinity, releaseVolts: Infinity };
+}
+
+/** Screw of the typical board for a trip point, as near as its travel comes. */
+export function turnsFor({ design, trimmer }: BoardType, tripVolts: number): number {
+  const node = referenceAt(design.reference, tripVolts);
+  const wiper = node.kind === 'found' ? wiperForTrip(design, tripVolts, node.x) : 0.5;
+  return turnsAt(trimmer, Math.min(1, Math.max(0, wiper)));
 }
 
 /** Supplies overshoot by about this share of the bound that their commissioning keeps; *common practice*. */
@@ -77,6 +85,11 @@ export class TypicalBench {
   thresholds(): Thresholds {
     this.points ??= pointsOf(this.boardType, this.state.screwTurns);
     return this.points;
+  }
+
+  /** Clockwise positive. */
+  turnsTo(tripVolts: number): number {
+    return turnsFor(this.boardType, tripVolts) - this.state.screwTurns;
   }
 
   setLid(closed: boolean): void {

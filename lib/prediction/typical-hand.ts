@@ -6,9 +6,6 @@ export const paceOfHand = (travelTurns: number) =>
   travelTurns > 1 ? { brisk: 0.5, slow: 0.1 } : { brisk: 30 / 360, slow: 10 / 360 };
 /** From the beep to the hand standing still. */
 export const reactionMs = 200;
-/** Where a hand that follows the dial slows down and lets go, in seconds of turning at the brisk and at the slow pace. */
-export const easeSeconds = 0.6;
-export const letGoSeconds = 0.15;
 /** From what the screen asks to the hand being there. */
 const firstTurnMs = 1800;
 const nextTurnMs = 900;
@@ -18,7 +15,6 @@ type Prompt = Extract<RunView['screen'], { kind: 'trim' }>['trim'];
 /** A hand that does what the trim's prompts ask, at an even pace and without error. */
 export class TypicalHand {
   private wish: string | null = null;
-  private prompt: Prompt | null = null;
   private turned = false;
   private fromMs = Infinity;
   private untilMs = Infinity;
@@ -46,8 +42,7 @@ export class TypicalHand {
       // A hand still on its way never starts; one that turns stops after a person's reaction.
       this.untilMs = nowMs < this.fromMs ? this.fromMs : Math.min(this.untilMs, nowMs + reactionMs);
       if (prompt) this.start(prompt);
-    } else if (prompt && this.isLive(prompt)) this.ease(prompt);
-    this.prompt = prompt;
+    }
   }
 
   private start(prompt: Prompt): void {
@@ -59,20 +54,16 @@ export class TypicalHand {
     this.fromMs = nowMs + (this.turned ? nextTurnMs : firstTurnMs);
     this.turned = true;
     this.turnsPerSecond = (prompt.direction === 'clockwise' ? 1 : -1) * (prompt.stage === 'beep-2' ? slow : brisk);
-    const stated = prompt.stage === 'turn' && !this.isLive(prompt);
-    const turns = prompt.turns ?? 0;
-    this.untilMs = stated ? this.fromMs + (turns / Math.abs(this.turnsPerSecond)) * 1000 : Infinity;
+    this.untilMs = Infinity;
+    if (prompt.stage !== 'turn') return;
+    // Led by the dial it stops where the target is; told a turn, after that turn.
+    const live = this.isLive(prompt);
+    const turns = live ? this.bench.turnsTo(prompt.targetVolts) : (prompt.turns ?? 0);
+    if (live) this.turnsPerSecond = Math.sign(turns) * brisk;
+    this.untilMs = this.fromMs + (Math.abs(turns) / brisk) * 1000;
   }
 
   private isLive({ stage, liveTripVolts, turns }: Prompt): boolean {
     return stage !== 'beep-1' && stage !== 'beep-2' && liveTripVolts !== null && turns !== null;
-  }
-
-  private ease({ turns }: Prompt): void {
-    const { brisk, slow } = paceOfHand(this.bench.boardType.trimmer.turns);
-    const { nowMs } = this.bench;
-    if (nowMs < this.fromMs || nowMs > this.untilMs) return;
-    if (turns! < slow * letGoSeconds) this.untilMs = nowMs;
-    else if (turns! < brisk * easeSeconds) this.turnsPerSecond = Math.sign(this.turnsPerSecond) * slow;
   }
 }
