@@ -62,6 +62,16 @@ export function Strips({ review, width, label, ref }: StripsProps) {
         fineText={(value) => valueText(quantity, value)}
       />
       <ValueAxis y={y} x={left - 4} ticks={6} text={(value) => scaleText(quantity, value)} />
+      <g fontSize={13} textAnchor="end" fill="var(--sw-ink-2)">
+        {pitch > 52 ? (
+          <text x={left - 10} y={bottom + 40}>
+            mean
+          </text>
+        ) : null}
+        <text x={left - 10} y={bottom + 57}>
+          boards
+        </text>
+      </g>
       {comparison.groups.map((group, i) => (
         <g key={group.label}>
           <path d={strokes[i]} stroke="var(--sw-ink)" strokeWidth={1} opacity={0.45} />
@@ -71,10 +81,10 @@ export function Strips({ review, width, label, ref }: StripsProps) {
               {shortened(group.label, pitch)}
             </text>
             <text x={middle(i)} y={bottom + 40} className="font-num">
-              {pitch > 64 ? valueText(quantity, group.mean) : ''}
+              {pitch > 52 ? valueText(quantity, group.mean) : ''}
             </text>
-            <text x={middle(i)} y={bottom + 57}>
-              {pitch > 64 ? `${group.boards} boards` : group.boards}
+            <text x={middle(i)} y={bottom + 57} className="font-num">
+              {group.boards}
             </text>
           </g>
         </g>

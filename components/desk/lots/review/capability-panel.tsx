@@ -15,6 +15,8 @@ const nothing = {
 /** Cp, Cpk, Pp and Ppk with their intervals, what the normality test says, and whether any of it means something yet. */
 export function CapabilityPanel({ review }: { review: LotReview }) {
   const { capability, stretches, quantity } = review;
+  if (review.points.values.every((value) => value === null))
+    return <p className="text-ink-2">No board is measured yet.</p>;
   if (capability.kind !== 'found') return <p className="text-ink-2">{nothing[capability.kind]}</p>;
   const byPercentile = capability.quoted === 'percentile';
   return (
