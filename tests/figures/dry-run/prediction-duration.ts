@@ -15,7 +15,10 @@ const mostOffPercent = 5;
 /** One sequence of two beeps, one that is followed live. */
 const measured = [sequences[0]!, sequences[1]!];
 
-/** Predicted against measured seconds a board, on the clock on the wall. Only the station's part is held to the target. */
+/**
+ * Predicted against measured seconds a board, at the pace of the clock on the wall; timers that come late do not add up.
+ * Only the station's part is held to the target.
+ */
 export async function predictionDuration(
   progress: (line: string) => void,
   share = 1,
