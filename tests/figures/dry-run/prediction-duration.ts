@@ -34,7 +34,9 @@ export async function predictionDuration(
     const runs: Awaited<ReturnType<typeof measureRun>>[] = [];
     for (let from = 0; from < boards; from += atOnce) {
       const seeds = Array.from({ length: Math.min(atOnce, boards - from) }, (_, i) => 500 + from + i);
-      runs.push(...(await Promise.all(seeds.map((seed) => measureRun(sequence, boardType, station, seed, new ScaledClock(1))))));
+      runs.push(
+        ...(await Promise.all(seeds.map((seed) => measureRun(sequence, boardType, station, seed, new ScaledClock(1))))),
+      );
       progress(`${name}: ${runs.length} of ${boards} boards on the real clock`);
     }
     const stationMs = mean(runs.map((run) => run.stationMs));
