@@ -1,7 +1,7 @@
 'use client';
 
 import Link from 'next/link';
-import { useId, useState } from 'react';
+import { useId, useState, type ReactNode } from 'react';
 import { Button } from '@/components/ui/button';
 import type { BoardType } from '@/lib/contracts/board-type';
 import { usualDryRun } from '@/lib/contracts/dry-run';
@@ -26,11 +26,13 @@ export interface DryRunPaneProps {
   stations: readonly { code: string; name: string }[];
   /** Why no dry run can start now, such as an error in the draft; null: it can. */
   blocked: string | null;
+  /** Laid over the rails, such as the grip on the trim's target. */
+  overRails?: ReactNode;
 }
 
 /** The right column of the sequence editor: rails with what simulated boards gave, the yield sentence, settings. */
 export function DryRunPane(props: DryRunPaneProps) {
-  const { dryRun, boardType, revisionNumber, draftVersion, addressOf, stations, blocked } = props;
+  const { dryRun, boardType, revisionNumber, draftVersion, addressOf, stations, blocked, overRails } = props;
   const { view, isAtWork, problem, asking } = dryRun;
   const [typed, setTyped] = useState(() => typedSettings(view?.settings ?? usualDryRun));
   const [wrong, setWrong] = useState<{ field: keyof typeof typed; sentence: string } | null>(null);
@@ -48,7 +50,15 @@ export function DryRunPane(props: DryRunPaneProps) {
   return (
     <section aria-label={`Dry run of r${revisionNumber}`} className="grid gap-3">
       <div className="mx-auto w-full max-w-[460px]">
-        <RunRails boardType={boardType} result={result} draftName={`r${revisionNumber}`} releasedName={releasedName} />
+        <div className="relative">
+          <RunRails
+            boardType={boardType}
+            result={result}
+            draftName={`r${revisionNumber}`}
+            releasedName={releasedName}
+          />
+          {overRails}
+        </div>
         {result ? <LimitHistograms limits={boardType.limits} result={result} /> : null}
       </div>
       <div className="border-t-2 border-ink pt-2.5">

@@ -20,7 +20,8 @@ const half = (volts: number) => Math.round(volts * 2) / 2;
 const middle = (railsBox.tripX + railsBox.releaseX) / 2;
 const reach = 150;
 
-function railsFor({ limits }: BoardType): RailsView {
+/** What the rails of a board type show before anything is measured. */
+export function railsFor({ limits }: BoardType): RailsView {
   const { tripVolts, releaseVolts } = limits;
   const scaleMinVolts = half(tripVolts.min - marginVolts);
   return {

@@ -1,7 +1,7 @@
 import type { DryRunResult, DryRunView } from '@/lib/contracts/dry-run';
 import { percent } from '../numbers';
 
-const bold = (value: string) => <b className="font-num">{value}</b>;
+const bold = (value: string) => <b className="whitespace-nowrap font-num">{value}</b>;
 const seconds = (value: number) => String(Math.round(value));
 
 /** What the dry run says, in a sentence: yield beside the released revision, and the time of a board. */

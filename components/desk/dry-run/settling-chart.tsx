@@ -10,11 +10,27 @@ interface SettlingChartProps {
   running: boolean;
 }
 
-const [width, height] = [880, 236];
-const [left, right, top, bottom] = [62, 170, 10, 28];
+const height = 236;
+const [left, top, bottom] = [62, 10, 28];
+
+/** Drawn for a desk and once more for a phone, where its words stand below. */
+export function SettlingChart(props: SettlingChartProps) {
+  return (
+    <>
+      <div className="max-sm:hidden">
+        <Settling {...props} width={880} right={170} />
+      </div>
+      <div className="sm:hidden">
+        <Settling {...props} width={400} right={16} />
+        <p className="text-cap">{endWords(props).join(', ')}</p>
+      </div>
+    </>
+  );
+}
 
 /** First-pass yield after so many boards: it settles on the final figure, inside its band 95 times of 100. */
-export function SettlingChart({ result, boards, draftName, releasedName, running }: SettlingChartProps) {
+function Settling(props: SettlingChartProps & { width: number; right: number }) {
+  const { result, boards, running, width, right } = props;
   const { draft, released } = result;
   const lines = [draft, ...(released ? [released] : [])].filter(({ settling }) => settling.length > 0);
   if (lines.length === 0) return <p className="text-ink-2">The first 20 boards are not done yet.</p>;
@@ -70,24 +86,32 @@ export function SettlingChart({ result, boards, draftName, releasedName, running
             </>
           ) : null}
         </g>
-        <g fontSize={15} fill="var(--sw-ink)">
-          {draft.settling.length > 0 ? (
-            <text x={width - right + 8} y={ends[0]! + 5} fontWeight={700}>
-              {draftName} {percent(draft.firstPass.count / draft.firstPass.of)} ± {halfWidth(draft)}
-            </text>
-          ) : null}
-          {released && releasedName && released.settling.length > 0 ? (
-            <text x={width - right + 8} y={ends[1]! + 5}>
-              {releasedName} {percent(released.firstPass.count / released.firstPass.of)} ± {halfWidth(released)}
-            </text>
-          ) : null}
-        </g>
+        {right > 100 ? (
+          <g fontSize={15} fill="var(--sw-ink)">
+            {endWords(props).map((words, i) => (
+              <text key={words} x={width - right + 8} y={ends[i]! + 5} fontWeight={i === 0 ? 700 : 400}>
+                {words}
+              </text>
+            ))}
+          </g>
+        ) : null}
       </svg>
     </figure>
   );
 }
 
-export const halfWidth = ({ firstPass: { low, high } }: DryRunSide) => (((high - low) / 2) * 100).toFixed(1);
+/** r7 94.1 % ± 1.0, then the released revision. */
+function endWords({ result: { draft, released }, draftName, releasedName }: SettlingChartProps): string[] {
+  const words = (name: string, side: DryRunSide) =>
+    `${name} ${percent(side.firstPass.count / side.firstPass.of)} ± ${halfWidth(side)}`;
+  const isDrawn = (side: DryRunSide | null): side is DryRunSide => side !== null && side.settling.length > 0;
+  return [
+    ...(isDrawn(draft) ? [words(draftName, draft)] : []),
+    ...(isDrawn(released) && releasedName ? [words(releasedName, released)] : []),
+  ];
+}
+
+const halfWidth = ({ firstPass: { low, high } }: DryRunSide) => (((high - low) / 2) * 100).toFixed(1);
 
 /** Heights of the words at the lines' ends, kept apart. */
 function endsOf(lines: DryRunSide[], y: (share: number) => number): number[] {

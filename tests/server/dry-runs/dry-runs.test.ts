@@ -99,7 +99,7 @@ test('draft, released revision and each change alone run on the same boards; the
   expect(draft.firstPass.of + draft.noVerdict).toBe(20);
   expect(old!.firstPass.of + old!.noVerdict).toBe(20);
   expect(pair!.difference.value).toBeCloseTo((pair!.onlyDraft - pair!.onlyReleased) / 20, 12);
-  expect(changesAlone.map(({ words }) => words)).toEqual(['most rounds 8 → 5', 'repeats 3 → 2']);
+  expect(changesAlone.map(({ words }) => words)).toEqual(['Most rounds 8 → 5', 'Repeats 3 → 2']);
   expect(draft.boardSeconds).toBeLessThan(old!.boardSeconds);
 }, 200_000);
 
