@@ -44,7 +44,7 @@ beforeAll(async () => {
   other = await made(['test-engineer']);
   quality = await made(['quality-manager']);
   both = await made(['test-engineer', 'quality-manager']);
-  [{ id: typeId }] = (await open.db.insert(boardTypes).values({ code: 'CB1210', name: cb1210.name }).returning()) as [
+  const [type] = await open.db.insert(boardTypes).values({ code: 'CB1210', name: cb1210.name }).returning()) as [
     { id: string },
   ];
   [{ id: firstId }] = (await open.db
@@ -58,7 +58,8 @@ beforeAll(async () => {
       approvedBy: quality.accountId,
       approvedAt: new Date(),
     })
-    .returning()) as [{ id: string }];
+    .returning();
+  firstId = first!.id;
   const [sequence] = await open.db
     .insert(sequenceTable)
     .values({ boardTypeId: typeId, name: 'End of line' })
