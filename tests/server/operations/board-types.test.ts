@@ -44,10 +44,9 @@ beforeAll(async () => {
   other = await made(['test-engineer']);
   quality = await made(['quality-manager']);
   both = await made(['test-engineer', 'quality-manager']);
-  const [type] = await open.db.insert(boardTypes).values({ code: 'CB1210', name: cb1210.name }).returning()) as [
-    { id: string },
-  ];
-  [{ id: firstId }] = (await open.db
+  const [type] = await open.db.insert(boardTypes).values({ code: 'CB1210', name: cb1210.name }).returning();
+  typeId = type!.id;
+  const [first] = await open.db
     .insert(boardTypeRevisions)
     .values({
       boardTypeId: typeId,
