@@ -1,12 +1,17 @@
 import { asc, eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { chartBaselines } from '@/db/schema/chart-baselines';
+import { engineeringOffers } from '@/db/schema/engineering-offers';
+import { runs } from '@/db/schema/runs';
 import { siteSettings } from '@/db/schema/site-settings';
 import { trail } from '@/db/schema/trail';
 import { units } from '@/db/schema/units';
 import type { Actor } from '@/lib/access/actor';
+import type { BoardType } from '@/lib/contracts/board-type';
 import { lotViewSchema } from '@/lib/contracts/lot-view';
 import { operatorNamingKey } from '@/lib/contracts/operator-naming';
+import type { RunPlan } from '@/lib/run/types';
+import type { Sequence } from '@/lib/sequence/step';
 import { chooseBaseline } from '@/server/operations/lots/choose-baseline';
 import { createLot } from '@/server/operations/lots/create-lot';
 import { freezeBaselines } from '@/server/operations/lots/freeze-baselines';
@@ -74,6 +79,34 @@ describe('the review of a lot', () => {
     expect(review.withoutVerdict).toEqual([{ station: station.code, operator: 'A', runs: 1 }]);
     expect(review.limits).toMatchObject({ min: 10.7, max: 10.9 });
     expect(review.baseline).toMatchObject({ kind: 'waiting', values: 3 });
+  });
+
+  it('leaves engineering runs out, whatever they measured', async () => {
+    const lot = await makeLot(1);
+    const offer = {
+      stationId: station.id,
+      revisionId: sequenceRevisionId,
+      boardTypeId: '00000000-0000-4000-8000-000000000001',
+      sequence: { steps: [] } as unknown as Sequence,
+      boardType: {} as BoardType,
+      offeredBy: actor.accountId,
+    };
+    const [{ id: offerId }] = (await open.db.insert(engineeringOffers).values(offer).returning()) as [{ id: string }];
+    await open.db.insert(runs).values({
+      kind: 'engineering',
+      offerId,
+      unitId: lot.boards[0]!.id,
+      lotId: lot.id,
+      stationId: station.id,
+      operatorId: actor.accountId,
+      attempt: 1,
+      plan: {} as RunPlan,
+      endedAt: new Date(),
+      verdict: 'reject',
+      rejectReason: 'never-on',
+      closedBy: 'station',
+    });
+    expect((await readLotReview(lot.code))!).toMatchObject({ points: { serials: [] }, yields: { tested: 0 } });
   });
 
   it('shows turns and seconds too, which have no limits', async () => {

@@ -1,3 +1,6 @@
+'use client';
+
+import { useIsFetching } from '@tanstack/react-query';
 import { EmptyState } from '@/components/ui/empty-state';
 import { FillInChoice } from '@/components/ui/fill-in';
 import { Section } from '@/components/ui/page-head';
@@ -26,6 +29,7 @@ const foundChoices = [
 export function LotReviewSection({ review, ...section }: LotSectionProps & { review: LotReview }) {
   const { lot, view, changeView, may } = section;
   const asCharts = view.as === 'charts';
+  const reading = useIsFetching({ queryKey: ['lot-review', lot.code] }) > 0;
   return (
     <Section
       title={
@@ -34,7 +38,12 @@ export function LotReviewSection({ review, ...section }: LotSectionProps & { rev
           <QuantityTabs value={view.quantity} onChange={(quantity) => changeView({ quantity })} />
         </span>
       }
-      aside={asCharts ? <ChartKey /> : null}
+      aside={
+        <span className="flex flex-wrap items-baseline gap-x-5">
+          {reading ? <Reading /> : null}
+          {asCharts ? <ChartKey /> : null}
+        </span>
+      }
     >
       {review.points.serials.length === 0 ? (
         <EmptyState title="No board has a verdict yet.">The first one appears here as it finishes.</EmptyState>
@@ -86,5 +95,14 @@ export function LotReviewSection({ review, ...section }: LotSectionProps & { rev
         </span>
       </div>
     </Section>
+  );
+}
+
+/** After 400 ms only, so that quick answers show nothing. */
+function Reading() {
+  return (
+    <span role="status" className="text-cap text-ink-2 [animation:sw-appear_1ms_400ms_backwards]">
+      Reading the figures…
+    </span>
   );
 }

@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { appendFile, mkdtemp, readdir, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { eq } from 'drizzle-orm';
+import { eq, like } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, expect, test } from 'vitest';
 import { openDatabase, type OpenDatabase } from '@/db/client';
 import { listBenches, type BenchRow } from '@/db/queries/station-benches';
@@ -48,7 +48,7 @@ beforeEach(async () => {
 
 async function opened(): Promise<RunPlan> {
   const [operator] = await open.db.select().from(accounts).where(eq(accounts.operatorNumber, '14'));
-  const [lot] = await open.db.select().from(lots).where(eq(lots.size, 240));
+  const [lot] = await open.db.select().from(lots).where(like(lots.code, '%-02'));
   const boards = await open.db.select().from(units).where(eq(units.lotId, lot!.id)).orderBy(units.position);
   const who = { accountId: operator!.id, sessionId: null, lotId: lot!.id, offerId: null, serial: null };
   const ask = { kind: 'board', serial: boards[used++]!.serial, lotId: lot!.id, offerId: null, byHand: false } as const;

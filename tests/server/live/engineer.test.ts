@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { eq, like } from 'drizzle-orm';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { commissionings } from '@/db/schema/commissionings';
 import { dailyChecks } from '@/db/schema/daily-checks';
@@ -99,7 +99,7 @@ test('an engineer commissions the station at the bench; an operator may not, and
   expect(measured.validUntil.getTime()).toBeGreaterThan(Date.now() + 100 * 24 * 3_600_000);
   await screen.command({ kind: 'continue' });
 
-  const [lot] = await db.select().from(lots).where(eq(lots.size, 240));
+  const [lot] = await db.select().from(lots).where(like(lots.code, '%-02'));
   await screen.scan(`SWL-${lot!.code}`);
   await screen.act({ kind: 'lid', closed: false });
   await screen.act({ kind: 'remove-board' });

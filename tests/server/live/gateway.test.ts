@@ -1,4 +1,4 @@
-import { desc, eq } from 'drizzle-orm';
+import { desc, eq, like } from 'drizzle-orm';
 import { encode } from 'next-auth/jwt';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { insertSession } from '@/db/queries/sessions';
@@ -17,7 +17,7 @@ let lotCode: string;
 beforeAll(async () => {
   live = await liveInTest(20);
   running = await live.start();
-  const [lot] = await live.open.db.select().from(lots).where(eq(lots.size, 240));
+  const [lot] = await live.open.db.select().from(lots).where(like(lots.code, '%-02'));
   lotCode = lot!.code;
 });
 afterAll(() => live.close());

@@ -1,4 +1,4 @@
-import { and, eq } from 'drizzle-orm';
+import { and, eq, like } from 'drizzle-orm';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { accounts } from '@/db/schema/accounts';
 import { engineerCalls } from '@/db/schema/engineer-calls';
@@ -29,7 +29,7 @@ beforeAll(async () => {
   const { db } = live.open;
   const [person] = await db.select().from(accounts).where(eq(accounts.name, 'T. Marsden'));
   engineer = actorOf(person!);
-  const open = and(eq(lots.size, 240), eq(lots.state, 'open'));
+  const open = and(like(lots.code, '%-02'), eq(lots.state, 'open'));
   [lot] = (await db.select().from(lots).where(open)) as [typeof lot];
   draftId = await insertDraft();
   await live.start();

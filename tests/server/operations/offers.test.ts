@@ -1,4 +1,4 @@
-import { and, eq } from 'drizzle-orm';
+import { and, eq, like } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { listFoundPoints, findSecondsEach } from '@/db/queries/runs-bench';
 import { listBenches, type BenchRow } from '@/db/queries/station-benches';
@@ -57,7 +57,7 @@ beforeAll(async () => {
   [lot] = (await open.db
     .select()
     .from(lots)
-    .where(and(eq(lots.size, 240), eq(lots.state, 'open')))) as [typeof lot];
+    .where(and(like(lots.code, '%-02'), eq(lots.state, 'open')))) as [typeof lot];
   boards = await open.db.select().from(units).where(eq(units.lotId, lot.id)).orderBy(units.position);
   engineer = actorOf(await personOf('T. Marsden'));
   operator = placeOf((await personOf('M. Adeyemi')).id);

@@ -1,4 +1,4 @@
-import { and, eq, sql } from 'drizzle-orm';
+import { and, eq, like, sql } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { listHolds } from '@/db/queries/lot-holds';
 import { listBenches, type BenchRow } from '@/db/queries/station-benches';
@@ -39,7 +39,7 @@ beforeAll(async () => {
   await seedDemo(open.db);
   benches = await listBenches(open.db);
   const [operator] = await open.db.select().from(accounts).where(eq(accounts.operatorNumber, '14'));
-  [lot] = (await open.db.select().from(lots).where(eq(lots.size, 240))) as [typeof lot];
+  [lot] = (await open.db.select().from(lots).where(like(lots.code, '%-02'))) as [typeof lot];
   who = { accountId: operator!.id, sessionId: null, lotId: lot.id, offerId: null, serial: null };
 });
 afterAll(() => open.close());
