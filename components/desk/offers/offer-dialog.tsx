@@ -16,7 +16,7 @@ import { FormProblem } from '../form-problem';
 import { stationStateWords } from '@/components/desk/stations/station-words';
 import { useActionForm } from '../use-action-form';
 
-type OfferDraft = z.infer<typeof offerDraftSchema>;
+export type OfferDraft = z.infer<typeof offerDraftSchema>;
 
 interface OfferDialogProps {
   open: boolean;

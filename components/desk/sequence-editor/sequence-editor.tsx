@@ -1,0 +1,248 @@
+'use client';
+
+import { useRouter } from 'next/navigation';
+import { useCallback, useMemo, useState } from 'react';
+import { PredictedSupply } from '@/components/charts/predicted-supply';
+import { useToast } from '@/components/ui/toast';
+import type { DryRunView } from '@/lib/contracts/dry-run';
+import type { OfferedDraft } from '@/lib/contracts/engineering-offer';
+import type { Outcome } from '@/lib/contracts/outcome';
+import type { DraftPage, SavedDraft, SaveDraft } from '@/lib/contracts/sequence-draft';
+import { changeSentences } from '@/lib/sequence/change-sentences';
+import type { Draft } from '@/lib/sequence/draft';
+import { freshStep, insertStep, mostSteps } from '@/lib/sequence/draft-edits';
+import { errorsOf, submitBlocked, unreasoned } from '@/lib/sequence/draft-problems';
+import { firstOf } from '@/lib/sequence/enabled-steps';
+import { stepWord } from '@/lib/sequence/value-words';
+import { DryRunPane } from '../dry-run/dry-run-pane';
+import { lostAtSteps } from '../dry-run/lost-at';
+import { railsFor } from '../dry-run/run-rails';
+import { useDryRun, type DryRunActions } from '../dry-run/use-dry-run';
+import { OfferDialog, type OfferDraft } from '../offers/offer-dialog';
+import { OfferResults } from '../offers/offer-results';
+import { AddStepDialog } from './add-step-dialog';
+import { goTo } from './blank-ids';
+import { ChangesList } from './changes-list';
+import { EditorContext, type EditorView } from './editor-context';
+import { EditorHead } from './editor-head';
+import { editorKeys } from './editor-keys';
+import { EditorNotes } from './editor-notes';
+import { KeysDialog } from './keys-dialog';
+import { LeaveGuard } from './leave-guard';
+import { ListFoot } from './list-foot';
+import { lockOf } from './lock-of';
+import { newId } from './new-id';
+import { RuleSentence } from './rule-sentence';
+import { useStepCommands } from './step-commands';
+import { StepList } from './step-list';
+import { StationChoice } from './station-choice';
+import { SubmitDialog, type SubmitRevision } from './submit-dialog';
+import { TargetGrip } from './target-grip';
+import { useDraft } from './use-draft';
+import { useDraftFacts } from './use-draft-facts';
+
+interface SequenceEditorProps {
+  page: DraftPage;
+  /** The newest dry run of this revision. */
+  dryRun: DryRunView | null;
+  offers: OfferedDraft[];
+  actions: {
+    save: (form: SaveDraft) => Promise<Outcome<SavedDraft>>;
+    submit: (form: SubmitRevision) => Promise<Outcome>;
+    dryRun: DryRunActions;
+    /** Null: this person may not offer drafts to stations. */
+    offer: ((input: OfferDraft) => Promise<Outcome<{ offerId: string }>>) | null;
+    endOffer: ((input: { offerId: string }) => Promise<Outcome>) | null;
+  };
+}
+
+type Open = null | 'keys' | 'submit' | 'offer' | { addAfter: string | null };
+
+/** The draft of a sequence: steps as sentences, checked, predicted and saved as they are typed. */
+export function SequenceEditor({ page, dryRun: newest, offers, actions }: SequenceEditorProps) {
+  const { head, boardType, released, stations } = page;
+  const router = useRouter();
+  const toast = useToast();
+  const [selectedId, select] = useState<string | null>(null);
+  const [stationCode, setStation] = useState<string | null>(null);
+  const [open, setOpen] = useState<Open>(null);
+  const [said, say] = useState('');
+  const [errorAt, setErrorAt] = useState(-1);
+  const { editor, dispatch, saving, presence, isKept } = useDraft({ page, selectedId, save: actions.save });
+  const dryRun = useDryRun({ revisionId: head.id, initial: newest, actions: actions.dryRun });
+  const draft = editor.history.present;
+  const { steps } = draft.sequence;
+  const facts = useDraftFacts(page, draft.sequence, stationCode);
+  const locked = lockOf(page, presence?.status ?? head.status, dryRun.isAtWork);
+
+  const edit = useCallback(
+    (change: (now: Draft) => Draft, group?: string) => dispatch({ kind: 'edit', change, group }),
+    [dispatch],
+  );
+  const endGroup = useCallback(() => dispatch({ kind: 'end-group' }), [dispatch]);
+  const addAfter = (stepId: string | null) =>
+    steps.length < mostSteps ? setOpen({ addAfter: stepId }) : toast(`A sequence holds at most ${mostSteps} steps.`);
+  const commands = useStepCommands({ draft, edit, select, addAfter, say });
+
+  const errors = useMemo(() => errorsOf(draft, facts.findings), [draft, facts.findings]);
+  const blocked = submitBlocked({
+    errors: errors.length,
+    unreasoned: unreasoned(draft, facts.findings).length,
+    conflicts: draft.conflicts.length,
+    unsaved: saving.unsaved || saving.state.kind !== 'idle',
+  });
+  function nextError(): void {
+    const next = (errorAt + 1) % Math.max(1, errors.length);
+    setErrorAt(next);
+    const place = errors[next];
+    if (place) goTo(place);
+  }
+  const move = (kind: 'undo' | 'redo') => dispatch({ kind });
+
+  const view: EditorView = {
+    draft,
+    boardType,
+    locked,
+    edit,
+    endGroup,
+    findings: facts.findings,
+    comparison: facts.comparison,
+    releasedName: released ? `r${released.head.number}` : null,
+    selectedId,
+    select,
+  };
+  const trim = firstOf(draft.sequence, 'trim');
+  const lostAt = dryRun.isAtWork
+    ? lostAtSteps(
+        dryRun.view?.result ?? null,
+        steps.map(({ id }) => id),
+      )
+    : null;
+  const addPlace = typeof open === 'object' && open !== null ? open.addAfter : null;
+
+  return (
+    <EditorContext value={view}>
+      <div
+        onKeyDown={editorKeys({
+          selectedId,
+          locked: locked !== null,
+          commands,
+          undo: () => move('undo'),
+          redo: () => move('redo'),
+          nextError,
+          showKeys: () => setOpen('keys'),
+        })}
+      >
+        <EditorHead
+          page={page}
+          saveState={saving.state}
+          unsaved={saving.unsaved}
+          savedAtIso={editor.saved.savedAtIso}
+          unread={Object.keys(draft.unread).length}
+          errors={errors.length}
+          onNextError={nextError}
+          onTry={actions.offer && head.status === 'draft' ? () => setOpen('offer') : undefined}
+          onSubmit={page.mayEdit ? () => setOpen('submit') : undefined}
+          submitBlocked={dryRun.isAtWork ? 'A dry run is at work.' : blocked}
+        />
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-x-11 gap-y-8 xl:grid-cols-[minmax(0,1fr)_424px]">
+          <div className="min-w-0">
+            <EditorNotes others={presence?.others ?? []} steps={steps} lostAt={lostAt} />
+            <div className="border-t-2 border-ink">
+              <RuleSentence />
+              <StepList commands={commands} seconds={facts.seconds} lostAt={lostAt} />
+            </div>
+            <ListFoot
+              history={editor.history}
+              onAdd={() => addAfter(selectedId ?? steps.at(-2)?.id ?? null)}
+              onUndo={() => move('undo')}
+              onRedo={() => move('redo')}
+              onKeys={() => setOpen('keys')}
+            />
+            <div className="mt-4 border-t-2 border-ink pt-2">
+              <PredictedSupply
+                prediction={facts.prediction}
+                limits={boardType.limits}
+                steps={steps.map((step, i) => ({ id: step.id, number: i + 1, name: stepWord(step) }))}
+                selectedId={selectedId}
+                onSelect={select}
+                note={<StationChoice stations={stations} chosen={stationCode} onChoose={setStation} />}
+              />
+            </div>
+          </div>
+          <div className="grid min-w-0 content-start gap-5">
+            <div className="border-t-2 border-ink pt-2">
+              <DryRunPane
+                dryRun={dryRun}
+                boardType={boardType}
+                revisionNumber={head.number}
+                draftVersion={editor.saved.version}
+                addressOf={(run) => `/sequences/${page.sequenceId}/dry-runs/${run}`}
+                stations={stations}
+                blocked={dryRunBlocked(page.mayEdit, errors.length, saving.unsaved)}
+                overRails={trim ? <TargetGrip trim={trim} scale={railsFor(boardType)} /> : null}
+              />
+            </div>
+            <ChangesList />
+          </div>
+        </div>
+        <OfferResults revisionId={head.id} initial={offers} endOffer={actions.endOffer} />
+      </div>
+      <p role="status" className="sr-only">
+        {said}
+      </p>
+      <AddStepDialog
+        open={typeof open === 'object' && open !== null}
+        onClose={() => setOpen(null)}
+        where={whereAfter(steps, addPlace)}
+        onAdd={(kind) => {
+          const id = newId();
+          edit((now) => insertStep(now, freshStep(kind, id, boardType), addPlace));
+          setOpen(null);
+          select(id);
+          setTimeout(() => goTo({ stepId: id, field: null }));
+        }}
+      />
+      <KeysDialog open={open === 'keys'} onClose={() => setOpen(null)} />
+      <SubmitDialog
+        open={open === 'submit'}
+        onClose={() => setOpen(null)}
+        number={head.number}
+        revisionId={head.id}
+        version={editor.saved.version}
+        changes={facts.comparison ? changeSentences(facts.comparison) : []}
+        submit={actions.submit}
+        onSubmitted={() => {
+          toast(`r${head.number} waits for its release.`);
+          router.push(`/sequences/${page.sequenceId}`);
+        }}
+      />
+      {actions.offer ? (
+        <OfferDialog
+          open={open === 'offer'}
+          onClose={() => setOpen(null)}
+          revisionId={head.id}
+          revisionNumber={head.number}
+          offer={actions.offer}
+          onOffered={(station) => {
+            setOpen(null);
+            toast(`Station ${station} has r${head.number} on offer.`);
+            router.refresh();
+          }}
+        />
+      ) : null}
+      <LeaveGuard unsaved={isKept && page.mayEdit} />
+    </EditorContext>
+  );
+}
+
+function dryRunBlocked(mayEdit: boolean, errors: number, unsaved: boolean): string | null {
+  if (!mayEdit) return 'Only a draft that you may edit is run.';
+  if (errors > 0) return 'Errors first.';
+  return unsaved ? 'Not saved yet.' : null;
+}
+
+function whereAfter(steps: Draft['sequence']['steps'], stepId: string | null): string {
+  const at = steps.findIndex(({ id }) => id === stepId);
+  return at < 0 ? 'at the beginning' : `after step ${at + 1}, ${stepWord(steps[at]!)}`;
+}

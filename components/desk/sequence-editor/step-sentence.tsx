@@ -1,0 +1,39 @@
+'use client';
+
+import { Fragment } from 'react';
+import type { Step } from '@/lib/sequence/step';
+import { shownNumber } from '@/lib/sequence/value-words';
+import { kindOf } from '@/lib/steps/step-kinds';
+import type { ValueChange } from '@/lib/sequence/compare-sequences';
+import type { SentenceField } from '@/lib/steps/step-kind';
+import { Blank } from './blank';
+import { changeOf, useEditor } from './editor-context';
+
+/** What a step does, as a sentence with blanks; beside a changed one, what it is in the revision in use. */
+export function StepSentence({ step }: { step: Step }) {
+  const editor = useEditor();
+  const change = changeOf(editor, step.id);
+  return (
+    <p className="leading-[38px] max-sm:leading-[52px]">
+      {kindOf(step)
+        .sentence(step)
+        .map((part, i) =>
+          typeof part === 'string' ? (
+            part
+          ) : (
+            <Fragment key={i}>
+              <Blank step={step} blank={part} />
+              <Was change={change?.values.find(({ field }) => field === part.field)} blank={part} />
+            </Fragment>
+          ),
+        )}
+    </p>
+  );
+}
+
+function Was({ change, blank }: { change: ValueChange | undefined; blank: SentenceField }) {
+  if (!change) return null;
+  const { before, from } = change;
+  const number = typeof before === 'number' && !blank.options;
+  return <span className="text-cap text-ink-2"> (was {number ? shownNumber(before, blank) : from})</span>;
+}
