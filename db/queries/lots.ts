@@ -152,6 +152,7 @@ export async function listLots(db: Reader, filter: LotFilter): Promise<LotRow[]>
 }
 
 export interface LotDetail extends LotRow {
+  sequenceRevisionId: string;
   boardTypeRevisionId: string;
   createdByName: string;
   heldByName: string | null;
@@ -161,7 +162,12 @@ export async function findLotByCode(db: Reader, code: string): Promise<LotDetail
   const [row] = await lotRows(db).where(eq(lots.code, code));
   if (!row) return null;
   const [names] = await db
-    .select({ boardTypeRevisionId: lots.boardTypeRevisionId, createdByName: accounts.name, heldBy: lots.heldBy })
+    .select({
+      boardTypeRevisionId: lots.boardTypeRevisionId,
+      sequenceRevisionId: lots.sequenceRevisionId,
+      createdByName: accounts.name,
+      heldBy: lots.heldBy,
+    })
     .from(lots)
     .innerJoin(accounts, eq(accounts.id, lots.createdBy))
     .where(eq(lots.id, row.id));
@@ -171,6 +177,7 @@ export async function findLotByCode(db: Reader, code: string): Promise<LotDetail
   return {
     ...row,
     boardTypeRevisionId: names!.boardTypeRevisionId,
+    sequenceRevisionId: names!.sequenceRevisionId,
     createdByName: names!.createdByName,
     heldByName: holder?.name ?? null,
   };

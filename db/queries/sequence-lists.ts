@@ -2,6 +2,7 @@ import { and, asc, count, desc, eq, inArray, ne, sql } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import { boardTypeRevisions } from '@/db/schema/board-type-revisions';
 import { boardTypes } from '@/db/schema/board-types';
+import { dryRuns } from '@/db/schema/dry-runs';
 import { files } from '@/db/schema/files';
 import { lots } from '@/db/schema/lots';
 import { sequenceRevisions } from '@/db/schema/sequence-revisions';
@@ -97,4 +98,13 @@ export async function listMissingPictures(db: Reader, ids: readonly string[]): P
     .from(files)
     .where(inArray(files.id, [...ids]));
   return ids.filter((id) => !kept.some((file) => file.id === id));
+}
+
+/** Dry runs that were kept with these revisions, newest first. */
+export function listKeptDryRuns(db: Reader, revisionIds: readonly string[]) {
+  return db
+    .select({ id: dryRuns.id, revisionId: dryRuns.revisionId })
+    .from(dryRuns)
+    .where(and(inArray(dryRuns.revisionId, [...revisionIds]), eq(dryRuns.kept, true)))
+    .orderBy(desc(dryRuns.askedAt));
 }

@@ -1,7 +1,7 @@
 import type { BoardStanding } from '../decision/board-standing';
 import type { RejectReason, Verdict } from '../run/types';
 import type { LotSummary } from '../statistics/lot-summary';
-import type { LabelState, LotState } from './stored-states';
+import type { LabelState, LotState, SequenceRevisionState } from './stored-states';
 
 /** A value against the limits it was judged by. Volts. */
 export interface PointAgainstLimits {
@@ -36,6 +36,26 @@ export interface ComponentBatchRow {
   stationCode: string | null;
 }
 
+/** The lot went on with another revision of its sequence. */
+export interface LotMoveRow {
+  id: string;
+  fromNumber: number;
+  toNumber: number;
+  reason: string;
+  byName: string;
+  atIso: string;
+}
+
+/** The revision that a lot pins. */
+export interface LotRevision {
+  sequenceId: string;
+  status: SequenceRevisionState;
+  withdrawnReason: string | null;
+  /** The newer one in use, which the lot can move to. Null: it has the newest. */
+  newer: { id: string; number: number } | null;
+  moves: LotMoveRow[];
+}
+
 /** Everything that the page of a lot shows; fetched again every few seconds while the lot is in production. */
 export interface LotPage {
   id: string;
@@ -44,6 +64,7 @@ export interface LotPage {
   boardTypeCode: string;
   boardTypeName: string;
   sequenceNumber: number;
+  revision: LotRevision;
   createdAtIso: string;
   createdByName: string;
   closedAtIso: string | null;

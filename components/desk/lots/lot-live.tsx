@@ -12,6 +12,7 @@ import { LotComponentsSection } from './lot-components-section';
 import { LotFiguresSection } from './lot-figures-section';
 import { LotHeadSection } from './lot-head-section';
 import { LotRejectsSection } from './lot-rejects-section';
+import { LotRevisionSection } from './lot-revision-section';
 import { LotReviewSection } from './lot-review-section';
 import type { LotSectionProps } from './lot-section';
 import { useLotView } from './use-lot-view';
@@ -69,6 +70,7 @@ export function LotLive({ initial, initialReview, may, actions }: LotLiveProps) 
       {lot.state !== 'closed' ? <StaleNote updatedAt={page.dataUpdatedAt} failing={page.isError} /> : null}
       <LotRejectsSection {...section} />
       {review.data ? <LotFiguresSection {...section} review={review.data} /> : null}
+      <LotRevisionSection {...section} />
       <LotComponentsSection {...section} />
       <LotBoardsSection {...section} />
     </>

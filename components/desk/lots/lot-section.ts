@@ -12,6 +12,7 @@ export interface LotSectionProps {
   actions: LotActionsOf & {
     recordBatch: (input: unknown) => Promise<Outcome>;
     chooseBaseline: (input: unknown) => Promise<Outcome>;
+    move: (input: unknown) => Promise<Outcome>;
   };
   /** Fetches the page again, after something was changed. */
   onChanged: () => void;

@@ -10,6 +10,7 @@ import {
   changeLotAction,
   chooseBaselineAction,
   holdLotAction,
+  moveLotAction,
   recordComponentBatchAction,
   releaseLotAction,
 } from '../actions';
@@ -40,6 +41,7 @@ export default async function LotPage({ params, searchParams }: Props) {
         release: releaseLotAction,
         recordBatch: recordComponentBatchAction,
         chooseBaseline: chooseBaselineAction,
+        move: moveLotAction,
       }}
     />
   );
