@@ -17,13 +17,12 @@ import type { RunPlan } from '@/lib/run/types';
 import { cb1210 } from './board-types';
 import { daysFrom, yearAndWeek } from './days';
 import { driftingBoards, drawDriftingBoards, type DemoAttempt, type DemoBoard } from './drifting-boards';
+import { insertOwnBaselines } from './finished-lot-baselines';
+import { boardsPerDay, endOfDay, hourMs, minuteMs, testedAt } from './finished-lot-times';
 import type { SeededPeople } from './people';
 import type { SeededProducts } from './products';
 
 const firstNumber = 601;
-const boardsPerDay = driftingBoards / 2;
-const minuteMs = 60_000;
-const hourMs = 60 * minuteMs;
 
 /** A finished lot of yesterday and the day before, whose trip points rise from board 201 on; rejects wait for quality. */
 export async function seedFinishedLot(
@@ -77,6 +76,7 @@ export async function seedFinishedLot(
     ]);
   const bench = await benchesOf(tx, sequenceRevisionId);
   await insertRuns(tx, lot!.id, boards, made, bench, firstDay, people.qualityId);
+  await insertOwnBaselines(tx, lot!.id, products.boardTypeIds[cb1210.code]!, boards, firstDay);
 }
 
 type Bench = Awaited<ReturnType<typeof benchesOf>>;
@@ -142,16 +142,6 @@ async function insertRuns(
       .set({ scrappedAt: endOfDay(firstDay, driftingBoards) })
       .where(inArray(units.id, scrapped));
 }
-
-/** Two shifts of a hundred and twenty boards, from seven o'clock; alone, station 2 takes no longer a board. */
-function testedAt(firstDay: Date, place: number): Date {
-  const day = place <= boardsPerDay ? 0 : 1;
-  const since = (place - 1 - day * boardsPerDay) * 3.9 * minuteMs;
-  return new Date(daysFrom(firstDay, day).getTime() + 7 * hourMs + since);
-}
-
-const endOfDay = (firstDay: Date, place: number) =>
-  new Date(daysFrom(firstDay, place <= boardsPerDay ? 0 : 1).getTime() + 15 * hourMs);
 
 /** What quality decided so far: rework of everything that was tested again, and of three more; one board is scrap. */
 function decisionOn({ place, attempts }: DemoBoard) {

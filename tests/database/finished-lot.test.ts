@@ -59,6 +59,11 @@ describe('the finished lot of the demo', () => {
   it('drifts: rule 2 is quiet up to board 200 and broken from board 201 on', async () => {
     const review = (await readLotReview(code, lotViewSchema.parse({ rules: '2' })))!;
     expect(review.stretches[0]).toMatchObject({ rule: 2, from: 201, side: 'above' });
+    expect(review.baseline).toMatchObject({
+      kind: 'frozen',
+      boards: 30,
+      frozenIso: expect.stringMatching(/^2026-12-01T/),
+    });
     expect(review.quoted.trip).toMatchObject({ stable: false });
     expect(review.comparison.result).toMatchObject({ kind: 'found' });
   });

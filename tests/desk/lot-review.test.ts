@@ -91,10 +91,10 @@ describe('the review of a lot', () => {
       boardType: {} as BoardType,
       offeredBy: actor.accountId,
     };
-    const [{ id: offerId }] = (await open.db.insert(engineeringOffers).values(offer).returning()) as [{ id: string }];
+    const [made] = await open.db.insert(engineeringOffers).values(offer).returning();
     await open.db.insert(runs).values({
       kind: 'engineering',
-      offerId,
+      offerId: made!.id,
       unitId: lot.boards[0]!.id,
       lotId: lot.id,
       stationId: station.id,
