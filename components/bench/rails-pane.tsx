@@ -1,7 +1,7 @@
 import type { BenchReading } from '@/lib/contracts/bench-view';
 import { useBench } from './bench-context';
 import { Rails } from './rails/rails';
-import { nothingInside, type RailsInside } from './rails/inside-blocks';
+import { nothingInside, type RailsInside } from '@/lib/rails/inside-blocks';
 import { trimRails } from './trim/trim-inside';
 
 interface RailsPaneProps {

@@ -1,7 +1,7 @@
 import { useTranslations } from 'next-intl';
 import { useNumbers } from '../use-numbers';
-import type { PlacedFlag } from './inside-blocks';
-import { railsBox, tubeEdge } from './rails-geometry';
+import type { PlacedFlag } from '@/lib/rails/inside-blocks';
+import { railsBox, tubeEdge } from '@/lib/rails/rails-geometry';
 
 const tip = 20;
 

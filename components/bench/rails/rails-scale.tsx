@@ -1,6 +1,6 @@
 import type { RailsView } from '@/lib/contracts/bench-view';
 import { useNumbers } from '../use-numbers';
-import { heightOf, railsBox, scaleTicks, tubeEdge } from './rails-geometry';
+import { heightOf, railsBox, scaleTicks, tubeEdge } from '@/lib/rails/rails-geometry';
 
 const lengths = { minor: 15, middle: 23, major: 36 } as const;
 

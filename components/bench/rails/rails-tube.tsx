@@ -1,5 +1,5 @@
 import type { RailsView } from '@/lib/contracts/bench-view';
-import { heightOf, railsBox, tubePaths } from './rails-geometry';
+import { heightOf, railsBox, tubePaths } from '@/lib/rails/rails-geometry';
 
 const { tripX, releaseX, topY, bottomY, radius, tube } = railsBox;
 

@@ -2,7 +2,7 @@ import { useRef } from 'react';
 import type { BenchReading, RailsView } from '@/lib/contracts/bench-view';
 import type { ReadingStore } from '../live/reading-store';
 import { useDisplayRate } from '../live/use-display-rate';
-import { dotPosition } from './rails-geometry';
+import { dotPosition } from '@/lib/rails/rails-geometry';
 
 interface SupplyDotProps {
   rails: RailsView;

@@ -1,7 +1,7 @@
 import { useTranslations } from 'next-intl';
 import type { TrimView } from '@/lib/trim/types';
 import { useBench } from '../bench-context';
-import { railsBox, heightOf } from '../rails/rails-geometry';
+import { railsBox, heightOf } from '@/lib/rails/rails-geometry';
 import { RailsPane } from '../rails-pane';
 import { MagnifiedStrip } from '../strip/magnified-strip';
 import { heldReading, isAfterBeep1 } from './trim-inside';

@@ -1,6 +1,6 @@
 import type { BenchReading, RailFlag, RailsView } from '@/lib/contracts/bench-view';
 import type { TrimView } from '@/lib/trim/types';
-import type { RailsInside } from '../rails/inside-blocks';
+import type { RailsInside } from '@/lib/rails/inside-blocks';
 
 /** The held supply as a reading that stands still. */
 export function heldReading(trim: TrimView): BenchReading | null {

@@ -1,5 +1,5 @@
 import { RailsHeads } from '@/components/bench/rails/rails-heads';
-import { heightOf, railsBox, tubeEdge } from '@/components/bench/rails/rails-geometry';
+import { heightOf, railsBox, tubeEdge } from '@/lib/rails/rails-geometry';
 import { RailsScale } from '@/components/bench/rails/rails-scale';
 import { RailsTube } from '@/components/bench/rails/rails-tube';
 import type { RailsView } from '@/lib/contracts/bench-view';

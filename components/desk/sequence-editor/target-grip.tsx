@@ -1,7 +1,7 @@
 'use client';
 
 import { useRef, type KeyboardEvent, type PointerEvent } from 'react';
-import { railsBox, tubeEdge } from '@/components/bench/rails/rails-geometry';
+import { railsBox, tubeEdge } from '@/lib/rails/rails-geometry';
 import { setField } from '@/lib/sequence/draft-edits';
 import type { StepOf } from '@/lib/sequence/step';
 import { useEditor } from './editor-context';

@@ -1,8 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { dotPosition, heightOf, railsBox, scaleTicks } from '@/components/bench/rails/rails-geometry';
-import { placeInside } from '@/components/bench/rails/inside-blocks';
-import { stackBlocks, type Block } from '@/components/bench/rails/stack-blocks';
+import { dotPosition, heightOf, railsBox, scaleTicks } from '@/lib/rails/rails-geometry';
+import { placeInside } from '@/lib/rails/inside-blocks';
+import { stackBlocks, type Block } from '@/lib/rails/stack-blocks';
 import type { RailFlag, RailsView } from '@/lib/contracts/bench-view';
 
 const rails: RailsView = {

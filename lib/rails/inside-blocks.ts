@@ -1,4 +1,4 @@
-import type { RailFlag, RailsView } from '@/lib/contracts/bench-view';
+import type { RailFlag, RailsView } from '../contracts/bench-view';
 import { heightOf, railsBox } from './rails-geometry';
 import { stackBlocks, type Block } from './stack-blocks';
 

@@ -1,4 +1,4 @@
-import type { BenchReading, RailsView } from '@/lib/contracts/bench-view';
+import type { BenchReading, RailsView } from '../contracts/bench-view';
 
 /** Lengths of the rails in pixels of the bench drawing; the svg scales as a whole. */
 export const railsBox = {
