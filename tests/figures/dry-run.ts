@@ -64,7 +64,7 @@ const passed = (outcomes: DryBoardOutcome[]) => ({
 });
 
 async function speed(share: number): Promise<{ rows: FigureRow[]; targets: FigureTarget[] }> {
-  const boards = Math.ceil(boardsTimed * share);
+  const boards = Math.max(200, Math.ceil(boardsTimed * share));
   const rows: FigureRow[] = [];
   let slowest = 0;
   let leastRatio = Infinity;
