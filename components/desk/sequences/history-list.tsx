@@ -1,9 +1,9 @@
 'use client';
 
-import Link from 'next/link';
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { Button, ButtonLink } from '@/components/ui/button';
+import { buttonClass } from '@/components/ui/button-style';
 import { useToast } from '@/components/ui/toast';
 import type { Outcome } from '@/lib/contracts/outcome';
 import type { HistoryEntry as Entry, SequenceHistory } from '@/lib/contracts/sequence-pages';
@@ -63,11 +63,16 @@ export function HistoryList({ history, may, signer, actions }: HistoryListProps)
           </ButtonLink>
         ) : null}
         {comparedWith !== null ? (
-          <Link className="sw-link" href={`/sequences/${sequenceId}/compare?a=r${comparedWith}&b=r${number}`}>
+          <ButtonLink kind="link" href={`/sequences/${sequenceId}/compare?a=r${comparedWith}&b=r${number}`}>
             Compare with r{comparedWith}
-          </Link>
+          </ButtonLink>
         ) : null}
-        <a className="sw-link" href={`/api/sequences/${sequenceId}/export?revision=r${number}`} download>
+        <a
+          className={buttonClass('link')}
+          href={`/api/sequences/${sequenceId}/export?revision=r${number}`}
+          aria-label={`Export r${number}`}
+          download
+        >
           Export
         </a>
         {may.edit && entry !== standing ? (

@@ -16,8 +16,8 @@ export function HistoryPeople({ head }: { head: RevisionHead }) {
         </Line>
       ) : null}
       {head.sentBackBy && head.sentBackAtIso ? (
-        <Line who={head.sentBackBy} iso={head.sentBackAtIso}>
-          sent it back: “{head.sentBackReason}”
+        <Line who={head.sentBackBy} iso={head.sentBackAtIso} quote={head.sentBackReason}>
+          sent it back
         </Line>
       ) : null}
       {head.submittedBy && head.submittedAtIso && !head.sentBackAtIso ? (
@@ -26,8 +26,8 @@ export function HistoryPeople({ head }: { head: RevisionHead }) {
         </Line>
       ) : null}
       {head.releasedBy && head.releasedAtIso ? (
-        <Line who={head.releasedBy} iso={head.releasedAtIso}>
-          released it{head.releaseMeaning ? `: “${head.releaseMeaning}”` : ''}
+        <Line who={head.releasedBy} iso={head.releasedAtIso} quote={head.releaseMeaning}>
+          released it
         </Line>
       ) : null}
       {head.supersededAtIso ? (
@@ -36,18 +36,27 @@ export function HistoryPeople({ head }: { head: RevisionHead }) {
         </li>
       ) : null}
       {head.withdrawnBy && head.withdrawnAtIso ? (
-        <Line who={head.withdrawnBy} iso={head.withdrawnAtIso}>
-          {head.releasedAtIso ? 'withdrew' : 'discarded'} it: “{head.withdrawnReason}”
+        <Line who={head.withdrawnBy} iso={head.withdrawnAtIso} quote={head.withdrawnReason}>
+          {head.releasedAtIso ? 'withdrew' : 'discarded'} it
         </Line>
       ) : null}
     </ul>
   );
 }
 
-function Line({ who, iso, children }: { who: string; iso: string; children: ReactNode }) {
+interface LineProps {
+  who: string;
+  iso: string;
+  /** What they gave as reason or meaning. */
+  quote?: string | null;
+  children: ReactNode;
+}
+
+function Line({ who, iso, quote, children }: LineProps) {
   return (
     <li>
       <b>{who}</b> {children}, <Time iso={iso} />
+      {quote ? `: “${quote}”` : ''}
     </li>
   );
 }

@@ -1,7 +1,7 @@
 import { scaleLinear } from 'd3-scale';
 import type { ValueChange } from '@/lib/sequence/compare-sequences';
 
-const width = 180;
+const width = 132;
 const base = 22;
 const colours = { trip: 'var(--sw-trip)', release: 'var(--sw-release)', plain: 'var(--sw-ink)' } as const;
 
@@ -16,14 +16,14 @@ export function ValueMove({ change }: { change: ValueChange }) {
   const [a, b] = [x(numbers.from), x(numbers.to)];
   const way = Math.sign(b - a);
   return (
-    <span className="flex flex-wrap items-center gap-x-3">
+    <span className="flex items-center gap-x-3">
       <svg
         viewBox={`0 0 ${width} 30`}
         width={width}
         height={30}
         role="img"
         aria-label={`${label}: ${from} is now ${to}`}
-        className="max-w-full"
+        className="flex-none"
       >
         <path d={`M0 ${base}H${width}`} stroke="var(--sw-rule)" />
         <path

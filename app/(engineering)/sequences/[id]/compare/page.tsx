@@ -44,7 +44,7 @@ export default async function ComparePage({ params, searchParams }: Props) {
       />
       <ComparisonToolbar page={page} view={view} comparison={comparison} />
       <ComparisonTable page={page} comparison={comparison} rows={rows} />
-      <div className="mt-6 border-t-2 border-ink pt-2">
+      <div className="mt-6">
         <PredictedSupply
           title="Supply over one board"
           prediction={predicted(b)}
