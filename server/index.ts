@@ -7,6 +7,7 @@ import pino from 'pino';
 import { closeSharedDatabases } from '@/db/client';
 import { migrate } from '@/db/migrate';
 import { environment, readEnvironment, type Environment } from './environment';
+import { storeDemoPictures } from './demo-pictures';
 import { startDemoPrinter } from './demo-printer';
 import { startDryRuns } from './dry-runs/start-dry-runs';
 import { startFakeStorage } from './files/storage/fake-storage';
@@ -46,6 +47,7 @@ async function main(): Promise<void> {
 
   await migrate(settings.databaseOwnerUrl, settings.databaseUrl);
   const greeting = await welcome(settings);
+  if (storage) await storeDemoPictures().catch((error: unknown) => log.warn(error));
 
   let handle: Handler = (_, response) =>
     void response.writeHead(503, { 'retry-after': '2' }).end('Sillwright is starting.');

@@ -6,6 +6,7 @@ import { boardTypeSchema } from '@/lib/contracts/board-type';
 import { sequenceSchema, type Sequence } from '@/lib/sequence/step';
 import { boardTypes } from './board-types';
 import { daysFrom } from './days';
+import { demoPictures } from './demo-pictures';
 import type { SeededPeople } from './people';
 import { historyOf, seedRevisions } from './sequence-history';
 import { sequences } from './sequences';
@@ -35,7 +36,7 @@ export async function seedProducts(tx: Transaction, people: SeededPeople, now: D
       .values({
         boardTypeId: type!.id,
         number: 1,
-        specification: boardTypeSchema.parse(boardType),
+        specification: boardTypeSchema.parse({ ...boardType, ...demoPictures[code] }),
         status: 'approved',
         madeBy: people.engineerId,
         madeAt: daysFrom(now, -90),

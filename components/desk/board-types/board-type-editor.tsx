@@ -87,6 +87,7 @@ export function BoardTypeEditor({ page, signer, actions }: BoardTypeEditorProps)
         <div className="min-w-0">
           <CircuitSection />
           <LimitsSection />
+          <RevisionHistory history={page.history} openLots={page.openLots} />
           <TrimmerSection />
           <SearchSection />
           <SerialSection />
@@ -103,7 +104,6 @@ export function BoardTypeEditor({ page, signer, actions }: BoardTypeEditorProps)
           />
         </div>
       </div>
-      <RevisionHistory history={page.history} openLots={page.openLots} />
       <LeaveDialog unsaved={draft.dirty && !readOnly} />
     </FormProvider>
   );

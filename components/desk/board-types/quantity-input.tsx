@@ -17,12 +17,12 @@ export function QuantityInput({ field, label, onFocus }: QuantityInputProps) {
   const wrong = sentenceOf(field.path);
   const state =
     wrong?.severity === 'error'
-      ? 'border-2 border-reject bg-sheet px-1.5'
+      ? 'border-2 border-reject bg-sheet px-1'
       : wrong
-        ? 'border border-b-2 border-ink bg-attn-wash px-[7px]'
+        ? 'border border-b-2 border-ink bg-attn-wash px-[5px]'
         : readOnly
-          ? 'border-2 border-transparent px-1.5'
-          : 'border-2 border-transparent border-b-rule bg-sheet px-1.5 hover:border-b-accent';
+          ? 'border-2 border-transparent -mx-1.5 px-1'
+          : 'border-2 border-transparent border-b-rule bg-sheet px-1 hover:border-b-accent';
   return (
     <input
       id={fieldId(field.path)}
@@ -36,7 +36,7 @@ export function QuantityInput({ field, label, onFocus }: QuantityInputProps) {
       onChange={(event) => setText(field.path, event.target.value)}
       onBlur={() => settle(field.path)}
       onFocus={onFocus}
-      style={{ width: `calc(${Math.max(4, text.length)}ch + 18px)` }}
+      style={{ width: `calc(${Math.max(4, text.length)}ch + 13px)` }}
       className={`min-h-[29px] max-w-full font-num text-[14px] font-bold text-ink max-sm:min-h-[46px] ${state}`}
     />
   );

@@ -16,7 +16,7 @@ const volts = ({ min, max }: { min: number; max: number }) => limitsText('trip-v
 export function RevisionHistory({ history, openLots }: Pick<BoardTypePage, 'history' | 'openLots'>) {
   return (
     <Section
-      title="Limits, V"
+      title="History of the limits, V"
       aside={<span className="text-cap text-ink-2">Two people stand behind every change.</span>}
     >
       <Table aria-label="History of the limits">

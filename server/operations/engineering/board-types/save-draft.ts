@@ -34,7 +34,7 @@ export async function saveBoardTypeDraft(
       );
     if (row.specification.code !== specification.code)
       return refusal('code-fixed', 'The code of a board type stays. Begin a new board type for another code.');
-    if (!(await filesFit(tx, specification)))
+    if (!(await filesFit(tx, specification, row.specification)))
       return refusal('file-unknown', 'The picture is not stored. Choose it again.');
     await updateBoardTypeRevision(tx, row.id, {
       specification,
@@ -53,12 +53,18 @@ export async function saveBoardTypeDraft(
   });
 }
 
-async function filesFit(tx: Transaction, { trimmerPhoto, fixtureDrawing }: BoardType): Promise<boolean> {
+/** Files that are newly referred to are stored, as what they are used for. */
+async function filesFit(
+  tx: Transaction,
+  { trimmerPhoto, fixtureDrawing }: BoardType,
+  before: BoardType,
+): Promise<boolean> {
   const named = [
-    [trimmerPhoto, 'trimmer-photo'],
-    [fixtureDrawing, 'fixture-drawing'],
+    [trimmerPhoto, before.trimmerPhoto, 'trimmer-photo'],
+    [fixtureDrawing, before.fixtureDrawing, 'fixture-drawing'],
   ] as const;
-  for (const [reference, kind] of named)
-    if (reference && (await findFile(tx, reference.fileId))?.kind !== kind) return false;
+  for (const [reference, earlier, kind] of named)
+    if (reference && reference.fileId !== earlier?.fileId && (await findFile(tx, reference.fileId))?.kind !== kind)
+      return false;
   return true;
 }
