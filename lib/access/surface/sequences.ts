@@ -9,6 +9,7 @@ export const sequencesSurface: Surface = {
     '/sequences/new': 'edit-sequences',
     '/sequences/[id]': 'signed-in',
     '/sequences/[id]/compare': 'signed-in',
+    '/sequences/[id]/draft': 'signed-in',
   },
   handlers: {
     'POST /api/drafts/[revision]/presence': 'edit-sequences',
@@ -25,6 +26,7 @@ export const sequencesSurface: Surface = {
     [`${sequences}#releaseRevisionAction`]: 'release-sequences',
     [`${sequences}#withdrawRevisionAction`]: 'release-sequences',
     [`${sequences}#importSequenceAction`]: 'edit-sequences',
+    'app/(engineering)/sequences/[id]/draft/actions.ts#saveDraftAction': 'edit-sequences',
     'app/(quality)/lots/actions.ts#moveLotAction': 'manage-lots',
   },
   events: {},
