@@ -1,8 +1,9 @@
-import { and, desc, eq, inArray, isNull } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, isNull } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import { dispositions } from '@/db/schema/dispositions';
 import { retestOrders } from '@/db/schema/retest-orders';
 import { runs } from '@/db/schema/runs';
+import { signatures } from '@/db/schema/signatures';
 import { stations } from '@/db/schema/stations';
 import { units } from '@/db/schema/units';
 
@@ -10,6 +11,41 @@ import { units } from '@/db/schema/units';
 export async function findUnitForUpdate(tx: Transaction, unitId: string): Promise<typeof units.$inferSelect | null> {
   const [row] = await tx.select().from(units).where(eq(units.id, unitId)).for('update');
   return row ?? null;
+}
+
+/** The units, locked in one order, so that two people who chose overlapping boards wait for each other. */
+export function listUnitsForUpdate(
+  tx: Transaction,
+  unitIds: readonly string[],
+): Promise<(typeof units.$inferSelect)[]> {
+  return tx
+    .select()
+    .from(units)
+    .where(inArray(units.id, [...unitIds]))
+    .orderBy(asc(units.id))
+    .for('update');
+}
+
+/** A decision with its first signature, null before signatures were bound to what they sign. Locked. */
+export async function findDispositionForUpdate(tx: Transaction, id: string) {
+  const [row] = await tx
+    .select({ disposition: dispositions, serial: units.serial })
+    .from(dispositions)
+    .innerJoin(units, eq(units.id, dispositions.unitId))
+    .where(eq(dispositions.id, id))
+    .for('update');
+  if (!row) return null;
+  const { signatureId } = row.disposition;
+  const [first] = signatureId ? await tx.select().from(signatures).where(eq(signatures.id, signatureId)) : [];
+  return { ...row, first: first ?? null };
+}
+
+export async function insertSecondSignature(
+  tx: Transaction,
+  dispositionId: string,
+  second: { secondSignedBy: string; secondSignedAt: Date; secondSignatureId: string },
+): Promise<void> {
+  await tx.update(dispositions).set(second).where(eq(dispositions.id, dispositionId));
 }
 
 export async function insertDisposition(

@@ -8,6 +8,7 @@ import { lots } from '@/db/schema/lots';
 import { measurements } from '@/db/schema/measurements';
 import { retestOrders } from '@/db/schema/retest-orders';
 import { runs } from '@/db/schema/runs';
+import { signatures } from '@/db/schema/signatures';
 import { stations } from '@/db/schema/stations';
 import { traces } from '@/db/schema/traces';
 import { units } from '@/db/schema/units';
@@ -68,20 +69,26 @@ export function listTraces(db: Reader, runIds: string[]) {
   return db.select().from(traces).where(inArray(traces.runId, runIds)).orderBy(asc(traces.n));
 }
 
+/** What was decided about the unit, newest first, with its signatures in the order they were given. */
 export async function listDispositionsOfUnit(db: Reader, unitId: string) {
   const rows = await db.query.dispositions.findMany({
     where: eq(dispositions.unitId, unitId),
     orderBy: desc(dispositions.signedAt),
     with: { signer: { columns: { name: true } } },
   });
-  const seconds = rows.flatMap((row) => (row.secondSignedBy ? [row.secondSignedBy] : []));
-  const names = seconds.length
-    ? await db.select({ id: accounts.id, name: accounts.name }).from(accounts).where(inArray(accounts.id, seconds))
-    : [];
+  const ids = rows.map((row) => row.id);
+  const signed =
+    ids.length === 0
+      ? []
+      : await db
+          .select()
+          .from(signatures)
+          .where(and(eq(signatures.subject, 'disposition'), inArray(signatures.subjectId, ids)))
+          .orderBy(asc(signatures.signedAt));
   return rows.map(({ signer, ...row }) => ({
     ...row,
     signedByName: signer.name,
-    secondSignedByName: names.find(({ id }) => id === row.secondSignedBy)?.name ?? null,
+    signatures: signed.filter(({ subjectId }) => subjectId === row.id),
   }));
 }
 

@@ -1,6 +1,7 @@
 import type { Access } from './access';
 import { benchSurface } from './surface/bench';
 import { boardTypesSurface } from './surface/board-types';
+import { decisionsSurface } from './surface/decisions';
 import { dryRunsSurface } from './surface/dry-runs';
 import { engineeringSurface } from './surface/engineering';
 import { offersSurface } from './surface/offers';
@@ -29,6 +30,7 @@ const areas: Surface[] = [
   dryRunsSurface,
   offersSurface,
   qualitySurface,
+  decisionsSurface,
   trailSurface,
   sequencesSurface,
 ];

@@ -1,4 +1,5 @@
 import type { BoardStanding } from '../decision/board-standing';
+import type { ConcessionSide } from '../decision/concession-sides';
 import type { Adjustment, LikelyCause, Measurement, NoVerdictReason, RejectReason, Verdict } from '../run/types';
 import type { LabelLayout } from './board-type';
 import type { DispositionKind, LabelState, RunCloser, RunKind } from './stored-states';
@@ -70,9 +71,22 @@ export interface UnitDisposition {
   reason: string;
   signedByName: string;
   signedIso: string;
-  /** Of a concession. */
-  secondSignedByName: string | null;
-  secondSignedIso: string | null;
+  /** As given, oldest first; a concession has two. Empty: signed before signatures were bound to what they sign. */
+  signatures: UnitSignature[];
+}
+
+export interface UnitSignature {
+  accountId: string;
+  name: string;
+  signedIso: string;
+  meaning: string;
+  digest: string;
+  /** Whether it still fits what it is kept with. */
+  holds: boolean;
+  /** Of a concession: for whom its signer stands. */
+  sides: ConcessionSide[];
+  /** Boards that were decided together, this one among them. */
+  serials: string[];
 }
 
 export interface UnitRetestOrder {
@@ -93,6 +107,8 @@ export interface UnitPage {
   boardTypeCode: string;
   boardTypeName: string;
   standing: BoardStanding;
+  /** What can be decided about it now. */
+  decidable: DispositionKind[];
   runs: UnitRun[];
   labels: UnitLabel[];
   dispositions: UnitDisposition[];

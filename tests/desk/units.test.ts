@@ -14,7 +14,7 @@ import { orderRetest } from '@/server/operations/units/order-retest';
 import { printLabelAgain } from '@/server/operations/units/print-label-again';
 import { readUnitPage } from '@/server/operations/units/read-unit-page';
 import { searchEverywhere } from '@/server/operations/units/search';
-import { signDisposition } from '@/server/operations/units/sign-disposition';
+import { signDispositions } from '@/server/operations/units/sign-dispositions';
 import { insertAccount, insertStation } from '../database/records';
 import { temporaryDatabase, type TemporaryDatabase } from '../database/temporary-postgres';
 import { actorOf, insertReleasedSequence } from './bases';
@@ -70,10 +70,11 @@ const pass = { verdict: 'pass' } as const;
 const reject = { verdict: 'reject', reason: 'release-too-high' } as const;
 const failing = { verdict: 'no-verdict', reason: 'operator-stop', failing: true } as const;
 
-const rework = (unitId: string, over: object = {}) => ({
-  unitId,
+const rework = ({ unit, runIds }: Awaited<ReturnType<typeof board>>, over: object = {}) => ({
+  boards: [{ unitId: unit.id, runId: runIds.at(-1)! }],
   kind: 'rework' as const,
   action: 'R14 changed',
+  reasonCodeId: null,
   reason: 'Wrong reel',
   password,
   ...over,
@@ -117,9 +118,10 @@ describe('the page of a board', () => {
 
 describe('a disposition', () => {
   it('of rework lets a rejected board be tested again, and stands in the trail', async () => {
-    const { unit, runIds } = await board(reject);
+    const made = await board(reject);
+    const { unit, runIds } = made;
     expect(await standingOf(unit.serial)).toEqual({ kind: 'needs-disposition' });
-    expect(await signDisposition(actor, rework(unit.id))).toEqual({ ok: true, value: null });
+    expect(await signDispositions(actor, rework(made))).toEqual({ ok: true, value: { boards: 1 } });
     const page = (await readUnitPage(unit.serial))!;
     expect(page.standing).toEqual({ kind: 'may-be-tested', retestOrderId: null });
     expect(page.dispositions).toMatchObject([
@@ -134,36 +136,40 @@ describe('a disposition', () => {
   });
 
   it('of scrap ends the board', async () => {
-    const { unit } = await board(reject);
-    await signDisposition(actor, rework(unit.id, { kind: 'scrap', action: '' }));
+    const made = await board(reject);
+    const { unit } = made;
+    await signDispositions(actor, rework(made, { kind: 'scrap', action: '' }));
     expect(await standingOf(unit.serial)).toEqual({ kind: 'scrapped' });
-    expect(await signDisposition(actor, rework(unit.id))).toMatchObject({ ok: false, code: 'nothing-to-decide' });
+    expect(await signDispositions(actor, rework(made))).toMatchObject({ ok: false, code: 'nothing-to-decide' });
   });
 
   it('is not signed with a wrong password, beside the field, and stores nothing', async () => {
-    const { unit } = await board(reject);
-    const refused = await signDisposition(actor, rework(unit.id, { password: 'wrong' }));
+    const made = await board(reject);
+    const { unit } = made;
+    const refused = await signDispositions(actor, rework(made, { password: 'wrong' }));
     expect(refused).toMatchObject({ ok: false, code: 'wrong-password', field: 'password' });
     expect((await readUnitPage(unit.serial))!.dispositions).toEqual([]);
   });
 
   it('is refused for a board that passed', async () => {
-    const { unit } = await board(pass);
-    expect(await signDisposition(actor, rework(unit.id))).toMatchObject({ ok: false, code: 'nothing-to-decide' });
+    const made = await board(pass);
+    const { unit } = made;
+    expect(await signDispositions(actor, rework(made))).toMatchObject({ ok: false, code: 'nothing-to-decide' });
   });
 
   it('of rework is refused when no attempt is left, scrap is not', async () => {
-    const { unit } = await board(reject, reject, reject);
-    await signDisposition(actor, rework(unit.id));
-    expect(await standingOf(unit.serial)).toEqual({ kind: 'attempts-used', most: 3 });
-    expect(await signDisposition(actor, rework(unit.id))).toMatchObject({ ok: false, code: 'attempts-used' });
-    expect(await signDisposition(actor, rework(unit.id, { kind: 'scrap' }))).toMatchObject({ ok: true });
+    const made = await board(reject, reject, reject);
+    const { unit } = made;
+    expect((await readUnitPage(unit.serial))!.decidable).toEqual(['scrap', 'concession', 'return']);
+    expect(await signDispositions(actor, rework(made))).toMatchObject({ ok: false, code: 'attempts-used' });
+    expect(await signDispositions(actor, rework(made, { kind: 'scrap' }))).toMatchObject({ ok: true });
   });
 
   it('frees a board that was stopped while failing', async () => {
-    const { unit } = await board(failing);
+    const made = await board(failing);
+    const { unit } = made;
     expect(await standingOf(unit.serial)).toMatchObject({ kind: 'waits-for-quality' });
-    await signDisposition(actor, rework(unit.id));
+    await signDispositions(actor, rework(made));
     expect(await standingOf(unit.serial)).toMatchObject({ kind: 'may-be-tested' });
   });
 });

@@ -1,20 +1,35 @@
 'use server';
 
 import { revalidatePath } from 'next/cache';
-import { dispositionSchema, printAgainSchema, retestOrderSchema } from '@/lib/contracts/disposition';
+import {
+  dispositionSchema,
+  printAgainSchema,
+  retestOrderSchema,
+  secondSignatureSchema,
+} from '@/lib/contracts/disposition';
 import type { Outcome } from '@/lib/contracts/outcome';
 import { parseForm } from '@/lib/contracts/parse-form';
 import { authorise } from '@/server/auth/authorise';
+import { completeConcession } from '@/server/operations/units/complete-concession';
 import { orderRetest } from '@/server/operations/units/order-retest';
 import { printLabelAgain } from '@/server/operations/units/print-label-again';
-import { signDisposition } from '@/server/operations/units/sign-disposition';
+import { signDispositions } from '@/server/operations/units/sign-dispositions';
 
-export async function signDispositionAction(input: unknown): Promise<Outcome> {
-  const actor = await authorise('sign-dispositions');
+export async function signDispositionsAction(input: unknown): Promise<Outcome<{ boards: number }>> {
+  const actor = await authorise('sign-concessions');
   const form = parseForm(dispositionSchema, input);
   if (!form.ok) return form;
-  const outcome = await signDisposition(actor, form.value);
-  if (outcome.ok) revalidatePath('/units', 'layout');
+  const outcome = await signDispositions(actor, form.value);
+  if (outcome.ok) revalidateDecisions();
+  return outcome;
+}
+
+export async function completeConcessionAction(input: unknown): Promise<Outcome> {
+  const actor = await authorise('sign-concessions');
+  const form = parseForm(secondSignatureSchema, input);
+  if (!form.ok) return form;
+  const outcome = await completeConcession(actor, form.value);
+  if (outcome.ok) revalidateDecisions();
   return outcome;
 }
 
@@ -34,4 +49,10 @@ export async function printLabelAgainAction(input: unknown): Promise<Outcome> {
   const outcome = await printLabelAgain(actor, form.value.unitId);
   if (outcome.ok) revalidatePath('/units', 'layout');
   return outcome;
+}
+
+function revalidateDecisions(): void {
+  revalidatePath('/units', 'layout');
+  revalidatePath('/rejects');
+  revalidatePath('/lots', 'layout');
 }

@@ -54,12 +54,16 @@ export function historyOf(unit: UnitPage): HistoryEntry[] {
         text: label.state === 'failed' ? `Label not printed. ${label.problem ?? ''}` : `Label waits${at}`,
       });
   }
-  for (const d of unit.dispositions)
+  for (const d of unit.dispositions) {
+    const what = dispositionWords[d.kind].toLowerCase();
     entries.push({
       key: d.id,
       iso: d.signedIso,
-      text: `${d.signedByName}: ${dispositionWords[d.kind].toLowerCase()}${d.action ? `, ${d.action}` : ''}. ${d.reason}`,
+      text: `${d.signedByName}: ${what}${d.action ? `, ${d.action}` : ''}. ${d.reason}`,
     });
+    const second = d.signatures[1];
+    if (second) entries.push({ key: `${d.id} 2`, iso: second.signedIso, text: `${second.name} agreed: ${what}` });
+  }
   for (const order of unit.retestOrders)
     entries.push({
       key: order.id,

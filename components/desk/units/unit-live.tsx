@@ -9,10 +9,14 @@ import { SerialStrip } from '@/components/ui/serial-strip';
 import { useToast } from '@/components/ui/toast';
 import { VerdictMark, type VerdictShape } from '@/components/ui/verdict-mark';
 import type { Outcome } from '@/lib/contracts/outcome';
+import type { ReasonChoice } from '@/lib/contracts/reason-code';
+import type { DispositionKind } from '@/lib/contracts/stored-states';
 import type { UnitPage } from '@/lib/contracts/unit-page';
+import { DispositionDialog, type SignDispositions } from '../decisions/disposition-dialog';
+import { UnitDecisions, type DecisionViewer } from '../decisions/unit-decisions';
 import { fetchJson } from '../fetch-json';
 import { standingWords } from '../words';
-import { DispositionDialog, RetestDialog } from './decision-forms';
+import { RetestDialog } from './retest-dialog';
 import { RunBlock } from './run-block';
 import { UnitHistory } from './unit-history';
 import { UnitLabel } from './unit-label';
@@ -20,9 +24,11 @@ import { UnitRails } from './unit-rails';
 
 interface UnitLiveProps {
   initial: UnitPage;
-  signer: string;
-  may: { print: boolean; decide: boolean; order: boolean };
-  actions: Record<'print' | 'decide' | 'order', (input: unknown) => Promise<Outcome>>;
+  viewer: DecisionViewer;
+  /** `decide`: what this person may sign. */
+  may: { print: boolean; decide: readonly DispositionKind[]; order: boolean };
+  reasons: readonly ReasonChoice[];
+  actions: Record<'print' | 'order' | 'complete', (input: unknown) => Promise<Outcome>> & { decide: SignDispositions };
 }
 
 const refreshMs = 2_500;
@@ -32,7 +38,7 @@ const moves = (unit: UnitPage) =>
   unit.labels[0]?.state === 'failed';
 
 /** Everything on record of one board; fetched again while it is in test or its label is on the way. */
-export function UnitLive({ initial, signer, may, actions }: UnitLiveProps) {
+export function UnitLive({ initial, viewer, may, reasons, actions }: UnitLiveProps) {
   const toast = useToast();
   const query = useQuery({
     queryKey: ['unit', initial.serial],
@@ -44,12 +50,11 @@ export function UnitLive({ initial, signer, may, actions }: UnitLiveProps) {
   const [asking, setAsking] = useState<'decide' | 'order' | null>(null);
   const [printing, setPrinting] = useState(false);
   const { kind } = unit.standing;
-  const decidable = kind === 'needs-disposition' || kind === 'waits-for-quality' || kind === 'attempts-used';
+  const newest = unit.runs.find((run) => run.kind === 'production');
+  const kinds = unit.decidable.filter((each) => may.decide.includes(each));
   const orderable = kind === 'passed' || kind === 'waits-for-quality';
   const dialog = {
-    unitId: unit.id,
-    serial: unit.serial,
-    signer,
+    signer: viewer.name,
     onClose: () => setAsking(null),
     onDone: (said: string) => {
       setAsking(null);
@@ -86,7 +91,7 @@ export function UnitLive({ initial, signer, may, actions }: UnitLiveProps) {
         </div>
         <div className="flex flex-wrap gap-3">
           {may.order && orderable ? <Button onClick={() => setAsking('order')}>Test it again</Button> : null}
-          {may.decide && decidable ? (
+          {newest && kinds.length > 0 ? (
             <Button kind="filled" onClick={() => setAsking('decide')}>
               Decide
             </Button>
@@ -121,15 +126,24 @@ export function UnitLive({ initial, signer, may, actions }: UnitLiveProps) {
             </button>
           ) : null}
           <div className="sw-screen-only">
+            <UnitDecisions unit={unit} viewer={viewer} complete={actions.complete} onDone={dialog.onDone} />
             <h2 className="mt-4 border-t-2 border-ink pt-2.5 font-bold">History</h2>
             <UnitHistory unit={unit} />
           </div>
         </aside>
       </div>
-      {asking === 'decide' ? (
-        <DispositionDialog {...dialog} attemptsUsed={kind === 'attempts-used'} sign={actions.decide} />
+      {asking === 'decide' && newest ? (
+        <DispositionDialog
+          {...dialog}
+          boards={[{ unitId: unit.id, runId: newest.id, serial: unit.serial }]}
+          kinds={kinds}
+          reasons={reasons}
+          sign={actions.decide}
+        />
       ) : null}
-      {asking === 'order' ? <RetestDialog {...dialog} order={actions.order} /> : null}
+      {asking === 'order' ? (
+        <RetestDialog {...dialog} unitId={unit.id} serial={unit.serial} order={actions.order} />
+      ) : null}
     </>
   );
 }

@@ -27,7 +27,6 @@ export const qualitySurface: Surface = {
     'app/(quality)/lots/actions.ts#releaseLotAction': 'hold-lots',
     'app/(quality)/lots/actions.ts#recordComponentBatchAction': 'manage-lots',
     'app/(quality)/lots/actions.ts#chooseBaselineAction': 'manage-lots',
-    'app/(quality)/units/actions.ts#signDispositionAction': 'sign-dispositions',
     'app/(quality)/units/actions.ts#orderRetestAction': 'order-retests',
     'app/(quality)/units/actions.ts#printLabelAgainAction': 'print-labels',
   },

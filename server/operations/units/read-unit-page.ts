@@ -8,9 +8,12 @@ import {
   listRunsOfUnit,
   listTraces,
 } from '@/db/queries/units';
-import type { UnitPage } from '@/lib/contracts/unit-page';
+import type { Signature } from '@/db/queries/signatures';
+import type { UnitPage, UnitSignature } from '@/lib/contracts/unit-page';
 import { boardStanding } from '@/lib/decision/board-standing';
+import { decidableKinds } from '@/lib/decision/disposition-problem';
 import { database } from '@/server/postgres';
+import { signatureHolds } from '../signatures/record-signature';
 import { unitRunOf } from './unit-run';
 
 /** Everything on record of one board, or null when there is none of that serial number. */
@@ -37,6 +40,7 @@ export async function readUnitPage(serial: string): Promise<UnitPage | null> {
     boardTypeCode: unit.boardTypeCode,
     boardTypeName: unit.boardTypeName,
     standing: boardStanding(record!),
+    decidable: decidableKinds(record!),
     runs: made.map((row) => unitRunOf(row, measurements, traces)),
     labels: labels.map(({ createdAt, printedAt, ...label }) => ({
       ...label,
@@ -51,10 +55,16 @@ export async function readUnitPage(serial: string): Promise<UnitPage | null> {
       reason: row.reason,
       signedByName: row.signedByName,
       signedIso: row.signedAt.toISOString(),
-      secondSignedByName: row.secondSignedByName,
-      secondSignedIso: row.secondSignedAt?.toISOString() ?? null,
+      signatures: row.signatures.map(unitSignature),
     })),
     retestOrders: retestOrders.map(({ signedAt, ...order }) => ({ ...order, signedIso: signedAt.toISOString() })),
     label: passed ? await labelledPoints(db, passed.run.id) : null,
   };
+}
+
+function unitSignature(signature: Signature): UnitSignature {
+  const { accountId, name, signedAt, meaning, digest, content } = signature;
+  const { sides = [], serials = [] } = content as Partial<Pick<UnitSignature, 'sides' | 'serials'>>;
+  const signedIso = signedAt.toISOString();
+  return { accountId, name, signedIso, meaning, digest, holds: signatureHolds(signature), sides, serials };
 }

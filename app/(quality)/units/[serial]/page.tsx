@@ -2,9 +2,11 @@ import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { UnitLive } from '@/components/desk/units/unit-live';
 import { actorMay } from '@/lib/access/actor';
+import { kindsSignedBy } from '@/lib/access/disposition-kinds';
 import { authorise } from '@/server/auth/authorise';
 import { readUnitPage } from '@/server/operations/units/read-unit-page';
-import { orderRetestAction, printLabelAgainAction, signDispositionAction } from '../actions';
+import { listReasonChoices } from '@/server/operations/reason-codes/list-reason-choices';
+import { completeConcessionAction, orderRetestAction, printLabelAgainAction, signDispositionsAction } from '../actions';
 
 interface Props {
   params: Promise<{ serial: string }>;
@@ -16,18 +18,25 @@ export async function generateMetadata({ params }: Props): Promise<Metadata> {
 
 export default async function UnitPage({ params }: Props) {
   const actor = await authorise('signed-in');
-  const unit = await readUnitPage(decodeURIComponent((await params).serial));
+  const serial = decodeURIComponent((await params).serial);
+  const [unit, reasons] = await Promise.all([readUnitPage(serial), listReasonChoices()]);
   if (!unit) notFound();
   return (
     <UnitLive
       initial={unit}
-      signer={actor.name}
+      viewer={{ accountId: actor.accountId, name: actor.name, roles: actor.roles }}
+      reasons={reasons}
       may={{
         print: actorMay(actor, 'print-labels'),
-        decide: actorMay(actor, 'sign-dispositions'),
+        decide: kindsSignedBy(actor.roles),
         order: actorMay(actor, 'order-retests'),
       }}
-      actions={{ print: printLabelAgainAction, decide: signDispositionAction, order: orderRetestAction }}
+      actions={{
+        print: printLabelAgainAction,
+        decide: signDispositionsAction,
+        complete: completeConcessionAction,
+        order: orderRetestAction,
+      }}
     />
   );
 }
