@@ -54,7 +54,7 @@ export function ComparisonTable({ page: { a, b }, comparison, rows }: Comparison
               ruleWords(a.sequence.decisionRule)
             )}
           </Td>
-          <Td label={`r${b.head.number}`}>
+          <Td label={`r${b.head.number}`} className={comparison.rule ? '' : 'max-sm:hidden!'}>
             {comparison.rule ? (
               <ins className="border-b-2 border-ink bg-sheet px-1 font-bold no-underline">{comparison.rule.to}</ins>
             ) : null}
@@ -75,24 +75,40 @@ function StepRow({ row, a, b }: { row: StepComparison; a: Side; b: Side }) {
   return (
     <tr className={row.changed ? '' : 'text-ink-2'}>
       <Td className={`border-l-[5px] pl-3 whitespace-nowrap ${bar}`}>
-        <span className="mr-3 inline-block w-6 text-right font-num">{place}</span>
-        {row.renamed ? (
-          <>
-            <del className="font-normal text-ink-2">{stepWord(row.before!)}</del> {stepWord(step)}
-          </>
-        ) : (
-          stepWord(step)
-        )}
+        <span>
+          <span className="mr-3 inline-block w-6 text-right font-num">{place}</span>
+          {row.renamed ? (
+            <>
+              <del className="font-normal text-ink-2">{stepWord(row.before!)}</del> {stepWord(step)}
+            </>
+          ) : (
+            stepWord(step)
+          )}
+        </span>
       </Td>
       <Td label={`r${a.head.number}`}>
-        <ComparedSentence row={row} side="before" steps={a.sequence.steps} />
+        <span>
+          <ComparedSentence row={row} side="before" steps={a.sequence.steps} />
+        </span>
       </Td>
-      <Td label={`r${b.head.number}`}>
-        {row.changed ? <ComparedSentence row={row} side="after" steps={b.sequence.steps} /> : null}
+      <Td label={`r${b.head.number}`} className={row.changed ? '' : 'max-sm:hidden!'}>
+        {row.changed ? (
+          <span>
+            <ComparedSentence row={row} side="after" steps={b.sequence.steps} />
+          </span>
+        ) : null}
       </Td>
       <Td>
-        {row.changed ? row.values.map((change) => <ValueMove key={change.field} change={change} />) : 'the same'}
-        {row.before && row.after ? null : <b>{row.before ? 'removed' : 'new'}</b>}
+        {row.changed ? (
+          <span className="grid gap-1">
+            {row.values.map((change) => (
+              <ValueMove key={change.field} change={change} />
+            ))}
+            {row.before && row.after ? null : <b>{row.before ? 'removed' : 'new'}</b>}
+          </span>
+        ) : (
+          'the same'
+        )}
       </Td>
     </tr>
   );
