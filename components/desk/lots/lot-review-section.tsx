@@ -32,17 +32,15 @@ export function LotReviewSection({ review, ...section }: LotSectionProps & { rev
   const reading = useIsFetching({ queryKey: ['lot-review', lot.code] }) > 0;
   return (
     <Section
-      title={
-        <span className="flex flex-wrap items-center gap-x-6 gap-y-1">
-          Every board, in test order
-          <QuantityTabs value={view.quantity} onChange={(quantity) => changeView({ quantity })} />
-        </span>
-      }
+      title="Every board, in test order"
       aside={
-        <span className="flex flex-wrap items-baseline gap-x-5">
-          {reading ? <Reading /> : null}
-          {asCharts ? <ChartKey /> : null}
-        </span>
+        <div className="flex flex-1 flex-wrap items-baseline justify-between gap-x-5 gap-y-1">
+          <QuantityTabs value={view.quantity} onChange={(quantity) => changeView({ quantity })} />
+          <span className="flex flex-wrap items-baseline gap-x-5">
+            {reading ? <Reading /> : null}
+            {asCharts ? <ChartKey /> : null}
+          </span>
+        </div>
       }
     >
       {review.points.serials.length === 0 ? (
