@@ -105,6 +105,10 @@ export const runs = pgTable(
     index().on(t.lotId, t.startedAt),
     index().on(t.stationId, t.startedAt),
     index().on(t.startedAt),
+    /** Few among many: the boards that wait for a decision are found by it. */
+    index('runs_not_passed')
+      .on(t.endedAt)
+      .where(sql`${t.kind} = 'production' and ${t.verdict} in ('reject', 'no-verdict')`),
     check(
       'runs_of_something',
       sql`(${t.unitId} is null) = (${t.lotId} is null) and (${t.kind} <> 'production' or ${t.unitId} is not null)`,

@@ -1,0 +1,1 @@
+CREATE INDEX "runs_not_passed" ON "runs" USING btree ("ended_at") WHERE "runs"."kind" = 'production' and "runs"."verdict" in ('reject', 'no-verdict');
