@@ -1,21 +1,27 @@
 'use client';
 
+import Link from 'next/link';
 import { stepWord } from '@/lib/sequence/value-words';
 import type { StepComparison } from '@/lib/sequence/compare-sequences';
 import { rowId } from './blank-ids';
 import { useEditor } from './editor-context';
 
 /** What differs from the revision in use, a line a value. */
-export function ChangesList() {
+export function ChangesList({ compareAddress }: { compareAddress: string }) {
   const { comparison, releasedName, select } = useEditor();
   if (!comparison || !releasedName) return null;
   const { rule } = comparison;
   const lines = comparison.steps.filter(({ changed }) => changed).flatMap(linesOf);
   return (
     <section aria-labelledby="changes-title" className="border-t-2 border-ink pt-2">
-      <h2 id="changes-title" className="font-bold">
-        Changed since {releasedName}
-      </h2>
+      <div className="flex items-baseline justify-between gap-4">
+        <h2 id="changes-title" className="font-bold">
+          Changed since {releasedName}
+        </h2>
+        <Link className="sw-link" href={compareAddress}>
+          Compare
+        </Link>
+      </div>
       {comparison.same ? <p className="text-ink-2">Nothing yet.</p> : null}
       <table className="sw-table">
         <tbody>

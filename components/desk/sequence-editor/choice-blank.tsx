@@ -29,7 +29,7 @@ export function ChoiceBlank({ step, blank }: BlankProps) {
           const option = options[Number(target.value)];
           if (option) edit((now) => setField(now, { stepId: step.id, field: blank.field, value: option.value }));
         }}
-        className={`appearance-none px-2 pr-7 font-bold text-ink ${blankFrame(state, blank.tone)}`}
+        className={`appearance-none font-bold text-ink ${blankFrame(state, blank.tone)} !pr-7`}
       >
         {at < 0 ? <option value={-1}>{blank.input === 'step' ? 'choose a step' : 'choose'}</option> : null}
         {options.map(({ value, label }, i) => (

@@ -29,11 +29,9 @@ export function EditorHead(props: EditorHeadProps) {
   const { head, released, sequenceId } = page;
   const errorWords = errorCount(errors);
   return (
-    <div className="mb-4 flex flex-wrap items-center justify-between gap-x-8 gap-y-3">
+    <div className="mb-4 grid items-center gap-x-8 gap-y-3 lg:grid-cols-[minmax(0,1fr)_auto]">
       <div className="flex flex-wrap items-baseline gap-x-6 gap-y-1">
-        <h1 className="text-title leading-tight font-bold max-sm:text-[26px]">
-          {page.boardType.code} {page.sequenceName}
-        </h1>
+        <h1 className="text-title leading-tight font-bold max-sm:text-[26px]">{page.sequenceName}</h1>
         <p className="text-ink-2">
           <b className="text-ink">
             {head.status === 'draft' ? 'Draft' : 'Revision'} r{head.number}
@@ -48,12 +46,6 @@ export function EditorHead(props: EditorHeadProps) {
                 </>
               ) : null}
               .{' '}
-              <Link
-                className="sw-link"
-                href={`/sequences/${sequenceId}/compare?a=r${released.head.number}&b=r${head.number}`}
-              >
-                Compare
-              </Link>{' '}
             </>
           ) : head.status === 'released' ? (
             'Stations run it. '
@@ -65,7 +57,7 @@ export function EditorHead(props: EditorHeadProps) {
           </Link>
         </p>
       </div>
-      <div className="flex flex-wrap items-center gap-3">
+      <div className="flex flex-wrap items-center gap-3 lg:justify-end">
         {errorWords ? (
           <button
             type="button"

@@ -26,7 +26,7 @@ export function PictureBlank({ step, blank }: BlankProps) {
         data-blank=""
         aria-describedby={state.describedBy}
         onClick={() => setOpen(true)}
-        className={`px-2 font-bold text-accent underline underline-offset-4 ${blankFrame(state)}`}
+        className={`font-bold text-accent underline underline-offset-4 ${blankFrame(state)}`}
       >
         {fileId ? 'this picture' : (blank.whenNull ?? 'no picture')}
       </button>

@@ -94,7 +94,7 @@ function Factor({ factor, unread }: { factor: number; unread: string | undefined
         endGroup();
       }}
       style={{ width: `${Math.max(3, shown.length) + 2}ch` }}
-      className={`px-2 font-num font-bold ${blankFrame({ error: unread !== undefined, warning: false })}`}
+      className={`font-num font-bold ${blankFrame({ error: unread !== undefined, warning: false })}`}
     />
   );
 }

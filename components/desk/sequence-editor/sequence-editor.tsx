@@ -160,14 +160,18 @@ export function SequenceEditor({ page, dryRun: newest, offers, actions }: Sequen
               onKeys={() => setOpen('keys')}
             />
             <div className="mt-4 border-t-2 border-ink pt-2">
-              <PredictedSupply
-                prediction={facts.prediction}
-                limits={boardType.limits}
-                steps={steps.map((step, i) => ({ id: step.id, number: i + 1, name: stepWord(step) }))}
-                selectedId={selectedId}
-                onSelect={select}
-                note={<StationChoice stations={stations} chosen={stationCode} onChoose={setStation} />}
-              />
+              {facts.prediction ? (
+                <PredictedSupply
+                  prediction={facts.prediction}
+                  limits={boardType.limits}
+                  steps={steps.map((step, i) => ({ id: step.id, number: i + 1, name: stepWord(step) }))}
+                  selectedId={selectedId}
+                  onSelect={select}
+                  note={<StationChoice stations={stations} chosen={stationCode} onChoose={setStation} />}
+                />
+              ) : (
+                <p className="min-h-[300px] text-ink-2">Playing the draft on one typical board.</p>
+              )}
             </div>
           </div>
           <div className="grid min-w-0 content-start gap-5">
@@ -183,7 +187,9 @@ export function SequenceEditor({ page, dryRun: newest, offers, actions }: Sequen
                 overRails={trim ? <TargetGrip trim={trim} scale={railsFor(boardType)} /> : null}
               />
             </div>
-            <ChangesList />
+            <ChangesList
+              compareAddress={`/sequences/${page.sequenceId}/compare?a=r${released?.head.number}&b=r${head.number}`}
+            />
           </div>
         </div>
         <OfferResults revisionId={head.id} initial={offers} endOffer={actions.endOffer} />

@@ -79,6 +79,7 @@ export function StepRow({ step, number, seconds, lost, acts }: StepRowProps) {
       <span className="pt-[7px] text-right font-num font-bold max-sm:pt-[15px]">{number}</span>
       <span className="pt-1">
         <StepName step={step} number={number} naming={naming} onNaming={setNaming} />
+        {step.enabled ? null : <b className="block text-cap">off</b>}
         {change?.before === null ? <span className="block text-cap text-ink-2">new</span> : null}
         {change?.moved ? <span className="block text-cap text-ink-2">was step {change.placeBefore}</span> : null}
         {change?.renamed ? <span className="block text-cap text-ink-2">was {stepWord(change.before!)}</span> : null}
@@ -92,7 +93,7 @@ export function StepRow({ step, number, seconds, lost, acts }: StepRowProps) {
       </div>
       <div className="flex items-center gap-2 pt-1">
         {lost ? <LostBoards lost={lost} /> : null}
-        <span className="w-[58px] text-right font-num text-ink-2">
+        <span className="w-[62px] text-right font-num text-ink-2">
           {!step.enabled ? (
             ''
           ) : seconds === null ? (

@@ -6,7 +6,7 @@ interface SwitchProps {
   onChange: (on: boolean) => void;
 }
 
-/** On or off: a slot whose filled half and word tell which. */
+/** On or off: a slot with its filled half at the right, or its hollow one at the left. */
 export function Switch({ id, label, on, onChange }: SwitchProps) {
   return (
     <button
@@ -23,7 +23,6 @@ export function Switch({ id, label, on, onChange }: SwitchProps) {
           className={`absolute inset-y-0.5 w-3 ${on ? 'right-0.5 bg-accent' : 'left-0.5 border-2 border-accent'}`}
         />
       </span>
-      <span className="w-5 text-left">{on ? 'on' : 'off'}</span>
     </button>
   );
 }

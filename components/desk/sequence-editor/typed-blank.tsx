@@ -29,7 +29,7 @@ export function TypedBlank({ step, blank }: BlankProps) {
   const placeholder = blank.whenNull;
   const characters = Math.max(2, shown.length, shown === '' && placeholder ? placeholder.length : 0) + (words ? 1 : 0);
   return (
-    <label className={`inline-flex items-baseline px-2 ${blankFrame(state, blank.tone)}`}>
+    <label className={`inline-flex items-baseline ${blankFrame(state, blank.tone)}`}>
       <input
         id={blankId(step.id, blank.field)}
         aria-label={blank.unit ? `${blank.label}, ${blank.unit}` : blank.label}
