@@ -35,7 +35,7 @@ interface BoardTypeEditorProps {
 export function BoardTypeEditor({ page, signer, actions }: BoardTypeEditorProps) {
   const { shown } = page;
   const readOnly = shown.status !== 'draft' || !page.mayEdit;
-  const draft = useDraftForm(shown.specification, readOnly, `board-type:${shown.id}:${shown.version}`);
+  const draft = useDraftForm(shown, readOnly);
   const { access, boardType, findings, unreadable } = draft;
   // What cannot be read now leaves the last prediction in sight.
   const [readable, setReadable] = useState(shown.specification);

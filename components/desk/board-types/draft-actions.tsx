@@ -47,7 +47,7 @@ export function DraftActions({ page, signer, draft, misses, actions }: DraftActi
   const [problem, setProblem] = useState<string | null>(null);
   const revisionId = shown.id;
 
-  async function run<T>(name: string, send: () => Promise<Outcome<T>>, said: string): Promise<boolean> {
+  async function run<T>(name: string, send: () => Promise<Outcome<T>>, said: string): Promise<T | null> {
     setBusy(name);
     setProblem(null);
     try {
@@ -55,19 +55,19 @@ export function DraftActions({ page, signer, draft, misses, actions }: DraftActi
       if (outcome.ok) toast(said);
       else setProblem(outcome.sentence);
       router.refresh();
-      return outcome.ok;
+      return outcome.ok ? outcome.value : null;
     } catch (error) {
       // A redirect to the sign-in page is Next's own error and must go on.
       if (String((error as { digest?: unknown }).digest ?? '').startsWith('NEXT_')) throw error;
       setProblem(silent);
-      return false;
+      return null;
     } finally {
       setBusy(null);
     }
   }
 
   async function save(): Promise<void> {
-    const { boardType, unreadable } = draft;
+    const { boardType, unreadable, version } = draft;
     if (!boardType) {
       const first = Object.keys(unreadable)[0]!;
       const many = Object.keys(unreadable).length;
@@ -75,8 +75,8 @@ export function DraftActions({ page, signer, draft, misses, actions }: DraftActi
       return focusField(first);
     }
     const specification = boardType;
-    const version = shown.version;
-    if (await run('save', () => actions.save({ revisionId, version, specification }), 'Draft saved')) draft.saved();
+    const stored = await run('save', () => actions.save({ revisionId, version, specification }), 'Draft saved');
+    if (stored) draft.saved(stored.version);
   }
 
   const close = () => setAsking(null);
@@ -141,7 +141,7 @@ export function DraftActions({ page, signer, draft, misses, actions }: DraftActi
       {asking === 'approval' ? (
         <AskDialog
           revisionId={revisionId}
-          version={shown.version}
+          version={draft.version}
           number={shown.number}
           misses={misses}
           misfits={page.misfits}

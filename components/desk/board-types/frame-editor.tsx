@@ -6,6 +6,8 @@ import type { TrimmerPhoto } from '@/lib/contracts/board-type';
 
 interface FrameEditorProps {
   photo: TrimmerPhoto;
+  /** Width over height, where it is known before the picture comes. */
+  proportion: number | undefined;
   onChange: (photo: TrimmerPhoto) => void;
 }
 
@@ -18,7 +20,7 @@ const steps: Record<string, readonly [number, number]> = {
 const stepShare = 0.01;
 
 /** The frame around the trimmer: dragged, or moved with the arrow keys and sized with them and Shift. */
-export function FrameEditor({ photo, onChange }: FrameEditorProps) {
+export function FrameEditor({ photo, proportion, onChange }: FrameEditorProps) {
   const id = useId();
   const picture = useRef<HTMLDivElement>(null);
   const held = useRef<{ x: number; y: number; sizes: boolean; photo: TrimmerPhoto } | null>(null);
@@ -52,6 +54,7 @@ export function FrameEditor({ photo, onChange }: FrameEditorProps) {
         <img
           src={`/api/files/${photo.fileId}`}
           alt="Board with its trimmer"
+          style={{ aspectRatio: proportion }}
           className="block w-full border-2 border-ink bg-sheet"
         />
         <button

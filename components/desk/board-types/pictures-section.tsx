@@ -22,7 +22,7 @@ export function PicturesSection({ files, onStored }: PicturesSectionProps) {
         title="Photo of the trimmer’s place"
         aside={<span className="text-cap text-ink-2">Operators see it when turning has no effect.</span>}
       >
-        <PhotoField onStored={onStored} />
+        <PhotoField files={files} onStored={onStored} />
       </Section>
       <Section title="Fixture drawing">
         <DrawingField files={files} onStored={onStored} />
@@ -31,9 +31,11 @@ export function PicturesSection({ files, onStored }: PicturesSectionProps) {
   );
 }
 
-function PhotoField({ onStored }: Pick<PicturesSectionProps, 'onStored'>) {
+function PhotoField({ files, onStored }: PicturesSectionProps) {
   const { form, readOnly, change } = useBoardTypeForm();
   const { trimmerPhoto: photo } = form;
+  const facts = files.find(({ id }) => id === photo?.fileId);
+  const proportion = facts?.width && facts.height ? facts.width / facts.height : undefined;
   if (readOnly)
     return photo ? (
       <TrimmerPicture photo={photo} label="Board with its trimmer" className="max-h-96" />
@@ -42,7 +44,9 @@ function PhotoField({ onStored }: Pick<PicturesSectionProps, 'onStored'>) {
     );
   return (
     <div className="grid gap-3">
-      {photo ? <FrameEditor photo={photo} onChange={(trimmerPhoto) => change({ trimmerPhoto })} /> : null}
+      {photo ? (
+        <FrameEditor photo={photo} proportion={proportion} onChange={(trimmerPhoto) => change({ trimmerPhoto })} />
+      ) : null}
       <UploadFrame
         kind="trimmer-photo"
         label={photo ? 'Choose another photo' : 'Choose a photo'}

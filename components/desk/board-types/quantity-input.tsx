@@ -21,8 +21,8 @@ export function QuantityInput({ field, label, onFocus }: QuantityInputProps) {
       : wrong
         ? 'border border-b-2 border-ink bg-attn-wash px-[5px]'
         : readOnly
-          ? 'border-2 border-transparent -mx-1.5 px-1'
-          : 'border-2 border-transparent border-b-rule bg-sheet px-1 hover:border-b-accent';
+          ? 'border-0 px-0'
+          : 'border-0 border-b-2 border-rule bg-sheet px-1.5 pt-0.5 hover:border-accent';
   return (
     <input
       id={fieldId(field.path)}

@@ -14,6 +14,7 @@ import { readQuantity } from '@/lib/board-type/quantity-text';
 import { degreesATurn, thresholdAmpsField, thresholdVoltsField } from '@/lib/board-type/fields';
 import { degreesStyle } from '@/lib/board-type/quantity-styles';
 import type { BoardType } from '@/lib/contracts/board-type';
+import type { BoardTypeRevisionHead } from '@/lib/contracts/board-type-revision';
 import type { FormAccess } from './form-context';
 
 export interface DraftForm {
@@ -29,16 +30,23 @@ export interface DraftForm {
   /** Takes the values of another board type, such as one with a fix in it. */
   take(boardType: BoardType): void;
   replace(form: BoardTypeForm): void;
-  /** What is typed now counts as saved. */
-  saved(): void;
+  /** The saved version that what is typed was made from. */
+  version: number;
+  /** What is typed now counts as saved under this version. */
+  saved(version: number): void;
   revert(): void;
 }
 
 /** What is typed into a board type, kept in this tab until it is saved: nothing typed is lost. */
-export function useDraftForm(specification: BoardType, readOnly: boolean, keptAs: string): DraftForm {
+export function useDraftForm(
+  { id, specification, version: opened }: Pick<BoardTypeRevisionHead, 'id' | 'specification' | 'version'>,
+  readOnly: boolean,
+): DraftForm {
+  const keptAs = `board-type:${id}`;
   const stored = useMemo(() => formOf(specification), [specification]);
   const [base, setBase] = useState(stored);
   const [form, setForm] = useState(stored);
+  const [version, setVersion] = useState(opened);
   const [restored, setRestored] = useState(false);
   const { boardType, unreadable } = useMemo(() => readForm(form, specification.code), [form, specification.code]);
   const findings = useMemo(() => (boardType ? checkBoardType(boardType) : []), [boardType]);
@@ -52,15 +60,16 @@ export function useDraftForm(specification: BoardType, readOnly: boolean, keptAs
       const kept = readKept(keptAs);
       if (kept) {
         const timer = setTimeout(() => {
-          setForm(kept);
+          setForm(kept.form);
+          setVersion(kept.version);
           setRestored(true);
         });
         return () => clearTimeout(timer);
       }
     }
-    if (dirty) sessionStorage.setItem(keptAs, JSON.stringify(form));
+    if (dirty) sessionStorage.setItem(keptAs, JSON.stringify({ version, form } satisfies Kept));
     else sessionStorage.removeItem(keptAs);
-  }, [form, dirty, keptAs, readOnly]);
+  }, [form, version, dirty, keptAs, readOnly]);
 
   const access: FormAccess = {
     form,
@@ -83,14 +92,27 @@ export function useDraftForm(specification: BoardType, readOnly: boolean, keptAs
     restored: restored && dirty,
     take: (other) => setForm((now) => ({ ...now, texts: { ...now.texts, ...formOf(other).texts } })),
     replace: setForm,
-    saved: () => setBase(form),
-    revert: () => setForm(base),
+    version,
+    saved: (now) => {
+      setBase(form);
+      setVersion(now);
+      setRestored(false);
+    },
+    revert: () => {
+      setForm(base);
+      setVersion(opened);
+    },
   };
 }
 
-function readKept(keptAs: string): BoardTypeForm | null {
+interface Kept {
+  version: number;
+  form: BoardTypeForm;
+}
+
+function readKept(keptAs: string): Kept | null {
   try {
-    return JSON.parse(sessionStorage.getItem(keptAs) ?? 'null') as BoardTypeForm | null;
+    return JSON.parse(sessionStorage.getItem(keptAs) ?? 'null') as Kept | null;
   } catch {
     return null;
   }

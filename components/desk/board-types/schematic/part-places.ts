@@ -12,14 +12,14 @@ export const drawingWidth = 856;
 export const drawingHeight = 420;
 
 export const partPlaces: Record<string, PartPlace> = {
-  reservoir: { x: 74, y: 166, symbol: [30, 182, 40, 22] },
+  reservoir: { x: 68, y: 166, symbol: [26, 182, 40, 22] },
   'upper-end': { x: 253, y: 60, symbol: [222, 59, 20, 57] },
   trimmer: { x: 253, y: 128, symbol: [222, 165, 20, 63] },
   travel: { x: 253, y: 208, symbol: [222, 165, 20, 63] },
   'lower-end': { x: 253, y: 278, symbol: [222, 277, 20, 57] },
   bias: { x: 446, y: 52, symbol: [418, 50, 20, 56] },
   zener: { x: 452, y: 292, symbol: [406, 274, 44, 36] },
-  feedback: { x: 584, y: 304, symbol: [600, 275, 64, 20] },
+  feedback: { x: 596, y: 304, symbol: [600, 275, 64, 20] },
   comparator: { x: 600, y: 60, symbol: [572, 126, 96, 99] },
   load: { x: 786, y: 240, symbol: [734, 251, 44, 69], stacked: true },
 };

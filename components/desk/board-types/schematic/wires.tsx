@@ -1,11 +1,11 @@
 /** Wires, nodes and symbols; right angles only, crossings broken. The words beside them are the fields'. */
 export function Wires() {
   const nodes = [
-    [50, 25],
+    [46, 25],
     [232, 25],
     [428, 25],
     [756, 25],
-    [50, 389],
+    [46, 389],
     [232, 389],
     [428, 389],
     [756, 389],
@@ -17,8 +17,8 @@ export function Wires() {
     <g fill="none" stroke="var(--sw-ink)" strokeWidth={2}>
       <path d="M26 25H776M26 389H776" />
       <path d="M26 17V33M26 381V397" strokeWidth={4} />
-      <path d="M50 25V186M50 200V389M232 25V59M232 116V165M232 228V277M232 334V389" />
-      <path d="M32 186H68M32 200H68" strokeWidth={4} />
+      <path d="M46 25V186M46 200V389M232 25V59M232 116V165M232 228V277M232 334V389" />
+      <path d="M28 186H64M28 200H64" strokeWidth={4} />
       <path d="M254 197H420M436 197H572M428 25V50M428 106V281M428 308V389M428 154H572" />
       <path d="M668 176H722M548 197V285H600M664 285H692V176M756 25V150M756 203V251M756 320V389" />
       <path d="M408 288V281H448V274" />
@@ -42,7 +42,7 @@ export function Wires() {
         <text x={26} y={414} fontWeight={400}>
           supply −
         </text>
-        <text x={28} y={181} fontWeight={400}>
+        <text x={24} y={179} fontWeight={400}>
           +
         </text>
         <text x={580} y={159} fontSize={16}>
