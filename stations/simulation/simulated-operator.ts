@@ -40,7 +40,6 @@ function wishOf(screen: Screen): string | null {
     case 'seal':
       return screen.wants === 'supply-off' ? null : `seal:${screen.wants}`;
     case 'operator-check':
-    case 'instruction':
       return screen.kind;
     case 'instruction':
       return `instruction:${screen.text}`;
@@ -96,8 +95,6 @@ export class SimulatedOperator {
         });
       case 'operator-check':
         return this.after(answer, wish, () => tell({ kind: 'answer', ok: true }));
-      case 'instruction':
-        return this.after(answer, wish, () => tell({ kind: 'confirm', what: 'instruction-done' }));
       case 'instruction':
         return this.after(instruction, wish, () => tell({ kind: 'confirm', what: 'instruction-done' }));
       case 'trim':
