@@ -61,11 +61,15 @@ export function readSequenceFile(text: string): ReadSequenceFile {
 export const sequenceOf = ({ decisionRule, steps }: SequenceFile): Sequence =>
   sequenceSchema.parse({ decisionRule, steps });
 
-const fieldPath = (path: readonly PropertyKey[]) =>
-  path.reduce<string>(
-    (text, key) => (typeof key === 'number' ? `${text}[${key + 1}]` : text ? `${text}.${String(key)}` : String(key)),
-    '',
-  );
+/** contactCheck.volts; a step by its number as the editor shows it: "step 2, volts". */
+function fieldPath([first, place, ...rest]: readonly PropertyKey[]): string {
+  if (first !== 'steps' || typeof place !== 'number')
+    return [first, place, ...rest]
+      .filter((key) => key !== undefined)
+      .map(String)
+      .join('.');
+  return [`step ${place + 1}`, ...(rest.length > 0 ? [rest.map(String).join('.')] : [])].join(', ');
+}
 
 function unknownFields(given: unknown, known: unknown, path: PropertyKey[] = []): PropertyKey[][] {
   if (given === null || typeof given !== 'object' || known === null || typeof known !== 'object') return [];

@@ -122,11 +122,7 @@ it('the comparison strikes out what was and underlines what is, and says the res
 });
 
 it('problems of a file are told by line, field and reason, and that nothing was stored', () => {
-  render(<FileProblems problems={[{ line: 7, field: 'steps[2].volts', reason: 'It is missing.' }]} />);
+  render(<FileProblems problems={[{ line: 7, field: 'step 2, volts', reason: 'It is missing.' }]} />);
   expect(screen.getByRole('alert').textContent).toContain('Nothing was stored.');
-  expect(screen.getAllByRole('cell').map((cell) => cell.textContent)).toEqual([
-    '7',
-    'steps[2].volts',
-    'It is missing.',
-  ]);
+  expect(screen.getAllByRole('cell').map((cell) => cell.textContent)).toEqual(['7', 'step 2, volts', 'It is missing.']);
 });

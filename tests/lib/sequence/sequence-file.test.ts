@@ -50,16 +50,16 @@ describe('a bad file', () => {
     expect(problems(text)).toEqual([
       {
         line: lineOf(text, '"currentLimitAmps": "0.3"'),
-        field: 'steps[2].currentLimitAmps',
+        field: 'step 2, currentLimitAmps',
         reason: 'It must be a number, not "0.3".',
       },
-      { line: lineOf(text, '"id": "s5"') - 1, field: 'steps[5].targetVolts', reason: 'It is missing.' },
+      { line: lineOf(text, '"id": "s5"') - 1, field: 'step 5, targetVolts', reason: 'It is missing.' },
       {
         line: lineOf(text, '"three-beeps"'),
-        field: 'steps[5].procedure',
+        field: 'step 5, procedure',
         reason: 'It must be one of "two-beeps", "prompted", "wiper-probe", not "three-beeps".',
       },
-      { line: lineOf(text, '"mostRounds": 0'), field: 'steps[5].mostRounds', reason: 'It must be more than 0.' },
+      { line: lineOf(text, '"mostRounds": 0'), field: 'step 5, mostRounds', reason: 'It must be more than 0.' },
     ]);
   });
 
@@ -72,13 +72,13 @@ describe('a bad file', () => {
 
   test('with a kind of step, a field or an id that the format does not take is told where', () => {
     const kind = whole.replace('"kind": "seal"', '"kind": "glue"');
-    expect(problems(kind)).toMatchObject([{ line: lineOf(kind, '"glue"'), field: 'steps[6].kind' }]);
+    expect(problems(kind)).toMatchObject([{ line: lineOf(kind, '"glue"'), field: 'step 6, kind' }]);
     const field = whole.replace('"settleMs": 250', '"settleMs": 250,\n      "setleMs": 10');
     expect(problems(field)).toEqual([
-      { line: lineOf(field, '"setleMs"'), field: 'steps[2].setleMs', reason: 'The format has no such field.' },
+      { line: lineOf(field, '"setleMs"'), field: 'step 2, setleMs', reason: 'The format has no such field.' },
     ]);
     const id = whole.replace('"id": "s3"', '"id": "s2"');
-    expect(problems(id)).toMatchObject([{ field: 'steps[3].id', reason: 'Another step has this id.' }]);
+    expect(problems(id)).toMatchObject([{ field: 'step 3, id', reason: 'Another step has this id.' }]);
     const twice = whole.replace('"version": 1', '"version": 1,\n  "version": 1');
     expect(problems(twice)).toMatchObject([{ line: 4, field: 'version', reason: 'It is given twice.' }]);
   });

@@ -150,7 +150,7 @@ describe('export and import', () => {
     const answer = valueOf(await importSequence(second, { text, sequenceId: null }));
     expect(answer).toMatchObject({
       made: false,
-      problems: [{ field: 'steps[5].mostRounds' }, { field: 'steps[7].repeats', reason: 'It must be at most 10.' }],
+      problems: [{ field: 'step 5, mostRounds' }, { field: 'step 7, repeats', reason: 'It must be at most 10.' }],
     });
     expect(await open.db.$count(sequenceRevisions)).toBe(before);
   });

@@ -88,7 +88,7 @@ async function problemsHere(
     if (id && missing.includes(id))
       problems.push({
         line: lineOf(['steps', i, 'pictureId']),
-        field: `steps[${i + 1}].pictureId`,
+        field: `step ${i + 1}, pictureId`,
         reason: 'This picture is not kept here. Write null, then add the picture in the draft.',
       });
   });
