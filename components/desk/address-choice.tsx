@@ -13,7 +13,7 @@ interface AddressChoiceProps {
   value: string;
 }
 
-/** A gap in a toolbar's sentence that is part of the address, so that Back undoes it. */
+/** A gap in a toolbar's sentence that is part of the address, so that Back undoes it. Begins with the first page again. */
 export function AddressChoice({ name, label, choices, value }: AddressChoiceProps) {
   const router = useRouter();
   const path = usePathname();
@@ -27,6 +27,7 @@ export function AddressChoice({ name, label, choices, value }: AddressChoiceProp
         const next = new URLSearchParams(query);
         if (event.target.value === choices[0]?.value) next.delete(name);
         else next.set(name, event.target.value);
+        next.delete('page');
         router.push(next.size > 0 ? `${path}?${next}` : path);
       }}
     />

@@ -13,6 +13,7 @@ export function AddressText({ name, label, value }: { name: string; label: strin
     const next = new URLSearchParams(query);
     if (text.trim()) next.set(name, text.trim());
     else next.delete(name);
+    next.delete('page');
     router.push(next.size > 0 ? `${path}?${next}` : path);
   };
   return (

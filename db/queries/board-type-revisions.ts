@@ -17,6 +17,11 @@ export async function findBoardType(db: Reader, code: string): Promise<typeof bo
   return row ?? null;
 }
 
+export async function listBoardTypeCodes(db: Reader): Promise<string[]> {
+  const rows = await db.select({ code: boardTypes.code }).from(boardTypes).orderBy(asc(boardTypes.code));
+  return rows.map(({ code }) => code);
+}
+
 export async function insertBoardType(
   tx: Transaction,
   values: typeof boardTypes.$inferInsert,

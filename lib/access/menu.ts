@@ -10,6 +10,7 @@ export interface MenuItem {
 /** The desk's main menu, in the order of the work. */
 const menu: readonly MenuItem[] = [
   { href: '/lots', label: 'Lots' },
+  { href: '/rejects', label: 'Rejects' },
   { href: '/units', label: 'Units' },
   { href: '/stations', label: 'Stations' },
   { href: '/board-types', label: 'Board types' },

@@ -24,10 +24,11 @@ interface LotLiveProps {
   initialReview: LotReview | null;
   may: LotSectionProps['may'];
   actions: LotSectionProps['actions'];
+  deciding: LotSectionProps['deciding'];
 }
 
 /** The page of a lot, fetched again every few seconds while the lot is in production. */
-export function LotLive({ initial, initialReview, may, actions }: LotLiveProps) {
+export function LotLive({ initial, initialReview, may, actions, deciding }: LotLiveProps) {
   const [view, changeView] = useLotView();
   const query = lotViewQuery(view);
   const [firstQuery] = useState(query);
@@ -58,6 +59,7 @@ export function LotLive({ initial, initialReview, may, actions }: LotLiveProps) 
     changeView,
     may,
     actions,
+    deciding,
     onChanged: () => {
       void page.refetch();
       void review.refetch();

@@ -1,6 +1,7 @@
 import type { LotPage } from '@/lib/contracts/lot-page';
 import type { LotView } from '@/lib/contracts/lot-view';
 import type { Outcome } from '@/lib/contracts/outcome';
+import type { Deciding } from '../decisions/deciding';
 import type { LotActionsOf } from './lot-actions';
 
 /** What every part of a lot's page is given. */
@@ -14,6 +15,7 @@ export interface LotSectionProps {
     chooseBaseline: (input: unknown) => Promise<Outcome>;
     move: (input: unknown) => Promise<Outcome>;
   };
+  deciding: Deciding;
   /** Fetches the page again, after something was changed. */
   onChanged: () => void;
 }

@@ -9,10 +9,9 @@ import { SerialStrip } from '@/components/ui/serial-strip';
 import { useToast } from '@/components/ui/toast';
 import { VerdictMark, type VerdictShape } from '@/components/ui/verdict-mark';
 import type { Outcome } from '@/lib/contracts/outcome';
-import type { ReasonChoice } from '@/lib/contracts/reason-code';
-import type { DispositionKind } from '@/lib/contracts/stored-states';
 import type { UnitPage } from '@/lib/contracts/unit-page';
-import { DispositionDialog, type SignDispositions } from '../decisions/disposition-dialog';
+import type { Deciding } from '../decisions/deciding';
+import { DispositionDialog } from '../decisions/disposition-dialog';
 import { UnitDecisions, type DecisionViewer } from '../decisions/unit-decisions';
 import { fetchJson } from '../fetch-json';
 import { standingWords } from '../words';
@@ -25,10 +24,9 @@ import { UnitRails } from './unit-rails';
 interface UnitLiveProps {
   initial: UnitPage;
   viewer: DecisionViewer;
-  /** `decide`: what this person may sign. */
-  may: { print: boolean; decide: readonly DispositionKind[]; order: boolean };
-  reasons: readonly ReasonChoice[];
-  actions: Record<'print' | 'order' | 'complete', (input: unknown) => Promise<Outcome>> & { decide: SignDispositions };
+  may: { print: boolean; order: boolean };
+  deciding: Deciding;
+  actions: Record<'print' | 'order' | 'complete', (input: unknown) => Promise<Outcome>>;
 }
 
 const refreshMs = 2_500;
@@ -38,7 +36,7 @@ const moves = (unit: UnitPage) =>
   unit.labels[0]?.state === 'failed';
 
 /** Everything on record of one board; fetched again while it is in test or its label is on the way. */
-export function UnitLive({ initial, viewer, may, reasons, actions }: UnitLiveProps) {
+export function UnitLive({ initial, viewer, may, deciding, actions }: UnitLiveProps) {
   const toast = useToast();
   const query = useQuery({
     queryKey: ['unit', initial.serial],
@@ -51,7 +49,7 @@ export function UnitLive({ initial, viewer, may, reasons, actions }: UnitLivePro
   const [printing, setPrinting] = useState(false);
   const { kind } = unit.standing;
   const newest = unit.runs.find((run) => run.kind === 'production');
-  const kinds = unit.decidable.filter((each) => may.decide.includes(each));
+  const kinds = unit.decidable.filter((each) => deciding.kinds.includes(each));
   const orderable = kind === 'passed' || kind === 'waits-for-quality';
   const dialog = {
     signer: viewer.name,
@@ -137,8 +135,8 @@ export function UnitLive({ initial, viewer, may, reasons, actions }: UnitLivePro
           {...dialog}
           boards={[{ unitId: unit.id, runId: newest.id, serial: unit.serial }]}
           kinds={kinds}
-          reasons={reasons}
-          sign={actions.decide}
+          reasons={deciding.reasons}
+          sign={deciding.sign}
         />
       ) : null}
       {asking === 'order' ? (

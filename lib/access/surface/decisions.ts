@@ -3,10 +3,11 @@ import type { Surface } from '../surface';
 /** Rejects, what is decided about them, the rules that hold lots, and the reasons that people choose from. */
 export const decisionsSurface: Surface = {
   pages: {
+    '/rejects': 'signed-in',
     /** Printed: what was decided about a board, with its signatures. */
     '/units/[serial]/decisions': 'signed-in',
   },
-  handlers: {},
+  handlers: { 'GET /api/rejects': 'signed-in' },
   actions: {
     /** Rework, scrap and return ask for quality as well; a concession may begin with an engineer. */
     'app/(quality)/units/actions.ts#signDispositionsAction': 'sign-concessions',

@@ -2,10 +2,13 @@ import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { LotLive } from '@/components/desk/lots/lot-live';
 import { actorMay } from '@/lib/access/actor';
+import { kindsSignedBy } from '@/lib/access/disposition-kinds';
 import { lotViewSchema } from '@/lib/contracts/lot-view';
 import { authorise } from '@/server/auth/authorise';
 import { readLotPage } from '@/server/operations/lots/read-lot-page';
 import { readLotReview } from '@/server/operations/lots/read-lot-review';
+import { listReasonChoices } from '@/server/operations/reason-codes/list-reason-choices';
+import { signDispositionsAction } from '../../units/actions';
 import {
   changeLotAction,
   chooseBaselineAction,
@@ -28,7 +31,11 @@ export default async function LotPage({ params, searchParams }: Props) {
   const actor = await authorise('signed-in');
   const code = decodeURIComponent((await params).code);
   const view = lotViewSchema.parse(await searchParams);
-  const [lot, review] = await Promise.all([readLotPage(code, view), readLotReview(code, view)]);
+  const [lot, review, reasons] = await Promise.all([
+    readLotPage(code, view),
+    readLotReview(code, view),
+    listReasonChoices(),
+  ]);
   if (!lot) notFound();
   return (
     <LotLive
@@ -43,6 +50,7 @@ export default async function LotPage({ params, searchParams }: Props) {
         chooseBaseline: chooseBaselineAction,
         move: moveLotAction,
       }}
+      deciding={{ kinds: kindsSignedBy(actor.roles), reasons, signer: actor.name, sign: signDispositionsAction }}
     />
   );
 }

@@ -25,15 +25,13 @@ export default async function UnitPage({ params }: Props) {
     <UnitLive
       initial={unit}
       viewer={{ accountId: actor.accountId, name: actor.name, roles: actor.roles }}
-      reasons={reasons}
+      deciding={{ kinds: kindsSignedBy(actor.roles), reasons, signer: actor.name, sign: signDispositionsAction }}
       may={{
         print: actorMay(actor, 'print-labels'),
-        decide: kindsSignedBy(actor.roles),
         order: actorMay(actor, 'order-retests'),
       }}
       actions={{
         print: printLabelAgainAction,
-        decide: signDispositionsAction,
         complete: completeConcessionAction,
         order: orderRetestAction,
       }}
