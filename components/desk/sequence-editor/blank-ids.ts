@@ -9,7 +9,7 @@ export const rowId = (stepId: string) => `step-${stepId}`;
 export function goTo({ stepId, field }: { stepId: string | null; field: string | null }): void {
   const row = stepId === null ? document.getElementById('rule') : document.getElementById(rowId(stepId));
   const blank = field === null ? null : document.getElementById(blankId(stepId, field));
-  const target = blank ?? row?.querySelector<HTMLElement>('input, select, button');
+  const target = blank ?? row?.querySelector<HTMLElement>('[data-blank]') ?? row?.querySelector<HTMLElement>('button');
   row?.scrollIntoView({ block: 'nearest' });
   target?.focus();
 }

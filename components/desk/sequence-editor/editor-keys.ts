@@ -30,7 +30,8 @@ function actOf(event: KeyboardEvent<HTMLElement>, keys: EditorKeys): (() => void
   const { selectedId, locked, commands } = keys;
   if (!(target instanceof HTMLElement)) return null;
   const inText = target instanceof HTMLInputElement || target instanceof HTMLTextAreaElement;
-  if (key === 'F8') return keys.nextError;
+  // F8 belongs to the notices at the foot.
+  if (code === 'KeyJ' && altKey && !control) return keys.nextError;
   if (key === '?' && !inText) return keys.showKeys;
   if (locked) return null;
   if (control && !altKey && code === 'KeyZ') return shiftKey ? keys.redo : keys.undo;

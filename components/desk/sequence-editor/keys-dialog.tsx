@@ -12,7 +12,7 @@ const keys = [
   ['Alt O', 'switch the step on or off'],
   ['Alt Delete', 'remove the step'],
   ['F2', 'name the step'],
-  ['F8', 'go to the next error'],
+  ['Alt J', 'go to the next error'],
   ['?', 'this list'],
 ] as const;
 

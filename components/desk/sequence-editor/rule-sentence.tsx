@@ -37,6 +37,8 @@ export function RuleSentence() {
           <>
             <FillInChoice
               label="Decision rule"
+              data-blank=""
+              className="leading-[26px] max-sm:leading-[42px]"
               choices={kinds}
               value={rule.kind}
               onChange={({ target }) =>

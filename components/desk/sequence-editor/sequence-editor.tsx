@@ -1,42 +1,35 @@
 'use client';
 
-import { useRouter } from 'next/navigation';
 import { useCallback, useMemo, useState } from 'react';
 import { PredictedSupply } from '@/components/charts/predicted-supply';
 import { useToast } from '@/components/ui/toast';
 import type { DryRunView } from '@/lib/contracts/dry-run';
 import type { OfferedDraft } from '@/lib/contracts/engineering-offer';
-import type { Outcome } from '@/lib/contracts/outcome';
-import type { DraftPage, SavedDraft, SaveDraft } from '@/lib/contracts/sequence-draft';
-import { changeSentences } from '@/lib/sequence/change-sentences';
+import type { DraftPage } from '@/lib/contracts/sequence-draft';
 import type { Draft } from '@/lib/sequence/draft';
-import { freshStep, insertStep, mostSteps } from '@/lib/sequence/draft-edits';
+import { mostSteps } from '@/lib/sequence/draft-edits';
 import { errorsOf, submitBlocked, unreasoned } from '@/lib/sequence/draft-problems';
 import { firstOf } from '@/lib/sequence/enabled-steps';
 import { stepWord } from '@/lib/sequence/value-words';
 import { DryRunPane } from '../dry-run/dry-run-pane';
 import { lostAtSteps } from '../dry-run/lost-at';
 import { railsFor } from '../dry-run/run-rails';
-import { useDryRun, type DryRunActions } from '../dry-run/use-dry-run';
-import { OfferDialog, type OfferDraft } from '../offers/offer-dialog';
+import { useDryRun } from '../dry-run/use-dry-run';
 import { OfferResults } from '../offers/offer-results';
-import { AddStepDialog } from './add-step-dialog';
 import { goTo } from './blank-ids';
 import { ChangesList } from './changes-list';
 import { EditorContext, type EditorView } from './editor-context';
 import { EditorHead } from './editor-head';
 import { editorKeys } from './editor-keys';
 import { EditorNotes } from './editor-notes';
-import { KeysDialog } from './keys-dialog';
 import { LeaveGuard } from './leave-guard';
 import { ListFoot } from './list-foot';
 import { lockOf } from './lock-of';
-import { newId } from './new-id';
 import { RuleSentence } from './rule-sentence';
 import { useStepCommands } from './step-commands';
 import { StepList } from './step-list';
 import { StationChoice } from './station-choice';
-import { SubmitDialog, type SubmitRevision } from './submit-dialog';
+import { EditorDialogs, type EditorActions, type OpenDialog } from './editor-dialogs';
 import { TargetGrip } from './target-grip';
 import { useDraft } from './use-draft';
 import { useDraftFacts } from './use-draft-facts';
@@ -46,26 +39,16 @@ interface SequenceEditorProps {
   /** The newest dry run of this revision. */
   dryRun: DryRunView | null;
   offers: OfferedDraft[];
-  actions: {
-    save: (form: SaveDraft) => Promise<Outcome<SavedDraft>>;
-    submit: (form: SubmitRevision) => Promise<Outcome>;
-    dryRun: DryRunActions;
-    /** Null: this person may not offer drafts to stations. */
-    offer: ((input: OfferDraft) => Promise<Outcome<{ offerId: string }>>) | null;
-    endOffer: ((input: { offerId: string }) => Promise<Outcome>) | null;
-  };
+  actions: EditorActions;
 }
-
-type Open = null | 'keys' | 'submit' | 'offer' | { addAfter: string | null };
 
 /** The draft of a sequence: steps as sentences, checked, predicted and saved as they are typed. */
 export function SequenceEditor({ page, dryRun: newest, offers, actions }: SequenceEditorProps) {
   const { head, boardType, released, stations } = page;
-  const router = useRouter();
   const toast = useToast();
   const [selectedId, select] = useState<string | null>(null);
   const [stationCode, setStation] = useState<string | null>(null);
-  const [open, setOpen] = useState<Open>(null);
+  const [open, setOpen] = useState<OpenDialog>(null);
   const [said, say] = useState('');
   const [errorAt, setErrorAt] = useState(-1);
   const { editor, dispatch, saving, presence, isKept } = useDraft({ page, selectedId, save: actions.save });
@@ -118,7 +101,6 @@ export function SequenceEditor({ page, dryRun: newest, offers, actions }: Sequen
         steps.map(({ id }) => id),
       )
     : null;
-  const addPlace = typeof open === 'object' && open !== null ? open.addAfter : null;
 
   return (
     <EditorContext value={view}>
@@ -159,7 +141,7 @@ export function SequenceEditor({ page, dryRun: newest, offers, actions }: Sequen
               onRedo={() => move('redo')}
               onKeys={() => setOpen('keys')}
             />
-            <div className="mt-4 border-t-2 border-ink pt-2">
+            <div className="mt-4">
               {facts.prediction ? (
                 <PredictedSupply
                   prediction={facts.prediction}
@@ -197,46 +179,13 @@ export function SequenceEditor({ page, dryRun: newest, offers, actions }: Sequen
       <p role="status" className="sr-only">
         {said}
       </p>
-      <AddStepDialog
-        open={typeof open === 'object' && open !== null}
+      <EditorDialogs
+        page={page}
+        open={open}
         onClose={() => setOpen(null)}
-        where={whereAfter(steps, addPlace)}
-        onAdd={(kind) => {
-          const id = newId();
-          edit((now) => insertStep(now, freshStep(kind, id, boardType), addPlace));
-          setOpen(null);
-          select(id);
-          setTimeout(() => goTo({ stepId: id, field: null }));
-        }}
-      />
-      <KeysDialog open={open === 'keys'} onClose={() => setOpen(null)} />
-      <SubmitDialog
-        open={open === 'submit'}
-        onClose={() => setOpen(null)}
-        number={head.number}
-        revisionId={head.id}
         version={editor.saved.version}
-        changes={facts.comparison ? changeSentences(facts.comparison) : []}
-        submit={actions.submit}
-        onSubmitted={() => {
-          toast(`r${head.number} waits for its release.`);
-          router.push(`/sequences/${page.sequenceId}`);
-        }}
+        actions={actions}
       />
-      {actions.offer ? (
-        <OfferDialog
-          open={open === 'offer'}
-          onClose={() => setOpen(null)}
-          revisionId={head.id}
-          revisionNumber={head.number}
-          offer={actions.offer}
-          onOffered={(station) => {
-            setOpen(null);
-            toast(`Station ${station} has r${head.number} on offer.`);
-            router.refresh();
-          }}
-        />
-      ) : null}
       <LeaveGuard unsaved={isKept && page.mayEdit} />
     </EditorContext>
   );
@@ -246,9 +195,4 @@ function dryRunBlocked(mayEdit: boolean, errors: number, unsaved: boolean): stri
   if (!mayEdit) return 'Only a draft that you may edit is run.';
   if (errors > 0) return 'Errors first.';
   return unsaved ? 'Not saved yet.' : null;
-}
-
-function whereAfter(steps: Draft['sequence']['steps'], stepId: string | null): string {
-  const at = steps.findIndex(({ id }) => id === stepId);
-  return at < 0 ? 'at the beginning' : `after step ${at + 1}, ${stepWord(steps[at]!)}`;
 }

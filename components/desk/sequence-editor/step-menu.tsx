@@ -32,27 +32,25 @@ export function StepMenu({ label, acts }: { label: string; acts: StepActs }) {
           <path d="M0 0h4v4H0zM7 0h4v4H7zM14 0h4v4h-4z" />
         </svg>
       </DropdownMenu.Trigger>
-      <DropdownMenu.Portal>
-        <DropdownMenu.Content
-          align="end"
-          // The entry moves the focus itself, such as into the name.
-          onCloseAutoFocus={(event) => {
-            if (document.activeElement instanceof HTMLInputElement) event.preventDefault();
-          }}
-          className="z-30 min-w-[230px] border-2 border-b-8 border-ink bg-sheet py-1"
-        >
-          {entries.map(({ act, words, keys }) => (
-            <DropdownMenu.Item
-              key={act}
-              onSelect={acts[act]}
-              className="flex min-h-9 cursor-pointer items-center justify-between gap-6 px-3 outline-none data-highlighted:bg-accent data-highlighted:text-on-accent max-sm:min-h-[46px]"
-            >
-              <span>{words}</span>
-              <span className="font-num text-cap">{keys}</span>
-            </DropdownMenu.Item>
-          ))}
-        </DropdownMenu.Content>
-      </DropdownMenu.Portal>
+      <DropdownMenu.Content
+        align="end"
+        // The entry moves the focus itself, such as into the name.
+        onCloseAutoFocus={(event) => {
+          if (document.activeElement instanceof HTMLInputElement) event.preventDefault();
+        }}
+        className="z-30 min-w-[230px] border-2 border-b-8 border-ink bg-sheet py-1"
+      >
+        {entries.map(({ act, words, keys }) => (
+          <DropdownMenu.Item
+            key={act}
+            onSelect={acts[act]}
+            className="flex min-h-9 cursor-pointer items-center justify-between gap-6 px-3 outline-none data-highlighted:bg-accent data-highlighted:text-on-accent max-sm:min-h-[46px]"
+          >
+            <span>{words}</span>
+            <span className="font-num text-cap">{keys}</span>
+          </DropdownMenu.Item>
+        ))}
+      </DropdownMenu.Content>
     </DropdownMenu.Root>
   );
 }

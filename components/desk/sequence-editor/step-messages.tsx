@@ -61,10 +61,11 @@ function UnreadLine({ step, blank, text }: { step: Step; blank: SentenceField; t
 
 export function ErrorLine({ sentence, children }: { sentence: string; children?: React.ReactNode }) {
   return (
-    <p className="flex flex-wrap items-baseline gap-x-2 text-cap font-bold text-reject">
+    <p className="flex items-baseline gap-2 text-cap font-bold text-reject">
       <VerdictMark shape="reject" size={14} />
-      <span>{sentence}</span>
-      {children}
+      <span>
+        {sentence} {children}
+      </span>
     </p>
   );
 }
@@ -102,10 +103,11 @@ function WarningLine({ finding }: { finding: SequenceFinding }) {
   const reason = draft.warningReasons[key] ?? '';
   return (
     <div className="grid gap-1 text-cap">
-      <p className="flex flex-wrap items-baseline gap-x-2">
+      <p className="flex items-baseline gap-2">
         <VerdictMark shape="check" size={14} />
-        <span>{finding.sentence}</span>
-        <Mend finding={finding} />
+        <span>
+          {finding.sentence} <Mend finding={finding} />
+        </span>
       </p>
       {locked ? (
         <p className="text-ink-2">{reason ? `Reason: ${reason}` : 'No reason given yet.'}</p>

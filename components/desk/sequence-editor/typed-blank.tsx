@@ -29,7 +29,7 @@ export function TypedBlank({ step, blank }: BlankProps) {
   const placeholder = blank.whenNull;
   const characters = Math.max(2, shown.length, shown === '' && placeholder ? placeholder.length : 0) + (words ? 1 : 0);
   return (
-    <label className={`inline-flex items-baseline ${blankFrame(state, blank.tone)}`}>
+    <label className={`inline-flex items-baseline focus-within:outline-3 focus-within:outline-offset-2 focus-within:outline-ink ${blankFrame(state, blank.tone)}`}>
       <input
         id={blankId(step.id, blank.field)}
         aria-label={blank.unit ? `${blank.label}, ${blank.unit}` : blank.label}
@@ -51,7 +51,7 @@ export function TypedBlank({ step, blank }: BlankProps) {
           endGroup();
         }}
         style={{ width: `${characters}ch` }}
-        className={`min-w-0 max-w-full bg-transparent font-bold outline-none placeholder:font-normal placeholder:text-ink-3 ${words ? '' : 'font-num'}`}
+        className={`min-w-0 max-w-full bg-transparent font-bold !outline-0 placeholder:font-normal placeholder:text-ink-3 ${words ? '' : 'font-num'}`}
       />
       {blank.unit ? <span className="ml-1 text-cap whitespace-nowrap text-ink-2">{blank.unit}</span> : null}
     </label>

@@ -4,6 +4,18 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { setFieldValue } from '@/lib/sequence/set-field-value';
 import { openEditor, sequence, storing, type Save } from './open-editor';
 
+// Predictions have tests of their own and take most of a second here.
+vi.mock('@/lib/prediction/predict-sequence', () => ({
+  predictSequence: () => ({
+    steps: [],
+    supply: [{ atMs: 0, volts: 0 }],
+    loadOn: [],
+    flips: [],
+    totalMs: 0,
+    personMs: 0,
+    ending: { verdict: 'pass', reason: null, stepId: null },
+  }),
+}));
 vi.mock('next/navigation', () => ({ useRouter: () => ({ push: vi.fn(), refresh: vi.fn() }) }));
 
 beforeEach(() => {
@@ -26,7 +38,7 @@ afterEach(() => {
 const find = <T extends HTMLElement>(selector: string, within: ParentNode = document) => [
   ...within.querySelectorAll<T>(selector),
 ];
-const rows = () => find('ol[aria-label=Steps] > li');
+const rows = () => find('ol[aria-label=Steps] > li > div');
 const labelOf = (each: Element) => each.getAttribute('aria-label') ?? '';
 const row = (name: RegExp) => rows().find((each) => name.test(labelOf(each)))!;
 const field = (step: RegExp, label: string) => find<HTMLInputElement>(`[aria-label="${label}"]`, row(step))[0]!;
