@@ -51,7 +51,11 @@ async function main(): Promise<void> {
 
   let handle: Handler = (_, response) =>
     void response.writeHead(503, { 'retry-after': '2' }).end('Sillwright is starting.');
-  const httpServer = createServer(settings, (request, response) => handle(request, response));
+  const httpServer = createServer(settings, (request, response) => {
+    // Whoever asks could write it themselves; then Next gives the address of the socket.
+    if (!settings.trustedProxy) delete request.headers['x-forwarded-for'];
+    handle(request, response);
+  });
   const app = next({
     dev: process.env.NODE_ENV !== 'production',
     hostname: settings.host,

@@ -1,3 +1,7 @@
+import { inSpokenUnit } from '@/lib/messages/spoken-unit';
+
+export { inSpokenUnit };
+
 /** Counts with a thin gap between thousands, as the design writes them: 1 360. */
 export const count = (value: number) => value.toLocaleString('en-GB').replaceAll(',', '\u202f');
 
@@ -7,23 +11,6 @@ export const percent = (share: number | null) => (share === null ? '–' : `${(s
 export const volts = (value: number) => value.toFixed(2);
 
 const rounded = (value: number, digits: number) => value.toFixed(digits).replace('-', '\u2212');
-
-/** A measured value in the unit that people say it in; the quantity's name carries the stored unit. */
-export function inSpokenUnit(
-  quantity: string,
-  value: number,
-): { text: string; unit: string; scale: number; digits: number } {
-  const [scale, digits, unit] = quantity.endsWith('-amps')
-    ? [1_000, 2, 'mA']
-    : quantity.endsWith('-seconds')
-      ? [1_000, 1, 'ms']
-      : quantity.endsWith('-milliohms')
-        ? [1, 0, '']
-        : quantity === 'trip-spread-volts' || quantity === 'drift-volts'
-          ? [1_000, 1, 'mV']
-          : [1, 2, 'V'];
-  return { text: rounded(value * scale, digits), unit, scale, digits };
-}
 
 /** "10.70–10.90", "≤ 0.50", "≥ 10", or "–" without limits; the stored unit turned into the spoken one. */
 export function limitsText(quantity: string, min: number | null, max: number | null): string {

@@ -1,32 +1,16 @@
 import en from '@/lib/messages/en.json';
 import type { DispositionKind, LabelState, LotState } from '@/lib/contracts/stored-states';
 import type { BoardStanding } from '@/lib/decision/board-standing';
-import type { LikelyCause, Measurement, NoVerdictReason, Verdict } from '@/lib/run/types';
+import type { LikelyCause, NoVerdictReason, Verdict } from '@/lib/run/types';
 
 /** What desk pages call things, in English; the bench speaks the operator's language. */
 
+export { quantityWords } from '@/lib/messages/quantity-words';
 export { rejectWords } from '@/lib/messages/reject-words';
 export const causeWords: Record<LikelyCause, string> = en.cause;
 export const noVerdictWords = (reason: NoVerdictReason): string => en.noVerdict[reason].title;
 
 export const verdictWords: Record<Verdict, string> = { pass: 'Passed', reject: 'Rejected', 'no-verdict': 'No verdict' };
-
-export const quantityWords: Record<Measurement['quantity'], string> = {
-  'contact-milliohms': 'Contact, milliohms',
-  'reference-volts': 'Reference',
-  'trip-volts': 'Trip',
-  'release-volts': 'Release',
-  'hysteresis-volts': 'Hysteresis',
-  'trip-spread-volts': 'Trip spread',
-  'output-high-drop-volts': 'High output, drop',
-  'output-low-volts': 'Low output',
-  'quiescent-amps': 'Quiescent current',
-  'ride-through-seconds': 'Ride-through',
-  'supply-amps': 'Supply current',
-  'operator-check': 'Operator check',
-  'channel-volts': 'Channel',
-  'drift-volts': 'Drift',
-};
 
 export const standingWords: Record<BoardStanding['kind'], string> = {
   'may-be-tested': 'To be tested',

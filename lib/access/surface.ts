@@ -1,6 +1,7 @@
 import type { Access } from './access';
 import { benchSurface } from './surface/bench';
 import { boardTypesSurface } from './surface/board-types';
+import { certificatesSurface } from './surface/certificates';
 import { decisionsSurface } from './surface/decisions';
 import { dryRunsSurface } from './surface/dry-runs';
 import { engineeringSurface } from './surface/engineering';
@@ -31,6 +32,7 @@ const areas: Surface[] = [
   offersSurface,
   qualitySurface,
   decisionsSurface,
+  certificatesSurface,
   trailSurface,
   sequencesSurface,
 ];

@@ -1,15 +1,8 @@
-import path from 'node:path';
 import PDFDocument from 'pdfkit';
 import type { LabelLayout } from '@/lib/barcode/label-layout';
+import { faces } from '../pdf/faces';
 
 const pointsPerMm = 72 / 25.4;
-// The variable cuts do not embed in a PDF; these are the static ones of the same faces.
-const fontFile = (face: string, weight: number) =>
-  path.join(process.cwd(), `node_modules/@fontsource/${face}/files/${face}-latin-${weight}-normal.woff`);
-const fonts = {
-  text: fontFile('atkinson-hyperlegible-next', 400),
-  'num-bold': fontFile('atkinson-hyperlegible-mono', 700),
-};
 
 /** One page of the label's own size, vector throughout. */
 export async function labelPdf(layout: LabelLayout, title: string): Promise<Buffer> {
@@ -27,7 +20,7 @@ export async function labelPdf(layout: LabelLayout, title: string): Promise<Buff
   page.path(layout.mark.path).lineWidth(layout.mark.strokeMm).stroke('#000');
   page.restore();
   for (const line of layout.texts) {
-    page.font(fonts[line.font]).fontSize(line.sizePt).fillColor('#000');
+    page.font(faces[line.font]).fontSize(line.sizePt).fillColor('#000');
     const shift = line.anchor === 'middle' ? page.widthOfString(line.text) / 2 : 0;
     page.text(line.text, line.xMm * pointsPerMm - shift, line.yMm * pointsPerMm, {
       lineBreak: false,

@@ -1,0 +1,5 @@
+import { UnknownCertificate } from '@/components/verify/unknown-certificate';
+
+export default function NoSuchCertificate() {
+  return <UnknownCertificate />;
+}
