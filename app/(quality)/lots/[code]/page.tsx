@@ -5,10 +5,12 @@ import { actorMay } from '@/lib/access/actor';
 import { kindsSignedBy } from '@/lib/access/disposition-kinds';
 import { lotViewSchema } from '@/lib/contracts/lot-view';
 import { authorise } from '@/server/auth/authorise';
+import { listCertificatesFor } from '@/server/operations/certificates/list-certificates';
 import { readLotPage } from '@/server/operations/lots/read-lot-page';
 import { readLotReview } from '@/server/operations/lots/read-lot-review';
 import { listReasonChoices } from '@/server/operations/reason-codes/list-reason-choices';
 import { signDispositionsAction } from '../../units/actions';
+import { issueCertificateAction, revokeCertificateAction } from '../../certificates/actions';
 import {
   changeLotAction,
   chooseBaselineAction,
@@ -37,10 +39,18 @@ export default async function LotPage({ params, searchParams }: Props) {
     listReasonChoices(),
   ]);
   if (!lot) notFound();
+  const certificates = await listCertificatesFor({ lotId: lot.id });
   return (
     <LotLive
       initial={lot}
       initialReview={review}
+      certificates={{
+        rows: certificates,
+        mayIssue: actorMay(actor, 'issue-certificates'),
+        signer: actor.name,
+        issue: issueCertificateAction,
+        revoke: revokeCertificateAction,
+      }}
       may={{ manage: actorMay(actor, 'manage-lots'), hold: actorMay(actor, 'hold-lots') }}
       actions={{
         change: changeLotAction,
