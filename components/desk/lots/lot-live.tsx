@@ -5,6 +5,7 @@ import { useState } from 'react';
 import type { LotPage } from '@/lib/contracts/lot-page';
 import type { LotReview } from '@/lib/contracts/lot-review';
 import { lotViewQuery } from '@/lib/contracts/lot-view';
+import { CertificatesSection, type CertificatesGiven } from '../certificates/certificates-section';
 import { fetchJson } from '../fetch-json';
 import { StaleNote } from '../stale-note';
 import { LotBoardsSection } from './lot-boards-section';
@@ -22,13 +23,14 @@ const refreshMs = 2_500;
 interface LotLiveProps {
   initial: LotPage;
   initialReview: LotReview | null;
+  certificates: CertificatesGiven;
   may: LotSectionProps['may'];
   actions: LotSectionProps['actions'];
   deciding: LotSectionProps['deciding'];
 }
 
 /** The page of a lot, fetched again every few seconds while the lot is in production. */
-export function LotLive({ initial, initialReview, may, actions, deciding }: LotLiveProps) {
+export function LotLive({ initial, initialReview, certificates, may, actions, deciding }: LotLiveProps) {
   const [view, changeView] = useLotView();
   const query = lotViewQuery(view);
   const [firstQuery] = useState(query);
@@ -72,9 +74,21 @@ export function LotLive({ initial, initialReview, may, actions, deciding }: LotL
       {lot.state !== 'closed' ? <StaleNote updatedAt={page.dataUpdatedAt} failing={page.isError} /> : null}
       <LotRejectsSection {...section} />
       {review.data ? <LotFiguresSection {...section} review={review.data} /> : null}
+      <CertificatesSection
+        {...certificates}
+        subject={{ lotId: lot.id }}
+        what={`lot ${lot.code}`}
+        unavailable={unavailableFor(lot)}
+      />
       <LotRevisionSection {...section} />
       <LotComponentsSection {...section} />
       <LotBoardsSection {...section} />
     </>
   );
+}
+
+/** Why the lot gets no certificate now; what the server alone knows, it says when asked. */
+function unavailableFor({ hold, state, summary }: LotPage): string | null {
+  if (hold) return 'The lot is on hold.';
+  return state !== 'closed' && summary.tested < summary.size ? 'Boards of it are still to be tested.' : null;
 }

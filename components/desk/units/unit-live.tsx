@@ -13,6 +13,7 @@ import type { UnitPage } from '@/lib/contracts/unit-page';
 import type { Deciding } from '../decisions/deciding';
 import { DispositionDialog } from '../decisions/disposition-dialog';
 import { UnitDecisions, type DecisionViewer } from '../decisions/unit-decisions';
+import { CertificatesSection, type CertificatesGiven } from '../certificates/certificates-section';
 import { fetchJson } from '../fetch-json';
 import { standingWords } from '../words';
 import { RetestDialog } from './retest-dialog';
@@ -24,6 +25,7 @@ import { UnitRails } from './unit-rails';
 interface UnitLiveProps {
   initial: UnitPage;
   viewer: DecisionViewer;
+  certificates: CertificatesGiven;
   may: { print: boolean; order: boolean };
   deciding: Deciding;
   actions: Record<'print' | 'order' | 'complete', (input: unknown) => Promise<Outcome>>;
@@ -36,7 +38,7 @@ const moves = (unit: UnitPage) =>
   unit.labels[0]?.state === 'failed';
 
 /** Everything on record of one board; fetched again while it is in test or its label is on the way. */
-export function UnitLive({ initial, viewer, may, deciding, actions }: UnitLiveProps) {
+export function UnitLive({ initial, viewer, certificates, may, deciding, actions }: UnitLiveProps) {
   const toast = useToast();
   const query = useQuery({
     queryKey: ['unit', initial.serial],
@@ -114,6 +116,18 @@ export function UnitLive({ initial, viewer, may, deciding, actions }: UnitLivePr
           ) : (
             <Runs unit={unit} />
           )}
+          <CertificatesSection
+            {...certificates}
+            subject={{ unitId: unit.id }}
+            what={`board ${unit.serial.slice(-5)}`}
+            unavailable={
+              unit.lotHeld
+                ? 'Its lot is on hold.'
+                : kind === 'passed' || kind === 'used-as-is'
+                  ? null
+                  : 'Its newest result is not a pass.'
+            }
+          />
         </div>
         <aside>
           <h2 className="sw-screen-only mb-1.5 font-bold">Label, 40 × 20 mm</h2>
