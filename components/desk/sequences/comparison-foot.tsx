@@ -2,6 +2,8 @@ import type { ReactNode } from 'react';
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import type { ComparisonPage } from '@/lib/contracts/sequence-pages';
 import type { RevisionHead } from '@/lib/contracts/sequence-draft';
+import { checkSequence } from '@/lib/sequence/check-sequence';
+import { findingKey } from '@/lib/sequence/finding';
 import { Time } from '../time';
 import { KeptDryRun } from './kept-dry-run';
 
@@ -34,15 +36,33 @@ export function ComparisonFoot({ page }: { page: ComparisonPage }) {
             Sent back by {head.sentBackBy}: “{head.sentBackReason}”
           </p>
         ) : null}
-        {Object.entries(head.warningReasons).map(([key, reason]) => (
-          <p key={key}>A warning accepted: “{reason}”</p>
-        ))}
+        <Warnings page={page} />
       </Column>
       <Column title="Signatures, two needed">
         <Signatures head={head} mayRelease={mayRelease} />
       </Column>
     </div>
   );
+}
+
+/** What the rules say of the later one, with the reason that was given for it. */
+function Warnings({ page: { b, boardType } }: { page: ComparisonPage }) {
+  return checkSequence(b.sequence, boardType).map((finding) => {
+    const reason = b.head.warningReasons[findingKey(finding)];
+    return (
+      <p key={findingKey(finding)} className="flex items-start gap-2">
+        <VerdictMark shape={finding.severity === 'error' ? 'reject' : 'check'} size={15} />
+        <span>
+          {finding.sentence}{' '}
+          {finding.severity === 'error'
+            ? 'It cannot be released.'
+            : reason
+              ? `Accepted: “${reason}”`
+              : 'No reason yet.'}
+        </span>
+      </p>
+    );
+  });
 }
 
 function Column({ title, children }: { title: string; children: ReactNode }) {

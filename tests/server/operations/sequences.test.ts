@@ -2,6 +2,8 @@ import { hash } from '@node-rs/argon2';
 import { and, eq } from 'drizzle-orm';
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { postgresErrorOf, sqlStates } from '@/db/errors';
+import { findBenchLot } from '@/db/queries/station-lots';
+import type { BenchRow } from '@/db/queries/station-benches';
 import { insertLot } from '@/db/queries/lots';
 import { listLotMoves } from '@/db/queries/lot-moves';
 import { findReleased, findRevision, findStandingDraft } from '@/db/queries/sequence-revisions';
@@ -18,10 +20,13 @@ import { cb1210 } from '@/db/seed/board-types';
 import { sequences as seeded } from '@/db/seed/sequences';
 import type { Actor } from '@/lib/access/actor';
 import type { Role } from '@/lib/access/roles';
+import type { BenchPlace } from '@/lib/bench/types';
 import type { Outcome } from '@/lib/contracts/outcome';
 import { checkSequence } from '@/lib/sequence/check-sequence';
+import { findingKey } from '@/lib/sequence/finding';
 import type { RunPlan } from '@/lib/run/types';
 import type { Sequence, Step } from '@/lib/sequence/step';
+import { takeLot } from '@/server/operations/bench/take-lot';
 import { beginDraft } from '@/server/operations/engineering/sequences/begin-draft';
 import { discardDraft } from '@/server/operations/engineering/sequences/discard-draft';
 import { renewPresence } from '@/server/operations/engineering/sequences/draft-presence';
@@ -210,6 +215,21 @@ describe('submitting', () => {
     expect(await submit()).toMatchObject(refused('sequence-has-errors'));
   });
 
+  test('needs a reason for every warning, which is kept; reasons of warnings that are gone are not', async () => {
+    const quick: Sequence = {
+      ...whole,
+      steps: whole.steps.map((step): Step => (step.kind === 'find-points' ? { ...step, settleMs: 30 } : step)),
+    };
+    const [warning] = checkSequence(quick, cb1210);
+    const saved = (version: number, warningReasons: Record<string, string>) =>
+      saveDraft(writer, { revisionId: draftId, version, sequence: quick, warningReasons });
+    valueOf(await saved(1, {}));
+    expect(await submit()).toMatchObject(refused('warning-needs-reason'));
+    valueOf(await saved(2, { [findingKey(warning!)]: 'Measured on S1.', 'gone:s1:': 'Old.' }));
+    valueOf(await submit());
+    expect((await rowOf(draftId)).warningReasons).toEqual({ [findingKey(warning!)]: 'Measured on S1.' });
+  });
+
   test('is refused for a version that was saved over, and when nothing differs from the revision in use', async () => {
     const stale = { revisionId: draftId, version: 1, note: 'Tighter trim.' };
     valueOf(await save(third, withTolerance(0.018)));
@@ -387,6 +407,18 @@ describe('a lot', () => {
     expect((await trailOf(lot.id)).at(-1)).toMatchObject({ action: 'lot.moved', reason: 'Customer asks.' });
     expect(await move()).toMatchObject(refused('revision-not-newer'));
     expect(await move(first)).toMatchObject(refused('revision-not-newer'));
+  });
+
+  test('whose revision is withdrawn is refused at the bench with the reason, until it is moved', async () => {
+    const take = () =>
+      takeLot(open.db, {} as BenchRow, { kind: 'lot', by: { lotId: lot.id } }, { offerId: null } as BenchPlace);
+    valueOf(await withdrawRevision(quality, { revisionId: first, reason: 'Wrong window.', password }));
+    expect(await take()).toEqual({
+      ok: false,
+      refusal: { code: 'sequence-withdrawn', params: { revision: 'r1', reason: 'Wrong window.' } },
+    });
+    valueOf(await move());
+    expect(await findBenchLot(open.db, { lotId: lot.id })).toMatchObject({ sequenceStatus: 'released' });
   });
 
   test('is not moved while a board is in test, when closed, nor to what is not in use or of another sequence', async () => {

@@ -8,7 +8,7 @@ import type { submitRevisionSchema } from '@/lib/contracts/sequence-draft';
 import { changeSentences } from '@/lib/sequence/change-sentences';
 import { compareSequences } from '@/lib/sequence/compare-sequences';
 import { database } from '@/server/postgres';
-import { releaseBlock } from './release-blocks';
+import { releaseBlock, standingReasons } from './release-blocks';
 
 /**
  * Asks for the release of a draft, as it was seen. Codes: revision-unknown, not-a-draft, draft-changed, nothing-changed,
@@ -32,9 +32,11 @@ export async function submitRevision(
       return refusal('nothing-changed', `Nothing differs from r${inUse!.number}, which is in use. Change it first.`);
     const blocked = await releaseBlock(tx, row);
     if (blocked) return blocked;
+    const warningReasons = await standingReasons(tx, row);
     await updateRevision(tx, revisionId, {
       status: 'submitted',
       note,
+      warningReasons,
       submittedBy: actor.accountId,
       submittedAt: at,
       sentBackBy: null,
@@ -50,7 +52,7 @@ export async function submitRevision(
         revision: `r${number}`,
         version,
         changes: comparison ? changeSentences(comparison) : [],
-        warningReasons: row.warningReasons,
+        warningReasons,
         sequence: row.data,
       },
       reason: note,
