@@ -63,17 +63,17 @@ function fixture(): string {
     [330, 250, 'supply +'],
     [330, 430, 'supply −'],
     [330, 490, 'supply − sense'],
-    [820, 230, '101 supply'],
-    [820, 340, '102 output'],
-    [820, 450, '103 reference'],
+    [640, 340, '101 supply'],
+    [640, 400, '102 output'],
+    [640, 460, '103 reference'],
   ] as const;
   return `<svg xmlns="http://www.w3.org/2000/svg" width="1200" height="760" viewBox="0 0 1200 760">
     <rect width="1200" height="760" fill="#fff"/>
     <g fill="none" stroke="#17191e" stroke-width="4"><rect x="120" y="80" width="920" height="560"/><rect x="280" y="140" width="600" height="420" stroke-dasharray="14 10"/><circle cx="690" cy="240" r="34"/><path d="M690 190v100M640 240h100M120 690h920M120 676v28M1040 676v28M1080 80v560M1066 80h28M1066 640h28"/><path d="M160 80V50h120v30M880 80V50h120v30"/></g>
     <g fill="#17191e" font-family="sans-serif" font-size="24">
       ${nails.map(([x, y, name]) => `<circle cx="${x}" cy="${y}" r="9"/><text x="${x + 22}" y="${y + 8}">${name}</text>`).join('')}
-      <text x="560" y="320">hole in the lid for the screw</text><text x="300" y="600">board CB1210, parts up</text>
-      <text x="540" y="724">230 mm</text><text x="1092" y="370">140 mm</text><text x="140" y="740">Fixture of CB1210, lid seen from above. Nails pass through the base.</text>
+      <text x="560" y="190">hole in the lid for the screw</text><text x="300" y="600">board CB1210, parts up</text>
+      <text x="540" y="672">230 mm</text><text x="1092" y="370">140 mm</text><text x="140" y="738">Fixture of CB1210, lid seen from above. Nails pass through the base.</text>
     </g>
   </svg>`;
 }

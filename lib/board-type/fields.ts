@@ -155,5 +155,5 @@ export const degreesATurn = 360;
 export const mostAttemptsField: NumberField = {
   path: 'mostAttempts',
   label: 'Most attempts',
-  style: { unit: 'attempts', bareExponent: 0, shownExponents: [0] },
+  style: { unit: 'times', bareExponent: 0, shownExponents: [0] },
 };

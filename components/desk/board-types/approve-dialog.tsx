@@ -14,6 +14,7 @@ import { SignatureField } from '../signature-field';
 import { useActionForm } from '../use-action-form';
 import { ChangeList } from './change-list';
 import { Misfits } from './misfits';
+import { Misses } from './misses';
 
 interface ApproveDialogProps {
   revisionId: string;
@@ -22,6 +23,7 @@ interface ApproveDialogProps {
   signer: string;
   note: string;
   changes: readonly BoardTypeChange[];
+  misses: readonly string[];
   misfits: readonly SequenceMisfit[];
   onClose: () => void;
   approve: (input: unknown) => Promise<Outcome>;
@@ -30,7 +32,7 @@ interface ApproveDialogProps {
 
 /** What is signed, what it means, and the password. */
 export function ApproveDialog(props: ApproveDialogProps) {
-  const { revisionId, version, number, signer, note, changes, misfits, onClose, approve, onDone } = props;
+  const { revisionId, version, number, signer, note, changes, misses, misfits, onClose, approve, onDone } = props;
   const form = useForm<z.input<typeof approveLimitsSchema>, unknown, z.infer<typeof approveLimitsSchema>>({
     resolver: zodResolver(approveLimitsSchema),
     defaultValues: { revisionId, version, meaning: 'specification', password: '' },
@@ -57,6 +59,7 @@ export function ApproveDialog(props: ApproveDialogProps) {
       <form noValidate className="grid gap-4" onSubmit={(event) => event.preventDefault()}>
         <blockquote className="border-l-4 border-rule pl-3">{note}</blockquote>
         <ChangeList changes={changes} />
+        <Misses misses={misses} ask="The note should say why they stand." />
         <Misfits misfits={misfits} />
         <ChoiceField
           {...form.register('meaning')}

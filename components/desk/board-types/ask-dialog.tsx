@@ -10,6 +10,7 @@ import type { Outcome } from '@/lib/contracts/outcome';
 import { FormProblem } from '../form-problem';
 import { useActionForm } from '../use-action-form';
 import { Misfits } from './misfits';
+import { Misses } from './misses';
 
 interface AskDialogProps {
   revisionId: string;
@@ -45,14 +46,7 @@ export function AskDialog({ revisionId, version, number, misses, misfits, onClos
         </>
       }
     >
-      {misses.length > 0 ? (
-        <div className="border-l-[10px] border-attn bg-attn-wash px-3 py-2">
-          <p className="font-bold">Not every board can meet these limits. Say why they stand.</p>
-          {misses.map((sentence) => (
-            <p key={sentence}>{sentence}</p>
-          ))}
-        </div>
-      ) : null}
+      <Misses misses={misses} ask="Say why they stand." />
       <Misfits misfits={misfits} />
       <TextAreaField
         {...form.register('note')}

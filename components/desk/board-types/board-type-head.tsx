@@ -1,5 +1,6 @@
 'use client';
 
+import Link from 'next/link';
 import type { ReactNode } from 'react';
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import type { BoardTypePage } from '@/lib/contracts/board-type-revision';
@@ -45,7 +46,10 @@ export function BoardTypeHead({ page: { code, shown, inUse }, name, errors, acti
               since <Time iso={inUse.approvedAtIso} format="day" />
             </>
           ) : null}
-          .
+          .{' '}
+          <Link className="sw-link" href={`/board-types/${encodeURIComponent(code)}/hold-rules`}>
+            What holds its lots
+          </Link>
         </p>
       </div>
       <div className="flex flex-wrap items-center gap-3">

@@ -158,6 +158,7 @@ export function DraftActions({ page, signer, draft, misses, actions }: DraftActi
           signer={signer}
           note={shown.note}
           changes={before ? compareBoardTypes(before.specification, shown.specification) : []}
+          misses={misses}
           misfits={page.misfits}
           onClose={close}
           approve={actions.approve}

@@ -6,8 +6,11 @@ import { TextField } from '@/components/ui/text-field';
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import { mostAttemptsField } from '@/lib/board-type/fields';
 import { readSerialPattern } from '@/lib/board-type/serial-pattern';
-import { fieldId, useBoardTypeForm } from './form-context';
+import { useBoardTypeForm } from './form-context';
 import { QuantityRow } from './quantity-row';
+
+/** A field that can only be read has no frame. */
+const plain = 'border-transparent! bg-transparent! px-0!';
 
 /** The name, the pattern of serial numbers with what it matches in words, and a serial to try it on. */
 export function SerialSection() {
@@ -25,10 +28,10 @@ export function SerialSection() {
     <Section title="Name, serial numbers and attempts">
       <div className="grid max-w-2xl gap-4">
         <TextField
-          data-field={fieldId('name')}
           label="Name"
           value={form.name}
           readOnly={readOnly}
+          className={readOnly ? plain : ''}
           onChange={(event) => change({ name: event.target.value })}
           {...wrong('name')}
         />
@@ -37,6 +40,7 @@ export function SerialSection() {
           mono
           value={form.serialPattern}
           readOnly={readOnly}
+          className={readOnly ? plain : ''}
           onChange={(event) => change({ serialPattern: event.target.value })}
           hint={pattern.ok ? `${pattern.words}, such as ${pattern.example}.` : undefined}
           {...wrong('serialPattern')}
