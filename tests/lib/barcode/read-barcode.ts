@@ -12,7 +12,16 @@ const wasm = path.join(
 prepareZXingModule({ overrides: { wasmBinary: new Uint8Array(readFileSync(wasm)).buffer } });
 
 /** Texts of all Code 128 barcodes in a picture (PNG, SVG or raw pixels), as an independent decoder (ZXing) reads them. */
-export async function readCode128(picture: Sharp): Promise<string[]> {
+export function readCode128(picture: Sharp): Promise<string[]> {
+  return read(picture, 'Code128');
+}
+
+/** The same for QR codes. */
+export function readQrCodes(picture: Sharp): Promise<string[]> {
+  return read(picture, 'QRCode');
+}
+
+async function read(picture: Sharp, format: 'Code128' | 'QRCode'): Promise<string[]> {
   const { data, info } = await picture
     .flatten({ background: '#fff' })
     .ensureAlpha()
@@ -24,6 +33,6 @@ export async function readCode128(picture: Sharp): Promise<string[]> {
     height: info.height,
     colorSpace: 'srgb' as const,
   };
-  const found = await readBarcodes(pixels as ImageData, { formats: ['Code128'], tryHarder: true });
+  const found = await readBarcodes(pixels as ImageData, { formats: [format], tryHarder: true });
   return found.filter((barcode) => barcode.isValid).map((barcode) => barcode.text);
 }
