@@ -10,6 +10,9 @@ import { keepText, takeKeptTexts } from './kept-text';
 import { useAutosave } from './use-autosave';
 import { usePresence } from './use-presence';
 
+/** Until what another saved is here. */
+const againMs = 3_000;
+
 interface DraftJob {
   page: DraftPage;
   selectedId: string | null;
@@ -48,7 +51,10 @@ export function useDraft({ page, selectedId, save }: DraftJob) {
   const { sync } = saving;
   const newer = presence !== null && presence.version > saved.version;
   useEffect(() => {
-    if (newer && mayEdit) void sync();
+    if (!newer || !mayEdit) return;
+    void sync();
+    const again = setInterval(() => void sync(), againMs);
+    return () => clearInterval(again);
   }, [newer, mayEdit, sync]);
 
   return { editor, dispatch, saving, presence, isKept };
