@@ -33,8 +33,44 @@ export async function findRuleSet(
   return row ?? null;
 }
 
+/** Every change of a board type's rules, newest first. */
+export function listRuleSets(db: Reader, boardTypeId: string) {
+  return db
+    .select({
+      rules: holdRuleSets.rules,
+      reason: holdRuleSets.reason,
+      setBy: accounts.name,
+      setAt: holdRuleSets.setAt,
+    })
+    .from(holdRuleSets)
+    .innerJoin(accounts, eq(accounts.id, holdRuleSets.setBy))
+    .where(eq(holdRuleSets.boardTypeId, boardTypeId))
+    .orderBy(desc(holdRuleSets.setAt));
+}
+
 export async function insertRuleSet(tx: Transaction, values: typeof holdRuleSets.$inferInsert): Promise<void> {
   await tx.insert(holdRuleSets).values(values);
+}
+
+/** When the board at this place in test order, from 1, got its first verdict; null: none did yet. */
+export async function findFirstVerdictAt(db: Reader, lotId: string, place: number): Promise<Date | null> {
+  const { rows } = await db.execute<{ at: string }>(sql`
+    select ended_at as at from (
+      select distinct on (unit_id) ended_at from runs
+      where lot_id = ${lotId} and kind = 'production' and verdict in ('pass', 'reject')
+      order by unit_id, attempt) firsts
+    order by ended_at offset ${place - 1} limit 1`);
+  return rows[0] ? new Date(rows[0].at) : null;
+}
+
+/** Stations that passed boards of the lot. */
+export async function listPassingStations(db: Reader, lotId: string): Promise<{ id: string; code: string }[]> {
+  return db
+    .selectDistinct({ id: stations.id, code: stations.code })
+    .from(runs)
+    .innerJoin(stations, eq(stations.id, runs.stationId))
+    .where(and(eq(runs.lotId, lotId), eq(runs.kind, 'production'), eq(runs.verdict, 'pass')))
+    .orderBy(stations.code);
 }
 
 /** When the lot's last hold was released; null: it never was on hold, or still is on its first. */
@@ -108,17 +144,12 @@ export async function closeHold(
   await tx.update(lotHolds).set(release).where(eq(lotHolds.id, holdId));
 }
 
-/** Every hold of a lot with its release and signature, newest first. */
-export async function listHolds(db: Reader, lotId: string) {
-  const raiser = sql<string | null>`(select name from accounts where id = ${lotHolds.raisedBy})`;
+/** Every hold of a lot with the signature of its release, newest first. */
+export function listHolds(db: Reader, lotId: string) {
   return db
-    .select({
-      hold: lotHolds,
-      raisedBy: raiser,
-      releasedBy: signatures.name,
-      meaning: signatures.meaning,
-    })
+    .select({ hold: lotHolds, raisedByName: accounts.name, signature: signatures })
     .from(lotHolds)
+    .leftJoin(accounts, eq(accounts.id, lotHolds.raisedBy))
     .leftJoin(signatures, eq(signatures.id, lotHolds.signatureId))
     .where(eq(lotHolds.lotId, lotId))
     .orderBy(desc(lotHolds.raisedAt));

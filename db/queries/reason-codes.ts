@@ -65,3 +65,8 @@ export async function updateReasonCode(
 ): Promise<void> {
   await tx.update(reasonCodes).set(change).where(eq(reasonCodes.id, id));
 }
+
+/** What was merged into one reason now counts as another. */
+export async function updateMergedInto(tx: Transaction, fromId: string, toId: string): Promise<void> {
+  await tx.update(reasonCodes).set({ mergedIntoId: toId }).where(eq(reasonCodes.mergedIntoId, fromId));
+}

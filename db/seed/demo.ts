@@ -9,6 +9,7 @@ import { seedFinishedLot } from './finished-lot';
 import { demoAccounts, demoMailDomain } from './demo-accounts';
 import { seedPeople, seedTrainings } from './people';
 import { seedProducts } from './products';
+import { seedReasonCodes } from './reason-codes';
 
 /** Whether nobody has an account yet: nothing was seeded and no administrator made. */
 export async function isEmpty(db: Database): Promise<boolean> {
@@ -36,6 +37,7 @@ export async function seedDemo(db: Database, now = new Date()): Promise<boolean>
     await seedBenches(tx, people, products, now);
     await seedLots(tx, people, products, now);
     await seedFinishedLot(tx, people, products, now);
+    await seedReasonCodes(tx, people, now);
     await insertTrail(tx, null, { action: 'demo.seeded', entity: 'database', entityId: 'demo' });
     return true;
   });

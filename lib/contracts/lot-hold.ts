@@ -28,3 +28,22 @@ export type HoldDetail =
   | { cause: 'yield-floor'; passed: number; boards: number; least: number }
   | { cause: 'same-reason'; reason: string; times: number; stationCode: string | null }
   | { cause: 'failed-check'; stationCode: string; lastGoodCheckIso: string | null; suspectBoards: number };
+
+const reason = z
+  .string()
+  .trim()
+  .min(1, { error: 'Enter the reason.' })
+  .max(300, { error: 'Use at most 300 characters.' });
+
+/** What the action takes. `code` is the board type's. */
+export const setHoldRulesSchema = z.object({ code: z.string().min(1).max(40), rules: holdRuleSetSchema, reason });
+export type SetHoldRules = z.infer<typeof setHoldRulesSchema>;
+
+/** Rules as they stood and stand, newest first. */
+export interface HoldRulesPage {
+  code: string;
+  name: string;
+  rules: HoldRuleSet;
+  /** Empty: nobody has set any, the usual ones count. */
+  history: { setBy: string; setIso: string; reason: string }[];
+}

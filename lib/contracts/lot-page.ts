@@ -1,6 +1,7 @@
 import type { BoardStanding } from '../decision/board-standing';
 import type { RejectReason, Verdict } from '../run/types';
 import type { LotSummary } from '../statistics/lot-summary';
+import type { SuspectBoards } from './lot-holds-page';
 import type { LabelState, LotState, SequenceRevisionState } from './stored-states';
 
 /** A value against the limits it was judged by. Volts. */
@@ -68,8 +69,13 @@ export interface LotPage {
   createdAtIso: string;
   createdByName: string;
   closedAtIso: string | null;
-  /** `byName` null: held by rule. */
-  hold: { sinceIso: string; byName: string | null; reason: string } | null;
+  /** `byName` null: held by rule. `suspects`: boards that passed under what the hold is about. */
+  hold: {
+    sinceIso: string;
+    byName: string | null;
+    reason: string;
+    suspects: { boards: number; since: SuspectBoards['since'] };
+  } | null;
   stationCodes: string[];
   firstTestIso: string | null;
   lastTestIso: string | null;

@@ -26,7 +26,8 @@ export const newReasonCodeSchema = z.object({
 });
 export type NewReasonCodeForm = z.infer<typeof newReasonCodeSchema>;
 
-export const retireReasonCodeSchema = z.object({ id: z.uuid() });
+/** `retired` false brings it back. */
+export const retireReasonCodeSchema = z.object({ id: z.uuid(), retired: z.boolean() });
 
 export const mergeReasonCodeSchema = z.object({
   id: z.uuid(),

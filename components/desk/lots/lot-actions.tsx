@@ -8,6 +8,7 @@ import { useToast } from '@/components/ui/toast';
 import type { LotChange } from '@/lib/contracts/lot';
 import type { LotPage } from '@/lib/contracts/lot-page';
 import type { Outcome } from '@/lib/contracts/outcome';
+import { count } from '../numbers';
 import { ReasonDialog } from '../reason-dialog';
 import { Time } from '../time';
 
@@ -99,20 +100,37 @@ export function LotHold({ lot, mayRelease, actions, onChanged }: LotActionsProps
   const toast = useToast();
   const [asking, setAsking] = useState(false);
   if (!lot.hold) return null;
-  const { reason, byName, sinceIso } = lot.hold;
+  const { reason, byName, sinceIso, suspects } = lot.hold;
+  const address = `/lots/${encodeURIComponent(lot.code)}/holds`;
   const left = lot.summary.size - lot.summary.tested;
   return (
     <HoldPanel
       title="On hold"
       actions={
-        mayRelease ? (
-          <Button kind="filled" onClick={() => setAsking(true)}>
-            Release the hold
-          </Button>
-        ) : null
+        <>
+          {mayRelease ? (
+            <Button kind="filled" onClick={() => setAsking(true)}>
+              Release the hold
+            </Button>
+          ) : null}
+          <ButtonLink kind="link" href={address}>
+            Suspect boards and holds before
+          </ButtonLink>
+          {byName === null ? (
+            <ButtonLink kind="link" href={`/board-types/${encodeURIComponent(lot.boardTypeCode)}/hold-rules`}>
+              The rules
+            </ButtonLink>
+          ) : null}
+        </>
       }
     >
-      {reason} Held by {byName ?? 'rule'}, <Time iso={sinceIso} />.
+      {reason} Held by {byName ?? 'rule'}, <Time iso={sinceIso} />.{' '}
+      {suspects.boards > 0 ? (
+        <>
+          <b>{count(suspects.boards)}</b> {suspects.boards === 1 ? 'board is' : 'boards are'} suspect, passed{' '}
+          {suspects.since === 'run' ? 'since the run began' : 'since the last good daily check'}.
+        </>
+      ) : null}
       <ReasonDialog
         open={asking}
         onClose={() => setAsking(false)}

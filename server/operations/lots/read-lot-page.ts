@@ -7,6 +7,7 @@ import type { LotPage } from '@/lib/contracts/lot-page';
 import { boardsPerPage, lotViewSchema, type LotView } from '@/lib/contracts/lot-view';
 import { summariseLot } from '@/lib/statistics/lot-summary';
 import { database } from '@/server/postgres';
+import { suspectBoards } from '../holds/suspect-boards';
 import { readLotRevision } from './read-lot-revision';
 import { boardRow, isChosen, sortsByNewestRun, sortRows } from './lot-board-rows';
 
@@ -17,11 +18,12 @@ export async function readLotPage(code: string, view: BoardsView = lotViewSchema
   const db = database();
   const lot = await findLotByCode(db, code.toUpperCase());
   if (!lot) return null;
-  const [records, components, span, revision] = await Promise.all([
+  const [records, components, span, revision, suspects] = await Promise.all([
     listUnitRecordsOfLot(db, lot.id),
     listComponentBatches(db, lot.id),
     getLotSpan(db, lot.id),
     readLotRevision(lot.id, lot.sequenceRevisionId),
+    lot.heldAt ? suspectBoards(db, lot.id) : null,
   ]);
   const chosen = records.filter((record) => isChosen(record, view.boards));
   const rowsOf = async (shown: typeof records) => {
@@ -54,7 +56,12 @@ export async function readLotPage(code: string, view: BoardsView = lotViewSchema
     hold:
       lot.heldAt === null
         ? null
-        : { sinceIso: lot.heldAt.toISOString(), byName: lot.heldByName, reason: lot.holdReason ?? '' },
+        : {
+            sinceIso: lot.heldAt.toISOString(),
+            byName: lot.heldByName,
+            reason: lot.holdReason ?? '',
+            suspects: { boards: suspects?.boards.length ?? 0, since: suspects?.since ?? 'good-check' },
+          },
     stationCodes: span.stationCodes,
     firstTestIso: span.firstAt?.toISOString() ?? null,
     lastTestIso: span.lastAt?.toISOString() ?? null,

@@ -8,12 +8,11 @@ import {
   listRunsOfUnit,
   listTraces,
 } from '@/db/queries/units';
-import type { Signature } from '@/db/queries/signatures';
-import type { UnitPage, UnitSignature } from '@/lib/contracts/unit-page';
+import type { UnitPage } from '@/lib/contracts/unit-page';
 import { boardStanding } from '@/lib/decision/board-standing';
 import { decidableKinds } from '@/lib/decision/disposition-problem';
 import { database } from '@/server/postgres';
-import { signatureHolds } from '../signatures/record-signature';
+import { shownSignature } from '../signatures/shown-signature';
 import { unitRunOf } from './unit-run';
 
 /** Everything on record of one board, or null when there is none of that serial number. */
@@ -55,16 +54,9 @@ export async function readUnitPage(serial: string): Promise<UnitPage | null> {
       reason: row.reason,
       signedByName: row.signedByName,
       signedIso: row.signedAt.toISOString(),
-      signatures: row.signatures.map(unitSignature),
+      signatures: row.signatures.map(shownSignature),
     })),
     retestOrders: retestOrders.map(({ signedAt, ...order }) => ({ ...order, signedIso: signedAt.toISOString() })),
     label: passed ? await labelledPoints(db, passed.run.id) : null,
   };
-}
-
-function unitSignature(signature: Signature): UnitSignature {
-  const { accountId, name, signedAt, meaning, digest, content } = signature;
-  const { sides = [], serials = [] } = content as Partial<Pick<UnitSignature, 'sides' | 'serials'>>;
-  const signedIso = signedAt.toISOString();
-  return { accountId, name, signedIso, meaning, digest, holds: signatureHolds(signature), sides, serials };
 }

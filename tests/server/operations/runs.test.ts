@@ -383,7 +383,7 @@ describe('a hold by rule', () => {
     await reject(34);
     expect((await held()).heldAt).toBeNull();
     const [released] = await listHolds(open.db, lot.id);
-    expect(released).toMatchObject({ releasedBy: 'A. Boyle', hold: { releaseReason: release.reason } });
+    expect(released).toMatchObject({ signature: { name: 'A. Boyle' }, hold: { releaseReason: release.reason } });
     await expect(
       open.db.update(lotHolds).set({ reason: 'x' }).where(eq(lotHolds.id, released!.hold.id)),
     ).rejects.toMatchObject({ cause: { code: 'SW002' } });
