@@ -50,7 +50,7 @@ export function submitBlocked(state: {
   unsaved: boolean;
 }): string | null {
   if (state.conflicts > 0) return `${many(state.conflicts, 'choice', 'choices')} between two texts to make.`;
-  if (state.errors > 0) return `${errorCount(state.errors)}.`;
+  if (state.errors > 0) return 'Errors first.';
   if (state.unreasoned > 0) return `${many(state.unreasoned, 'warning needs', 'warnings need')} a reason.`;
   return state.unsaved ? 'Not saved yet.' : null;
 }

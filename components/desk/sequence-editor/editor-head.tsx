@@ -70,7 +70,7 @@ export function EditorHead(props: EditorHeadProps) {
         ) : null}
         {onTry ? <Button onClick={onTry}>Try on a station…</Button> : null}
         {onSubmit ? (
-          <Button onClick={onSubmit} unavailable={errorWords && submitBlocked ? 'Errors first.' : submitBlocked}>
+          <Button onClick={onSubmit} unavailable={submitBlocked}>
             Submit r{head.number}…
           </Button>
         ) : null}

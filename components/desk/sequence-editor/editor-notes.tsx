@@ -18,7 +18,9 @@ export function EditorNotes({ others, steps, lostAt }: EditorNotesProps) {
   const each = lostAt?.values().next().value?.boardsASquare;
   return (
     <div className="grid gap-2 pb-2 empty:hidden">
-      {others.length > 0 ? <Notice>{`${others.map((other) => openToo(other, steps)).join(' ')}`}</Notice> : null}
+      {others.length > 0 ? (
+        <Notice>{`${others.map((other) => openToo(other, steps)).join(' ')} What they save appears here.`}</Notice>
+      ) : null}
       {locked ? (
         <p role="status" className="flex flex-wrap justify-between gap-x-6 text-ink-2">
           <span>{locked}</span>

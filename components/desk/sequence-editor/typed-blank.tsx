@@ -29,7 +29,9 @@ export function TypedBlank({ step, blank }: BlankProps) {
   const placeholder = blank.whenNull;
   const characters = Math.max(2, shown.length, shown === '' && placeholder ? placeholder.length : 0) + (words ? 1 : 0);
   return (
-    <label className={`inline-flex items-baseline focus-within:outline-3 focus-within:outline-offset-2 focus-within:outline-ink ${blankFrame(state, blank.tone)}`}>
+    <label
+      className={`inline-flex items-baseline focus-within:outline-3 focus-within:outline-offset-2 focus-within:outline-ink ${blankFrame(state, blank.tone)}`}
+    >
       <input
         id={blankId(step.id, blank.field)}
         aria-label={blank.unit ? `${blank.label}, ${blank.unit}` : blank.label}

@@ -20,15 +20,13 @@ interface Autosave {
   dispatch: (event: EditorEvent) => void;
   save: (form: SaveDraft) => Promise<Outcome<SavedDraft>>;
   enabled: boolean;
-  /** Another person's text was brought in. */
-  onHeard: (by: string) => void;
 }
 
 /**
  * Saves a moment after the last edit, again and again while the server does not answer. `sync` sends at once, which also brings in
  * what another person saved.
  */
-export function useAutosave({ revisionId, editor, dispatch, save, enabled, onHeard }: Autosave) {
+export function useAutosave({ revisionId, editor, dispatch, save, enabled }: Autosave) {
   const [state, setState] = useState<SaveState>({ kind: 'idle' });
   const latest = useRef(editor);
   const busy = useRef(false);
@@ -56,7 +54,6 @@ export function useAutosave({ revisionId, editor, dispatch, save, enabled, onHea
       if (before && isSameDraft(before, value))
         return dispatch({ kind: 'saved', sent: before, version: value.version, savedAtIso: value.savedAtIso });
       dispatch({ kind: 'heard', theirs: value, by: value.savedBy });
-      onHeard(value.savedBy);
     } catch (error) {
       // A redirect to the sign-in page is Next's own error and must go on; the text is kept meanwhile.
       if (String((error as { digest?: unknown } | null)?.digest ?? '').startsWith('NEXT_')) throw error;
@@ -64,7 +61,7 @@ export function useAutosave({ revisionId, editor, dispatch, save, enabled, onHea
     } finally {
       busy.current = false;
     }
-  }, [revisionId, save, dispatch, onHeard]);
+  }, [revisionId, save, dispatch]);
 
   const unsaved = isUnsaved(editor);
   const { present } = editor.history;

@@ -1,7 +1,6 @@
 'use client';
 
-import { useCallback, useEffect, useReducer, useState } from 'react';
-import { useToast } from '@/components/ui/toast';
+import { useEffect, useReducer, useState } from 'react';
 import type { Outcome } from '@/lib/contracts/outcome';
 import type { DraftPage, SavedDraft, SaveDraft } from '@/lib/contracts/sequence-draft';
 import { advanceEditor, openEditor } from '@/lib/sequence/draft-editor';
@@ -23,13 +22,11 @@ interface DraftJob {
 export function useDraft({ page, selectedId, save }: DraftJob) {
   const { head, sequence, mayEdit } = page;
   const revisionId = head.id;
-  const toast = useToast();
   const [editor, dispatch] = useReducer(advanceEditor, null, () =>
     openEditor({ sequence, warningReasons: head.warningReasons, version: head.version, savedAtIso: head.savedAtIso }),
   );
   const [tabId, setTabId] = useState<string | null>(null);
-  const onHeard = useCallback((by: string) => toast(`${by} saved this draft. Both texts are in it.`), [toast]);
-  const saving = useAutosave({ revisionId, editor, dispatch, save, enabled: mayEdit && tabId !== null, onHeard });
+  const saving = useAutosave({ revisionId, editor, dispatch, save, enabled: mayEdit && tabId !== null });
   const presence = usePresence({ revisionId, tabId, stepId: selectedId, enabled: mayEdit });
 
   useEffect(() => {
