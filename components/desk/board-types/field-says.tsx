@@ -3,7 +3,10 @@
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import { fieldId, focusField, useBoardTypeForm } from './form-context';
 
-/** What is wrong with a field, under it; nothing while all is well. `names` puts the field's name in front, as a way to it. */
+/**
+ * What is wrong with a field, under it; nothing while all is well. `names` puts the field's name in front, as a way to it: such a
+ * line repeats the one at the field.
+ */
 export function FieldSays({ path, names }: { path: string; names?: string }) {
   const { sentenceOf } = useBoardTypeForm();
   const wrong = sentenceOf(path);
@@ -11,7 +14,7 @@ export function FieldSays({ path, names }: { path: string; names?: string }) {
   const error = wrong.severity === 'error';
   return (
     <p
-      id={`${fieldId(path)}-says`}
+      id={names ? undefined : `${fieldId(path)}-says`}
       className={`flex items-start gap-1.5 text-cap ${error ? 'font-bold text-reject' : 'text-ink-2'}`}
     >
       <VerdictMark shape={error ? 'reject' : 'check'} size={13} />

@@ -22,7 +22,9 @@ export function LimitTable({ caption, rows }: { caption: string; rows: readonly 
         {rows.map(({ name, point, min, max }) => (
           <tr key={name}>
             <Td label="Quantity">
-              {point ? <PointMark point={point} /> : null} {name}
+              <span>
+                {point ? <PointMark point={point} /> : null} {name}
+              </span>
             </Td>
             <LimitCell label="At least" field={min} />
             <LimitCell label="At most" field={max} />
@@ -45,9 +47,9 @@ function LimitCell({ label, field }: { label: string; field: NumberField | undef
     <Td label={label}>
       <QuantityInput field={field} />
       {sentenceOf(field.path) ? (
-        <span className="mt-1 block max-w-72">
+        <div className="mt-1 max-w-72">
           <FieldSays path={field.path} />
-        </span>
+        </div>
       ) : null}
     </Td>
   );

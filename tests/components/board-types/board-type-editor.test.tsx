@@ -132,7 +132,8 @@ describe('values in the circuit', () => {
     type('R5 feedback', 'large');
     expect(field('R5 feedback').value).toBe('large');
     expect(field('R5 feedback')).toHaveProperty('ariaInvalid', 'true');
-    expect(screen.getByText(/“large” is not a value/)).toBeDefined();
+    const says = document.getElementById(field('R5 feedback').getAttribute('aria-describedby')!);
+    expect(says?.textContent).toBe('“large” is not a value. Write it such as 4.7 kΩ.');
     expect(screen.getByText('1 error to fix')).toBeDefined();
     fireEvent.click(button('Save the draft'));
     expect(save).not.toHaveBeenCalled();

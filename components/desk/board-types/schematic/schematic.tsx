@@ -63,7 +63,7 @@ export function Schematic() {
           ))}
         </div>
       </div>
-      <div className="grid gap-1 pt-1 empty:hidden">
+      <div className="hidden gap-1 pt-1 @min-[840px]:grid">
         {parts.flatMap(({ fields }) =>
           fields.map(({ path, label }) => <FieldSays key={path} path={path} names={label} />),
         )}
@@ -86,6 +86,11 @@ function PartFields({ part: { id, name, fields }, onFocus }: { part: CircuitPart
           <QuantityInput key={field.path} field={field} onFocus={onFocus} />
         ))}
       </span>
+      <div className="@min-[840px]:hidden">
+        {fields.map(({ path }) => (
+          <FieldSays key={path} path={path} />
+        ))}
+      </div>
     </div>
   );
 }
