@@ -29,7 +29,7 @@ const environmentSchema = z
     /** The local demo: seeded when empty, its accounts printed at start. */
     SILLWRIGHT_DEMO: flag,
     SILLWRIGHT_DATA: z.string().default('.sillwright'),
-    /** Photographs and drawings. Without a bucket nothing can be uploaded; the demo brings its own storage. */
+    /** Photographs, drawings and certificates. Without a bucket nothing can be uploaded or certified; the demo brings its own storage. */
     S3_BUCKET: z.string().optional(),
     S3_REGION: z.string().default('us-east-1'),
     /** Absent: Amazon's. */

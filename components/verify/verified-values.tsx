@@ -9,7 +9,9 @@ export function VerifiedValues({ values }: { values: readonly CertifiedValue[] }
     <Table stacks={false} aria-label="Limits and measured values">
       <thead>
         <tr>
-          <Th />
+          <Th>
+            <span className="sw-only-read">Result</span>
+          </Th>
           <Th number>
             <span className="font-text">Limits</span>
           </Th>

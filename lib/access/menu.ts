@@ -12,7 +12,6 @@ const menu: readonly MenuItem[] = [
   { href: '/lots', label: 'Lots' },
   { href: '/rejects', label: 'Rejects' },
   { href: '/units', label: 'Units' },
-  { href: '/certificates', label: 'Certificates' },
   { href: '/stations', label: 'Stations' },
   { href: '/board-types', label: 'Board types' },
   { href: '/sequences', label: 'Sequences' },

@@ -3,6 +3,7 @@ import { AddressChoice } from '@/components/desk/address-choice';
 import { CopyAddress } from '@/components/desk/copy-address';
 import { count } from '@/components/desk/numbers';
 import { UnitListTable } from '@/components/desk/units/unit-list-table';
+import { ButtonLink } from '@/components/ui/button';
 import { PageHead, Toolbar } from '@/components/ui/page-head';
 import { unitFilterSchema, type UnitFilter } from '@/lib/contracts/unit-filter';
 import { authorise } from '@/server/auth/authorise';
@@ -44,7 +45,11 @@ export default async function UnitsPage({
   const places = [{ value: '', label: 'all stations' }, ...stations.map(({ code }) => ({ value: code, label: code }))];
   return (
     <>
-      <PageHead title="Units" lede="Any board is found by its serial number: press / and type or scan it." />
+      <PageHead
+        title="Units"
+        lede="Any board is found by its serial number: press / and type or scan it."
+        actions={<ButtonLink href="/certificates">Certificates</ButtonLink>}
+      />
       <Toolbar
         count={
           <span className="flex items-center gap-4">

@@ -1,5 +1,6 @@
 'use client';
 
+import Link from 'next/link';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { EmptyState } from '@/components/ui/empty-state';
@@ -73,6 +74,11 @@ export function CertificatesSection(props: CertificatesSectionProps) {
             ))}
           </ul>
         )}
+        <p className="mt-2">
+          <Link className="sw-link" href="/certificates">
+            All certificates
+          </Link>
+        </p>
       </Section>
       {issuing ? (
         <IssueDialog

@@ -49,7 +49,7 @@ export async function issueCertificate(
     issuedByName: actor.name,
     seal: sealOf(digestOf(signedContent)),
     verifyUrl: `${environment().publicUrl}/verify/${token}`,
-    timeZone: await certificateTimeZone(db),
+    timeZone: certificateTimeZone,
   });
   const storageKey = `certificates/${randomUUID()}.pdf`;
   try {

@@ -22,6 +22,6 @@ export async function verifyCertificate(token: string): Promise<(VerifiedCertifi
     seal: sealOf(found.digest),
     content: found.content,
     validity: validityOf(found),
-    timeZone: await certificateTimeZone(db),
+    timeZone: certificateTimeZone,
   };
 }
