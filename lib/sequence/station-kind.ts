@@ -1,3 +1,4 @@
+import type { StationLink } from '../contracts/station-link';
 import type { CommissioningValues } from '../run/types';
 
 /**
@@ -7,7 +8,7 @@ import type { CommissioningValues } from '../run/types';
 export interface StationKind {
   hasController: boolean;
   hasWiperProbe: boolean;
-  baudRate: number;
+  baudRate: StationLink['baudRate'];
   commissioning: CommissioningValues;
   meter: { gain: number; offsetVolts: number; resolutionVolts: number };
 }

@@ -31,7 +31,7 @@ async function findNothing(page: Page): Promise<void> {
 
 /** Types into the blank that has this label, by keyboard alone once it has the focus. */
 async function typeInto(page: Page, label: string | RegExp, text: string): Promise<void> {
-  const blank = page.getByLabel(label).first();
+  const blank = page.getByLabel(label, { exact: true }).first();
   await blank.focus();
   await page.keyboard.press('Control+A');
   await page.keyboard.type(text);
@@ -72,21 +72,24 @@ describe('a draft from the desk to the floor', () => {
   });
 
   it('shows an error beside its field with a mend that works, and undo brings it back', async () => {
-    const settle = writer.getByLabel(/^Settle/).first();
+    const settle = writer.getByLabel('Settle time, ms').nth(4);
     const before = await settle.inputValue();
-    await typeInto(writer, /^Settle/, '1');
-    const mend = writer.getByRole('button', { name: /^Use / }).first();
+    await settle.focus();
+    await writer.keyboard.press('Control+A');
+    await writer.keyboard.type('1');
+    const mend = writer.getByRole('button', { name: /^Use / }).last();
     await mend.focus();
     await writer.keyboard.press('Enter');
     await writer.getByText('error to fix').waitFor({ state: 'hidden' });
     expect(await settle.inputValue()).not.toBe('1');
+    await settle.focus();
     await writer.keyboard.press('Control+z');
     await writer.keyboard.press('Control+z');
     expect(await settle.inputValue()).toBe(before);
   });
 
   it('is dry run on simulated boards beside the revision in use, and the result is kept with it', async () => {
-    await typeInto(writer, /boards/i, '40');
+    await typeInto(writer, 'Boards', '40');
     await writer.getByRole('button', { name: /Start a dry run|Run again/ }).click();
     await writer.getByText(/would pass first time/).waitFor({ timeout: 90_000 });
     await writer.getByRole('button', { name: 'Keep it with the revision' }).click();
@@ -173,20 +176,11 @@ describe('a draft from the desk to the floor', () => {
 
   it('is taken by the next lot, while the open lot keeps the revision it pinned', async () => {
     await inBrowser(quality, '/lots/new');
-    await quality
-      .getByLabel(/CB1210 cutoff trim r3|CB1210 cutoff trim, r3/)
-      .first()
-      .check()
-      .catch(() => undefined);
-    await quality
-      .getByLabel(/Lot number|Lot code|Number/)
-      .first()
-      .fill('9901-A');
-    await quality.getByLabel(/First serial/).fill('CB1210990100001');
-    await quality
-      .getByLabel(/How many|Quantity|boards/i)
-      .first()
-      .fill('5');
+    await quality.getByLabel('Lot number').fill('9901-A');
+    const basis = quality.getByLabel('Board type and released sequence');
+    await basis.selectOption({ label: 'CB1210 r3, CB1210 cutoff trim' });
+    await quality.getByRole('textbox', { name: 'First serial number' }).fill('CB1210990100001');
+    await quality.getByLabel('Quantity').fill('5');
     await quality.getByRole('button', { name: /Make the lot/ }).click();
     await quality.waitForURL(/\/lots\/9901-A/);
     const { rows } = await pool.query(

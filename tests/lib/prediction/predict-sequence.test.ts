@@ -127,7 +127,7 @@ describe('prediction of a sequence', () => {
   });
 
   it('takes longer over a slow line', () => {
-    const stationMs = (baudRate: number) => {
+    const stationMs = (baudRate: 9600 | 115_200) => {
       const { totalMs, personMs } = predictSequence(cutoff, cb1210, { ...usualStation, baudRate });
       return totalMs - personMs;
     };

@@ -29,7 +29,7 @@ describe.each([
   { boardType: cb1210, baudRate: 115_200 },
   { boardType: cb1210, baudRate: 9_600 },
   { boardType: cb2420, baudRate: 115_200 },
-])('predicted times of what a station does, $boardType.code at $baudRate baud', ({ boardType, baudRate }) => {
+] as const)('predicted times of what a station does, $boardType.code at $baudRate baud', ({ boardType, baudRate }) => {
   it('are those of the station with bytes, within 2 %', async () => {
     const clock = new VirtualClock();
     const link = { kind: 'simulated', seed: 3, baudRate, hasController: true } as const;
