@@ -90,5 +90,7 @@ export function LotLive({ initial, initialReview, certificates, may, actions, de
 /** Why the lot gets no certificate now; what the server alone knows, it says when asked. */
 function unavailableFor({ hold, state, summary }: LotPage): string | null {
   if (hold) return 'The lot is on hold.';
-  return state !== 'closed' && summary.tested < summary.size ? 'Boards of it are still to be tested.' : null;
+  if (state === 'closed') return null;
+  if (summary.tested < summary.size) return 'Boards of it are still to be tested.';
+  return summary.undecided > 0 ? 'Boards of it wait for a decision. Decide, or close the lot.' : null;
 }

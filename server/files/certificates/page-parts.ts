@@ -63,22 +63,22 @@ function drawCode128(paper: Paper, text: string, x: number, y: number): void {
   const code = encodeCode128(text);
   if (!code) return;
   const modules = widthInModules(code);
-  const module = Math.min(0.72, 150 / modules);
-  const box = { x: x - (modules * module) / 2, y, module, height: 36 };
+  const moduleWidth = Math.min(0.72, 150 / modules);
+  const box = { x: x - (modules * moduleWidth) / 2, y, module: moduleWidth, height: 36 };
   paper.pdf.path(barPath(code, box)).fill(inks.ink);
   paper.line(text, x, y + 48, { face: 'num', size: 8.5, anchor: 'middle' });
 }
 
 function drawQr(paper: Paper, text: string, x: number, y: number, side: number): void {
   const { data, size } = QRCode.create(text, { errorCorrectionLevel: 'M' }).modules;
-  const module = side / size;
+  const dot = side / size;
   let path = '';
   for (let row = 0; row < size; row++)
     for (let column = 0; column < size; column++) {
       // Runs of dark modules as one rectangle: no seams in print.
       let run = 0;
       while (column + run < size && data[row * size + column + run]) run++;
-      if (run > 0) path += `M${x + column * module} ${y + row * module}h${run * module}v${module}h${-run * module}z`;
+      if (run > 0) path += `M${x + column * dot} ${y + row * dot}h${run * dot}v${dot}h${-run * dot}z`;
       column += run;
     }
   paper.pdf.path(path).fill(inks.ink);
