@@ -1,5 +1,6 @@
 import { blankKey } from '@/lib/sequence/draft';
 
+export const editorId = 'sequence-editor';
 /** Ids by which messages, problems and shortcuts find a blank and its row. */
 export const blankId = (stepId: string | null, field: string) => `blank-${blankKey(stepId ?? 'rule', field)}`;
 export const messagesId = (stepId: string | null, field: string) => `${blankId(stepId, field)}-messages`;

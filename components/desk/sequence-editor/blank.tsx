@@ -23,7 +23,9 @@ export function Blank({ step, blank }: BlankProps) {
   const { locked, draft } = useEditor();
   if (locked)
     return (
-      <b className="border-b-2 border-dashed border-ink-3 font-num">
+      <b
+        className={`border-b-2 border-dashed border-ink-3 ${blank.input === 'number' || blank.input === 'whole-number' ? 'font-num whitespace-nowrap' : ''}`}
+      >
         {valueWords(fieldValue(step, blank.field), blank, draft.sequence.steps)}
       </b>
     );

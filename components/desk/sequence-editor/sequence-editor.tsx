@@ -16,11 +16,11 @@ import { lostAtSteps } from '../dry-run/lost-at';
 import { railsFor } from '../dry-run/run-rails';
 import { useDryRun } from '../dry-run/use-dry-run';
 import { OfferResults } from '../offers/offer-results';
-import { goTo } from './blank-ids';
+import { editorId, goTo } from './blank-ids';
 import { ChangesList } from './changes-list';
 import { EditorContext, type EditorView } from './editor-context';
 import { EditorHead } from './editor-head';
-import { editorKeys } from './editor-keys';
+import { useEditorKeys } from './editor-keys';
 import { EditorNotes } from './editor-notes';
 import { LeaveGuard } from './leave-guard';
 import { ListFoot } from './list-foot';
@@ -82,6 +82,16 @@ export function SequenceEditor({ page, dryRun: newest, offers, actions }: Sequen
   }
   const move = (kind: 'undo' | 'redo') => dispatch({ kind });
 
+  useEditorKeys({
+    selectedId,
+    locked: locked !== null,
+    commands,
+    undo: () => move('undo'),
+    redo: () => move('redo'),
+    nextError,
+    showKeys: () => setOpen('keys'),
+  });
+
   const view: EditorView = {
     draft,
     boardType,
@@ -104,17 +114,7 @@ export function SequenceEditor({ page, dryRun: newest, offers, actions }: Sequen
 
   return (
     <EditorContext value={view}>
-      <div
-        onKeyDown={editorKeys({
-          selectedId,
-          locked: locked !== null,
-          commands,
-          undo: () => move('undo'),
-          redo: () => move('redo'),
-          nextError,
-          showKeys: () => setOpen('keys'),
-        })}
-      >
+      <div id={editorId}>
         <EditorHead
           page={page}
           saveState={saving.state}

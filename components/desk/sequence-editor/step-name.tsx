@@ -19,7 +19,7 @@ export function StepName({ step, number, naming, onNaming }: StepNameProps) {
   const { edit, endGroup, locked, selectedId } = useEditor();
   const [before, setBefore] = useState(step.name);
   const look = `text-left font-bold ${selectedId === step.id ? 'text-accent' : ''}`;
-  if (locked) return <span className={look}>{stepWord(step)}</span>;
+  if (locked) return <span className={`block py-[3px] ${look}`}>{stepWord(step)}</span>;
   if (!naming)
     return (
       <button

@@ -94,7 +94,7 @@ export function StepRow({ step, number, seconds, lost, acts }: StepRowProps) {
           <StepSentence step={step} />
           <StepMessages step={step} />
         </div>
-        <div className="flex items-center gap-2 pt-1">
+        <div className="flex min-h-[34px] items-center gap-2 pt-1">
           {lost ? <LostBoards lost={lost} /> : null}
           <span className="w-[62px] text-right font-num text-ink-2">
             {!step.enabled ? (
