@@ -63,8 +63,8 @@ export function VerifiedCertificate({ certificate, timeZone, nowIso }: Props) {
       )}
       <p className="mt-4 border-t-2 border-ink pt-3 text-ink-2">
         Issued by <b className="text-ink">{issuedByName}</b>, quality, {dayWords(issuedIso, timeZone)}.
-        {validity.kind === 'valid' ? ' Not revoked.' : ''} Seal …<span className="font-num">{seal}</span>.{' '}
-        {board ? uncertaintyWords(board.values) : ''}
+        {validity.kind === 'valid' ? ' Not revoked.' : ''} Seal{' '}
+        <span className="font-num whitespace-nowrap">…{seal}</span>. {board ? uncertaintyWords(board.values) : ''}
       </p>
       <p className="mt-3 text-ink-2">{cautionSentences.join(' ')}</p>
       <details className="mt-5">

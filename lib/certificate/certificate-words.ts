@@ -61,7 +61,9 @@ export function lotSentence({ boardTypeCode, counts }: CertificateContent): stri
   return [
     `${are(boards, 'board', 'boards')} of ${boardTypeCode} were made in this lot.`,
     `${firstPass} met all limits the first time${laterPass > 0 ? `, ${laterPass} after another attempt` : ''}.`,
-    concessions > 0 ? `${are(concessions, 'board is', 'boards are')} used as they are, by concession.` : '',
+    concessions > 0
+      ? `${are(concessions, 'board is used as it is', 'boards are used as they are')}, by concession.`
+      : '',
     apart > 0 ? `${are(apart, 'board is', 'boards are')} not covered by this certificate.` : '',
     'Each board covered is listed with its values.',
   ]

@@ -139,7 +139,7 @@ function notes(flow: Flow, content: CertificateContent): void {
     if (!concession) continue;
     const names = concession.signatures.map(({ name, atIso }) => `${name} (${atIso.slice(0, 10)})`).join(' and ');
     const which = content.kind === 'lot' ? `Board ${serial}: ` : '';
-    flow.paragraph(`${which}concession signed by ${names}. Reason: ${concession.reason}`, note);
+    flow.paragraph(`${which}concession signed by ${names}. Reason: ${concession.reason.replace(/\.$/, '')}.`, note);
   }
   flow.paragraph(
     content.kind === 'lot'
