@@ -46,7 +46,7 @@ export function VerifiedCertificate({ certificate, timeZone, nowIso }: Props) {
         Certificate <span className="font-num">{number}</span>
       </p>
       <p className="mt-2">{board ? boardSentence(content, timeZone) : lotSentence(content)}</p>
-      <p className="mt-1 mb-4">Compare it with your paper.</p>
+      <p className="mt-1 mb-4">{validity.kind === 'valid' ? 'Compare it with your paper.' : ''}</p>
       {board ? (
         <div className="border-t-2 border-ink pt-3">
           <VerifiedRails board={{ values: board.values }} />

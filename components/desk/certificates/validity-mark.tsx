@@ -13,10 +13,7 @@ export function ValidityMark({ validity }: { validity: CertificateValidity }) {
   const { shape, word } = look[validity.kind];
   return (
     <span>
-      <span className="inline-flex items-center gap-2 whitespace-nowrap font-bold">
-        <VerdictMark shape={shape} size={16} />
-        {word}
-      </span>
+      <VerdictMark shape={shape} size={16} /> <b>{word}</b>
       {why(validity)}
     </span>
   );
