@@ -16,7 +16,7 @@ export function Switch({ id, label, on, onChange }: SwitchProps) {
       aria-checked={on}
       aria-label={label}
       onClick={() => onChange(!on)}
-      className="inline-flex min-h-[30px] items-center gap-1.5 text-cap text-ink-2 max-sm:min-h-[46px]"
+      className="inline-flex min-h-[30px] items-center align-middle gap-1.5 text-cap text-ink-2 max-sm:min-h-[46px]"
     >
       <span aria-hidden="true" className="relative inline-block h-4 w-8 border-2 border-accent bg-sheet">
         <span

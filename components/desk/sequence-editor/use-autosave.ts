@@ -10,8 +10,8 @@ import { isUnsaved, type DraftEditor, type EditorEvent } from '@/lib/sequence/dr
 export type SaveState =
   { kind: 'idle' } | { kind: 'saving' } | { kind: 'failed' } | { kind: 'refused'; sentence: string };
 
-const afterTypingMs = 600;
-const againMs = 3_000;
+/** Until the next attempt, by how the last one ended. */
+const waitMs = { idle: 600, failed: 3_000, refused: 10_000 };
 const answerWithinMs = 10_000;
 
 interface Autosave {
@@ -66,8 +66,8 @@ export function useAutosave({ revisionId, editor, dispatch, save, enabled }: Aut
   const unsaved = isUnsaved(editor);
   const { present } = editor.history;
   useEffect(() => {
-    if (!enabled || !unsaved || state.kind === 'saving' || state.kind === 'refused') return;
-    const timer = setTimeout(() => void sync(), state.kind === 'failed' ? againMs : afterTypingMs);
+    if (!enabled || !unsaved || state.kind === 'saving') return;
+    const timer = setTimeout(() => void sync(), waitMs[state.kind]);
     return () => clearTimeout(timer);
   }, [enabled, unsaved, present, state, sync]);
   useEffect(() => {
