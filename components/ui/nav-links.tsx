@@ -19,7 +19,7 @@ export function NavLinks({ links }: { links: readonly NavLink[] }) {
   const current = currentLink(links, usePathname());
   return (
     <nav aria-label="Main" className="flex min-w-0 self-end overflow-x-auto max-sm:order-3 max-sm:w-full">
-      <ul className="sw-jaws !border-0">
+      <ul className="sw-jaws !border-0 [&>li]:px-3.5!">
         {links.map((link) => (
           <li key={link.href} aria-current={link === current ? 'true' : undefined}>
             <Link

@@ -108,11 +108,11 @@ export async function listWaitingBoards(
   return { boards, total: Number(rows[0]?.total ?? 0) };
 }
 
-/** Of each run, what its last step first measured outside its limits: the point before the hysteresis that follows from it. */
+/** What these runs measured outside its limits, newest step first. */
 export async function listFailedMeasurements(db: Database, runIds: readonly string[]) {
   if (runIds.length === 0) return [];
   return db
-    .selectDistinctOn([measurements.runId], {
+    .select({
       runId: measurements.runId,
       quantity: measurements.quantity,
       value: measurements.value,
@@ -121,7 +121,7 @@ export async function listFailedMeasurements(db: Database, runIds: readonly stri
     })
     .from(measurements)
     .where(and(inArray(measurements.runId, [...runIds]), eq(measurements.passed, false)))
-    .orderBy(asc(measurements.runId), desc(measurements.stepIndex), asc(measurements.n));
+    .orderBy(desc(measurements.stepIndex), asc(measurements.n));
 }
 
 /** Concessions after these runs that lack their second signature, with the first one. */

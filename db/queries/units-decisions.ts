@@ -85,21 +85,3 @@ export async function findNewestPass(
     .limit(1);
   return row ?? null;
 }
-
-/** Boards of which somebody must decide: the newest run was rejected or gave no verdict. Unit ids, newest run first. */
-export async function listUnitsAwaitingDecision(db: Database | Transaction, most: number): Promise<string[]> {
-  const newest = db
-    .selectDistinctOn([runs.unitId], { unitId: runs.unitId, verdict: runs.verdict, endedAt: runs.endedAt })
-    .from(runs)
-    .where(eq(runs.kind, 'production'))
-    .orderBy(runs.unitId, desc(runs.attempt))
-    .as('newest');
-  const rows = await db
-    .select({ unitId: newest.unitId })
-    .from(newest)
-    .innerJoin(units, eq(units.id, newest.unitId))
-    .where(and(inArray(newest.verdict, ['reject', 'no-verdict']), isNull(units.scrappedAt)))
-    .orderBy(desc(newest.endedAt))
-    .limit(most);
-  return rows.map((row) => row.unitId!);
-}

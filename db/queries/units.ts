@@ -147,7 +147,6 @@ export function searchLots(db: Reader, text: string, most: number): Promise<Foun
 }
 
 export interface RecentRun {
-  unitId: string;
   serial: string;
   boardTypeCode: string;
   lotCode: string;
@@ -158,19 +157,17 @@ export interface RecentRun {
   stationCode: string;
 }
 
-/** Production runs that ended, newest first; `verdict`, `stationCode` and `unitIds` null: any. */
+/** Production runs that ended, newest first; `verdict` and `stationCode` null: any. */
 export async function listRecentRuns(
   db: Reader,
   filter: {
     verdict: RecentRun['verdict'] | null;
     stationCode: string | null;
-    unitIds: readonly string[] | null;
     most: number;
   },
 ): Promise<RecentRun[]> {
   const rows = await db
     .select({
-      unitId: units.id,
       serial: units.serial,
       boardTypeCode: boardTypes.code,
       lotCode: lots.code,
@@ -192,7 +189,6 @@ export async function listRecentRuns(
         isNotNull(runs.endedAt),
         filter.verdict ? eq(runs.verdict, filter.verdict) : undefined,
         filter.stationCode ? eq(stations.code, filter.stationCode) : undefined,
-        filter.unitIds ? inArray(units.id, [...filter.unitIds]) : undefined,
       ),
     )
     .orderBy(desc(runs.startedAt))

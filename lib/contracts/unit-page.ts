@@ -87,6 +87,8 @@ export interface UnitSignature {
   sides: ConcessionSide[];
   /** Boards that were decided together, this one among them. */
   serials: string[];
+  /** Of the run that was answered; null where it gave no verdict or something else was signed. */
+  rejectReason: RejectReason | null;
 }
 
 export interface UnitRetestOrder {

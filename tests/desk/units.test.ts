@@ -9,7 +9,7 @@ import type { Actor } from '@/lib/access/actor';
 import { readingsAsCsv } from '@/lib/contracts/readings-csv';
 import { hashSecret } from '@/server/auth/secret-hash';
 import { createLot } from '@/server/operations/lots/create-lot';
-import { listUndecidedUnits, listUnitsForDesk } from '@/server/operations/units/list-units';
+import { listUnitsForDesk } from '@/server/operations/units/list-units';
 import { orderRetest } from '@/server/operations/units/order-retest';
 import { printLabelAgain } from '@/server/operations/units/print-label-again';
 import { readUnitPage } from '@/server/operations/units/read-unit-page';
@@ -152,9 +152,10 @@ describe('a disposition', () => {
   });
 
   it('is refused for a board that passed', async () => {
-    const made = await board(pass);
-    const { unit } = made;
-    expect(await signDispositions(actor, rework(made))).toMatchObject({ ok: false, code: 'nothing-to-decide' });
+    expect(await signDispositions(actor, rework(await board(pass)))).toMatchObject({
+      ok: false,
+      code: 'nothing-to-decide',
+    });
   });
 
   it('of rework is refused when no attempt is left, scrap is not', async () => {
@@ -238,20 +239,6 @@ describe('search', () => {
 });
 
 describe('the list of boards', () => {
-  it('of those that need a decision has each once, with its newest run', async () => {
-    const { unit } = await board(reject);
-    const waiting = await board(failing);
-    const fine = await board(pass);
-    const rows = await listUndecidedUnits();
-    expect(rows.find((row) => row.serial === unit.serial)).toMatchObject({
-      standing: 'needs-disposition',
-      verdict: 'reject',
-    });
-    expect(rows.find((row) => row.serial === waiting.unit.serial)).toMatchObject({ standing: 'waits-for-quality' });
-    expect(rows.some((row) => row.serial === fine.unit.serial)).toBe(false);
-    expect(new Set(rows.map((row) => row.serial)).size).toBe(rows.length);
-  });
-
   it('takes a verdict and a station', async () => {
     const { rows } = await listUnitsForDesk({ verdict: 'pass', stationCode: station.code });
     expect(rows.length).toBeGreaterThan(0);

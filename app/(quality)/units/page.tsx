@@ -7,22 +7,17 @@ import { ButtonLink } from '@/components/ui/button';
 import { PageHead, Toolbar } from '@/components/ui/page-head';
 import { unitFilterSchema, type UnitFilter } from '@/lib/contracts/unit-filter';
 import { authorise } from '@/server/auth/authorise';
-import { listUndecidedUnits, listUnitsForDesk } from '@/server/operations/units/list-units';
+import { listUnitsForDesk } from '@/server/operations/units/list-units';
 
 export const metadata: Metadata = { title: 'Units' };
 
 const choices = [
-  { value: 'undecided', label: 'boards that need a decision' },
+  { value: 'all', label: 'all runs' },
   { value: 'reject', label: 'rejects' },
   { value: 'no-verdict', label: 'runs without a verdict' },
   { value: 'pass', label: 'passes' },
-  { value: 'all', label: 'all runs' },
 ];
 const nothing: Record<UnitFilter['show'], { title: string; text?: string }> = {
-  undecided: {
-    title: 'No board needs a decision.',
-    text: 'A reject appears here until somebody signs what is done with it.',
-  },
   reject: { title: 'No board was rejected.' },
   'no-verdict': { title: 'No run ended without a verdict.' },
   pass: { title: 'No board has passed yet.' },
@@ -36,12 +31,7 @@ export default async function UnitsPage({
 }) {
   await authorise('signed-in');
   const { show, station } = unitFilterSchema.parse(await searchParams);
-  const verdict = show === 'undecided' || show === 'all' ? null : show;
-  const [{ rows: tested, stations }, undecided] = await Promise.all([
-    listUnitsForDesk({ verdict, stationCode: station }),
-    show === 'undecided' ? listUndecidedUnits() : [],
-  ]);
-  const rows = show === 'undecided' ? undecided.filter((row) => !station || row.stationCode === station) : tested;
+  const { rows, stations } = await listUnitsForDesk({ verdict: show === 'all' ? null : show, stationCode: station });
   const places = [{ value: '', label: 'all stations' }, ...stations.map(({ code }) => ({ value: code, label: code }))];
   return (
     <>
@@ -53,7 +43,7 @@ export default async function UnitsPage({
       <Toolbar
         count={
           <span className="flex items-center gap-4">
-            {show !== 'undecided' || station ? <CopyAddress /> : null}
+            {show !== 'all' || station ? <CopyAddress /> : null}
             <span>
               <b>{count(rows.length)}</b> shown
             </span>

@@ -3,7 +3,7 @@ import { dispositionKinds, type DispositionKind } from '@/lib/contracts/stored-s
 const shortWords: Record<DispositionKind, string> = {
   rework: 'Rework',
   scrap: 'Scrap',
-  concession: 'Concession',
+  concession: 'Use as is',
   return: 'Return',
 };
 
@@ -20,13 +20,13 @@ export function DecisionButtons({ kinds, of, onChoose }: DecisionButtonsProps) {
   const shown = dispositionKinds.filter((kind) => kinds.includes(kind));
   if (shown.length === 0) return null;
   return (
-    <span className="inline-flex flex-wrap border-2 border-accent" role="group" aria-label={`Decide ${of}`}>
+    <span className="inline-flex border-2 border-accent" role="group" aria-label={`Decide ${of}`}>
       {shown.map((kind) => (
         <button
           key={kind}
           type="button"
           aria-label={`${shortWords[kind]}, ${of}`}
-          className="min-h-[26px] border-l border-accent px-2.5 font-bold text-accent first:border-l-0 hover:bg-accent hover:text-on-accent max-sm:min-h-[44px]"
+          className="min-h-[26px] border-l border-accent px-2.5 font-bold whitespace-nowrap text-accent max-sm:px-2 first:border-l-0 hover:bg-accent hover:text-on-accent max-sm:min-h-[44px]"
           onClick={() => onChoose(kind)}
         >
           {shortWords[kind]}

@@ -1,18 +1,23 @@
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import type { UnitDisposition, UnitSignature } from '@/lib/contracts/unit-page';
 import { Time } from '../time';
-import { dispositionWords } from '../words';
+import { dispositionWords, rejectWords } from '../words';
 
 /** A decision as it was signed: what, why, by whom, when, and what each signature means. */
 export function DecisionRecord({ disposition }: { disposition: UnitDisposition }) {
   const { kind, action, reason, signatures, signedByName, signedIso } = disposition;
-  const together = signatures[0]?.serials.length ?? 1;
+  const { serials = [], rejectReason = null } = signatures[0] ?? {};
   return (
     <>
       <h3 className="font-bold">{dispositionWords[kind]}</h3>
+      {rejectReason ? <p>Rejected: {rejectWords[rejectReason].toLowerCase()}</p> : null}
       {action ? <p>Done: {action}</p> : null}
       <p>Reason: {reason}</p>
-      {together > 1 ? <p className="text-ink-2">Decided together with {together - 1} other boards.</p> : null}
+      {serials.length > 1 ? (
+        <p className="max-h-40 overflow-y-auto text-ink-2" tabIndex={serials.length > 20 ? 0 : undefined}>
+          For {serials.length} boards together: <span className="font-num">{serials.join(', ')}</span>
+        </p>
+      ) : null}
       {signatures.length === 0 ? (
         <p className="mt-1">
           {signedByName}, <Time iso={signedIso} />

@@ -12,7 +12,7 @@ import { fetchJson } from '../fetch-json';
 import { DecisionButtons } from './decision-buttons';
 import type { Deciding } from './deciding';
 import { DispositionDialog } from './disposition-dialog';
-import { measuredColumn, reasonColumn, rejectColumn, serialColumn, triesColumn } from './reject-columns';
+import { measuredColumn, reasonColumn, rejectColumn, serialColumn } from './reject-columns';
 
 const mostShown = 8;
 
@@ -41,7 +41,6 @@ export function LotRejectTable({ lotCode, version, deciding, onChanged }: LotRej
         serialColumn,
         reasonColumn,
         measuredColumn,
-        triesColumn,
         rejectColumn.display({
           id: 'decide',
           header: 'Decision',
@@ -56,7 +55,12 @@ export function LotRejectTable({ lotCode, version, deciding, onChanged }: LotRej
       ]),
     [kinds],
   );
-  if (!query.data) return query.isError ? <p>The list did not load. Load the page again.</p> : <LoadingTicks label="Reading the boards to decide about" />;
+  if (!query.data)
+    return query.isError ? (
+      <p>The list did not load. Load the page again.</p>
+    ) : (
+      <LoadingTicks label="Reading the boards to decide about" />
+    );
   const { rows, total } = query.data;
   return (
     <>

@@ -63,7 +63,7 @@ export const endedColumn = rejectColumn.accessor('endedIso', {
 
 function Reason({ row: { rejectReason, concession } }: { row: RejectRow }) {
   return (
-    <>
+    <span>
       <span className="inline-flex items-center gap-2">
         <VerdictMark shape={rejectReason ? 'reject' : 'check'} size={15} />
         {rejectReason ? rejectWords[rejectReason] : 'Stopped without a verdict'}
@@ -73,7 +73,7 @@ function Reason({ row: { rejectReason, concession } }: { row: RejectRow }) {
           Concession by {concession.byName} waits for {otherSideWords(concession.sides)}
         </span>
       ) : null}
-    </>
+    </span>
   );
 }
 

@@ -49,9 +49,9 @@ export function HoldRulesForm({ page, mayEdit, set }: HoldRulesFormProps) {
             <RuleLine key={rule} errors={[errors.runRules?.[i]?.times?.message, errors.runRules?.[i]?.within?.message]}>
               <CheckField
                 {...form.register(`runRules.${i}.on`)}
-                label={`Rule ${rule}: ${ruleWords[rule].toLowerCase()},`}
+                label={`Rule ${rule}: ${ruleWords[rule].toLowerCase()}, seen`}
               />
-              <Gap label={`Times of rule ${rule}`} size={2} {...form.register(`runRules.${i}.times`)} /> times within{' '}
+              <Gap label={`Times of rule ${rule}`} size={2} {...form.register(`runRules.${i}.times`)} /> × within{' '}
               <Gap label={`Boards of rule ${rule}`} size={3} {...form.register(`runRules.${i}.within`)} /> boards
             </RuleLine>
           ))}
@@ -69,7 +69,7 @@ export function HoldRulesForm({ page, mayEdit, set }: HoldRulesFormProps) {
           </RuleLine>
           <RuleLine errors={[errors.sameReason?.times?.message]}>
             <CheckField {...form.register('sameReason.on')} label="The same reason" />
-            <Gap label="Rejects in a row" size={2} {...form.register('sameReason.times')} /> times in a row
+            <Gap label="Rejects in a row" size={2} {...form.register('sameReason.times')} /> × in a row
           </RuleLine>
           <RuleLine errors={[]}>
             <CheckField

@@ -8,6 +8,8 @@ import { useToast } from '@/components/ui/toast';
 import type { LotChange } from '@/lib/contracts/lot';
 import type { LotPage } from '@/lib/contracts/lot-page';
 import type { Outcome } from '@/lib/contracts/outcome';
+import type { ReasonChoice } from '@/lib/contracts/reason-code';
+import type { ReasonCodeUse } from '@/lib/contracts/stored-states';
 import { count } from '../numbers';
 import { ReasonDialog } from '../reason-dialog';
 import { Time } from '../time';
@@ -21,13 +23,17 @@ export interface LotActionsOf {
 interface LotActionsProps {
   lot: LotPage;
   actions: LotActionsOf;
+  reasons: readonly ReasonChoice[];
   onChanged: () => void;
 }
 
 const done: Record<LotChange, string> = { open: 'open', pause: 'paused', close: 'closed' };
 
+const wordsFor = (use: ReasonCodeUse, reasons: readonly ReasonChoice[]) =>
+  reasons.filter((reason) => reason.use === use).map(({ word }) => word);
+
 /** Pause, open, close, hold. Pausing can be undone; closing and holding ask first. */
-export function LotActions({ lot, actions, onChanged }: LotActionsProps) {
+export function LotActions({ lot, actions, reasons, onChanged }: LotActionsProps) {
   const toast = useToast();
   const [asking, setAsking] = useState<'close' | 'hold' | null>(null);
   const [busy, setBusy] = useState(false);
@@ -84,6 +90,7 @@ export function LotActions({ lot, actions, onChanged }: LotActionsProps) {
         consequence="No board of it is tested until the hold is released. Your reason is recorded."
         verb="Hold the lot"
         keep="Keep it going"
+        words={wordsFor('hold', reasons)}
         send={(reason) => actions.hold({ lotId: id, reason })}
         onDone={() => {
           setAsking(null);
@@ -96,7 +103,7 @@ export function LotActions({ lot, actions, onChanged }: LotActionsProps) {
 }
 
 /** Why a lot is held, by whom, and the release. */
-export function LotHold({ lot, mayRelease, actions, onChanged }: LotActionsProps & { mayRelease: boolean }) {
+export function LotHold({ lot, mayRelease, actions, reasons, onChanged }: LotActionsProps & { mayRelease: boolean }) {
   const toast = useToast();
   const [asking, setAsking] = useState(false);
   if (!lot.hold) return null;
@@ -143,6 +150,7 @@ export function LotHold({ lot, mayRelease, actions, onChanged }: LotActionsProps
         verb="Sign and release"
         keep="Keep it on hold"
         signed
+        words={wordsFor('hold-release', reasons)}
         send={(given, password) => actions.release({ lotId: lot.id, reason: given, password })}
         onDone={() => {
           setAsking(false);

@@ -8,7 +8,7 @@ export function LotRejectsSection({ lot, deciding, onChanged }: LotSectionProps)
   const { summary } = lot;
   const boards = summary.rejected + summary.undecided;
   return (
-    <div className="grid grid-cols-[minmax(0,1fr)] gap-x-12 xl:grid-cols-[minmax(0,3fr)_minmax(0,7fr)]">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-x-12 xl:grid-cols-[minmax(0,10fr)_minmax(0,27fr)]">
       <Section title="Why boards were rejected">
         <RejectPareto reasons={summary.reasons} />
       </Section>

@@ -64,7 +64,9 @@ export function ReasonCodes({ rows, actions }: ReasonCodesProps) {
                         {row.used}
                       </Td>
                       <Td label="Added">
-                        {row.createdByName}, <Time iso={row.createdIso} format="day" />
+                        <span>
+                          {row.createdByName}, <Time iso={row.createdIso} format="day" />
+                        </span>
                       </Td>
                       <Td label="Now">
                         <Now row={row} />

@@ -3,11 +3,10 @@
 import Link from 'next/link';
 import { SerialStrip } from '@/components/ui/serial-strip';
 import { VerdictMark } from '@/components/ui/verdict-mark';
-import type { BoardStanding } from '@/lib/decision/board-standing';
 import type { RejectReason, Verdict } from '@/lib/run/types';
 import { DataTable, deskColumns } from '../data-table';
 import { Time } from '../time';
-import { rejectWords, standingWords, verdictWords } from '../words';
+import { rejectWords, verdictWords } from '../words';
 
 interface UnitTableRow {
   serial: string;
@@ -18,7 +17,6 @@ interface UnitTableRow {
   attempt: number;
   stationCode: string;
   endedAtIso: string;
-  standing: BoardStanding['kind'] | null;
 }
 
 const shapes = { pass: 'pass', reject: 'reject', 'no-verdict': 'check' } as const;
@@ -52,11 +50,6 @@ const columns = helper.columns([
         {original.rejectReason ? rejectWords[original.rejectReason] : verdictWords[original.verdict]}
       </span>
     ),
-  }),
-  helper.accessor((row) => (row.standing ? standingWords[row.standing] : ''), {
-    id: 'standing',
-    header: 'Now',
-    sortFn: 'text',
   }),
   helper.accessor('attempt', { header: 'Attempt', meta: { number: true } }),
   helper.accessor('stationCode', { header: 'Station', sortFn: 'alphanumeric' }),

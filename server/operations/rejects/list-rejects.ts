@@ -2,7 +2,7 @@ import { listBoardTypeCodes } from '@/db/queries/board-type-revisions';
 import { listStationCodes } from '@/db/queries/lots';
 import { listFailedMeasurements, listWaitingBoards, listWaitingConcessions } from '@/db/queries/rejects';
 import { listUnitRecordsById } from '@/db/queries/unit-records';
-import { rejectsPerPage, type RejectFilter, type RejectPage } from '@/lib/contracts/reject-list';
+import { rejectsPerPage, type RejectFilter, type RejectPage, type RejectRow } from '@/lib/contracts/reject-list';
 import type { ConcessionSide } from '@/lib/decision/concession-sides';
 import { decidableKinds } from '@/lib/decision/disposition-problem';
 import { database } from '@/server/postgres';
@@ -21,14 +21,13 @@ export async function listRejects(filter: RejectFilter, perPage = rejectsPerPage
     listWaitingConcessions(db, runIds),
   ]);
   const recordOf = new Map(records.map((record) => [record.unitId, record]));
-  const failedOf = new Map(failed.map(({ runId, ...measured }) => [runId, measured]));
   const concessionOf = new Map(concessions.map((each) => [each.runId, each]));
   const rows = boards.map(({ endedAt, ...board }) => {
     const concession = concessionOf.get(board.runId);
     return {
       ...board,
       endedIso: endedAt.toISOString(),
-      measured: failedOf.get(board.runId) ?? null,
+      measured: measuredFor(board, failed),
       decidable: decidableKinds(recordOf.get(board.unitId)!),
       concession: concession
         ? { byName: concession.byName, sides: (concession.content.sides ?? []) as ConcessionSide[] }
@@ -36,6 +35,19 @@ export async function listRejects(filter: RejectFilter, perPage = rejectsPerPage
     };
   });
   return { rows, total, page: filter.page };
+}
+
+/** Of what a run measured outside its limits, the quantity that its reason speaks of, or else the first of its last step. */
+function measuredFor(
+  { runId, rejectReason }: { runId: string; rejectReason: string | null },
+  failed: Awaited<ReturnType<typeof listFailedMeasurements>>,
+): RejectRow['measured'] {
+  const own = failed.filter((each) => each.runId === runId);
+  const spokenOf = own.find(({ quantity }) => rejectReason?.split('-')[0] === quantity.split('-')[0]);
+  const shown = spokenOf ?? own[0];
+  if (!shown) return null;
+  const { quantity, value, min, max } = shown;
+  return { quantity, value, min, max };
 }
 
 /** What the list can be narrowed to. */

@@ -5,7 +5,16 @@ import { signatureHolds } from './record-signature';
 /** A signature as pages show it, and whether it still fits what it is kept with. */
 export function shownSignature(signature: Signature): UnitSignature {
   const { accountId, name, signedAt, meaning, digest, content } = signature;
-  const { sides = [], serials = [] } = content as Partial<Pick<UnitSignature, 'sides' | 'serials'>>;
-  const signedIso = signedAt.toISOString();
-  return { accountId, name, signedIso, meaning, digest, holds: signatureHolds(signature), sides, serials };
+  const shown = content as Partial<Pick<UnitSignature, 'sides' | 'serials' | 'rejectReason'>>;
+  return {
+    accountId,
+    name,
+    signedIso: signedAt.toISOString(),
+    meaning,
+    digest,
+    holds: signatureHolds(signature),
+    sides: shown.sides ?? [],
+    serials: shown.serials ?? [],
+    rejectReason: shown.rejectReason ?? null,
+  };
 }
