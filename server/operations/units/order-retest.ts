@@ -13,7 +13,7 @@ import { recordSignature } from '../signatures/record-signature';
  * Quality orders one more run of a board that passed or waits; its verdict replaces the one before. Codes: unit-unknown,
  * retest-not-possible, wrong-password, too-many-tries.
  */
-export async function orderRetest(actor: Actor, form: RetestOrderForm): Promise<Outcome> {
+export async function orderRetest(actor: Actor, form: RetestOrderForm, at = new Date()): Promise<Outcome> {
   const signed = await confirmSignature(actor, form.password);
   if (!signed.ok) return signed;
   return database().transaction(async (tx) => {
@@ -30,13 +30,23 @@ export async function orderRetest(actor: Actor, form: RetestOrderForm): Promise<
             ? 'This board was rejected. Record a rework instead.'
             : 'Only a board that passed or waits for quality is tested again.',
       );
-    const { id } = await insertRetestOrder(tx, { unitId: unit.id, reason: form.reason, signedBy: actor.accountId });
-    await recordSignature(tx, actor, {
-      subject: 'retest-order',
-      subjectId: id,
-      meaning: 'The board is tested once more; the new result replaces the old one.',
-      content: { serial: unit.serial, reason: form.reason },
+    const { id } = await insertRetestOrder(tx, {
+      unitId: unit.id,
+      reason: form.reason,
+      signedBy: actor.accountId,
+      signedAt: at,
     });
+    await recordSignature(
+      tx,
+      actor,
+      {
+        subject: 'retest-order',
+        subjectId: id,
+        meaning: 'The board is tested once more; the new result replaces the old one.',
+        content: { serial: unit.serial, reason: form.reason },
+      },
+      at,
+    );
     await insertTrail(tx, actor, {
       action: 'unit.retest-ordered',
       entity: 'unit',
