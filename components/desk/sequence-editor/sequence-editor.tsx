@@ -1,5 +1,6 @@
 'use client';
 
+import Link from 'next/link';
 import { useCallback, useMemo, useState } from 'react';
 import { PredictedSupply } from '@/components/charts/predicted-supply';
 import { useToast } from '@/components/ui/toast';
@@ -158,6 +159,12 @@ export function SequenceEditor({ page, dryRun: newest, offers, actions }: Sequen
           </div>
           <div className="grid min-w-0 content-start gap-5">
             <div className="border-t-2 border-ink pt-2">
+              <p className="text-right text-cap text-ink-2">
+                Limits belong to{' '}
+                <Link className="sw-link" href={`/board-types/${boardType.code}`}>
+                  {boardType.code}
+                </Link>
+              </p>
               <DryRunPane
                 dryRun={dryRun}
                 boardType={boardType}
