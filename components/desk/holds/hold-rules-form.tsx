@@ -51,8 +51,20 @@ export function HoldRulesForm({ page, mayEdit, set }: HoldRulesFormProps) {
                 {...form.register(`runRules.${i}.on`)}
                 label={`Rule ${rule}: ${ruleWords[rule].toLowerCase()}, seen`}
               />
-              <Gap label={`Times of rule ${rule}`} size={2} {...form.register(`runRules.${i}.times`)} /> × within{' '}
-              <Gap label={`Boards of rule ${rule}`} size={3} {...form.register(`runRules.${i}.within`)} /> boards
+              <Gap
+                label={`Times of rule ${rule}`}
+                size={2}
+                wrong={errors.runRules?.[i]?.times}
+                {...form.register(`runRules.${i}.times`)}
+              />{' '}
+              × within{' '}
+              <Gap
+                label={`Boards of rule ${rule}`}
+                size={3}
+                wrong={errors.runRules?.[i]?.within}
+                {...form.register(`runRules.${i}.within`)}
+              />{' '}
+              boards
             </RuleLine>
           ))}
         </ul>
@@ -63,13 +75,30 @@ export function HoldRulesForm({ page, mayEdit, set }: HoldRulesFormProps) {
         <ul>
           <RuleLine errors={[errors.yieldFloor?.percent?.message, errors.yieldFloor?.boards?.message]}>
             <CheckField {...form.register('yieldFloor.on')} label="Fewer than" />
-            <Gap label="First-pass yield, percent" size={3} {...form.register('yieldFloor.percent')} /> % of the last{' '}
-            <Gap label="Boards of the yield" size={3} {...form.register('yieldFloor.boards')} /> boards passed first
-            time
+            <Gap
+              label="First-pass yield, percent"
+              size={3}
+              wrong={errors.yieldFloor?.percent}
+              {...form.register('yieldFloor.percent')}
+            />{' '}
+            % of the last{' '}
+            <Gap
+              label="Boards of the yield"
+              size={3}
+              wrong={errors.yieldFloor?.boards}
+              {...form.register('yieldFloor.boards')}
+            />{' '}
+            boards passed first time
           </RuleLine>
           <RuleLine errors={[errors.sameReason?.times?.message]}>
             <CheckField {...form.register('sameReason.on')} label="The same reason" />
-            <Gap label="Rejects in a row" size={2} {...form.register('sameReason.times')} /> × in a row
+            <Gap
+              label="Rejects in a row"
+              size={2}
+              wrong={errors.sameReason?.times}
+              {...form.register('sameReason.times')}
+            />{' '}
+            × in a row
           </RuleLine>
           <RuleLine errors={[]}>
             <CheckField
@@ -100,6 +129,20 @@ export function HoldRulesForm({ page, mayEdit, set }: HoldRulesFormProps) {
 }
 
 /** A gap for a whole number. */
-function Gap({ label, size, ...field }: UseFormRegisterReturn & { label: string; size: number }) {
-  return <FillIn {...field} label={label} size={size} inputMode="numeric" className="text-center" />;
+function Gap({
+  label,
+  size,
+  wrong,
+  ...field
+}: UseFormRegisterReturn & { label: string; size: number; wrong: unknown }) {
+  return (
+    <FillIn
+      {...field}
+      label={label}
+      aria-invalid={wrong ? true : undefined}
+      size={size}
+      inputMode="numeric"
+      className="text-center"
+    />
+  );
 }

@@ -131,13 +131,10 @@ export function LotHold({ lot, mayRelease, actions, reasons, onChanged }: LotAct
         </>
       }
     >
-      {reason} Held by {byName ?? 'rule'}, <Time iso={sinceIso} />.{' '}
-      {suspects.boards > 0 ? (
-        <>
-          <b>{count(suspects.boards)}</b> {suspects.boards === 1 ? 'board is' : 'boards are'} suspect, passed{' '}
-          {suspects.since === 'run' ? 'since the run began' : 'since the last good daily check'}.
-        </>
-      ) : null}
+      {/[.!?]$/.test(reason) ? reason : `${reason}.`} Held by {byName ?? 'rule'}, <Time iso={sinceIso} />.{' '}
+      {suspects.boards > 0 ? <b>{count(suspects.boards)}</b> : 'No'} {suspects.boards === 1 ? 'board is' : 'boards are'}{' '}
+      suspect{suspects.boards > 0 ? ', passed ' : ': none passed '}
+      {suspects.since === 'run' ? 'since the run began' : 'since the last good daily check'}.
       <ReasonDialog
         open={asking}
         onClose={() => setAsking(false)}
