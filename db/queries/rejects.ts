@@ -27,10 +27,13 @@ const asksQuality = (attempt: SQL) => sql`(
 
 /**
  * Every board that `boardStanding` says needs a disposition or waits for quality, as one row `n` of its newest run; a property
- * checks that both say the same.
+ * checks that both say the same. `offset 0` keeps the planner from joining a million later runs before the few rejects are sifted.
  */
 const waiting = sql`
-  runs n
+  (select r.id, r.unit_id, r.lot_id, r.station_id, r.attempt, r.verdict, r.reject_reason, r.ended_at from runs r
+   where r.kind = 'production' and r.verdict in ('reject', 'no-verdict') and r.attempt = (
+     select max(newest.attempt) from runs newest where newest.unit_id = r.unit_id and newest.kind = 'production')
+   offset 0) n
   join units u on u.id = n.unit_id
   join lots l on l.id = n.lot_id
   join board_type_revisions br on br.id = l.board_type_revision_id
@@ -50,9 +53,7 @@ const waiting = sql`
     where o.unit_id = n.unit_id
       and (o.used_by_run_id is null or (used.verdict = 'no-verdict' and not used.failing_when_stopped))
     order by o.signed_at limit 1) retest on true
-  where n.kind = 'production' and n.verdict in ('reject', 'no-verdict') and u.scrapped_at is null
-    and not exists (
-      select from runs later where later.unit_id = n.unit_id and later.kind = 'production' and later.attempt > n.attempt)
+  where u.scrapped_at is null
     and (decided.kind is null or decided.kind = 'rework')
     and (retest.id is null
       or (retest.before is not null and ${asksQuality(sql`greatest(verdict.attempt, retest.before)`)}))
