@@ -2,7 +2,13 @@ import { useTranslations } from 'next-intl';
 import type { BenchReading, RailsView } from '@/lib/contracts/bench-view';
 import type { ReadingStore } from '../live/reading-store';
 import { useNumbers } from '../use-numbers';
-import { hysteresisEnds, nothingInside, placeInside, type PlacedInside, type RailsInside } from '@/lib/rails/inside-blocks';
+import {
+  hysteresisEnds,
+  nothingInside,
+  placeInside,
+  type PlacedInside,
+  type RailsInside,
+} from '@/lib/rails/inside-blocks';
 import { RailFlagShape } from './rail-flag';
 import { railsBox, tubeEdge } from '@/lib/rails/rails-geometry';
 import { RailsHeads } from './rails-heads';
