@@ -11,7 +11,9 @@ import { storeDemoPictures } from './demo-pictures';
 import { startDemoPrinter } from './demo-printer';
 import { startDryRuns } from './dry-runs/start-dry-runs';
 import { startFakeStorage } from './files/storage/fake-storage';
+import { objectStore } from './files/storage/object-store';
 import { startLabelSender } from './operations/labels/label-sender';
+import { startTrailKeeper } from './operations/trail/trail-keeper';
 import { startLive } from './live/start-live';
 import { localSecret } from './local-secret';
 import { database } from './postgres';
@@ -68,6 +70,7 @@ async function main(): Promise<void> {
   const printer = settings.demo ? await startDemoPrinter(settings.dataFolder) : null;
   const labels = startLabelSender({ db: database(), log });
   const dryRuns = await startDryRuns({ db: database(), log });
+  const trail = startTrailKeeper({ db: database(), store: objectStore(), log });
   await app.prepare();
   const pages = app.getRequestHandler();
   handle = (request, response) => void pages(request, response);
@@ -84,6 +87,7 @@ async function main(): Promise<void> {
     await live.stop();
     await labels.stop();
     await dryRuns.stop();
+    await trail.stop();
     await printer?.close();
     await storage?.close();
     httpServer.close();

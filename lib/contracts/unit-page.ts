@@ -14,6 +14,8 @@ export interface TraceStretch {
 
 export interface UnitMeasurement extends Omit<Measurement, 'stepIndex'> {
   n: number;
+  /** Name of its step, or its number where nobody named it. */
+  step: string;
 }
 
 export interface UnitRun {

@@ -60,6 +60,30 @@ try {
     .click();
   await desk.getByText('Label, 40').first().waitFor();
   await desk.screenshot({ path: `${folder}/unit.png` });
+  await desk.goto(`${product.url}/lots/${lot.replace(/-01$/, '-00')}`);
+  await desk.getByText('boards passed first time').waitFor();
+  await desk.screenshot({ path: `${folder}/review.png` });
+  await desk.goto(`${product.url}/sequences`);
+  await desk.getByRole('link', { name: 'CB2420 cutoff trim' }).click();
+  await desk
+    .getByRole('link', { name: /^Compare/ })
+    .first()
+    .click();
+  await desk.getByText('Supply over one board').waitFor();
+  await desk.screenshot({ path: `${folder}/compare.png` });
+
+  const engineer = demoAccounts.find((account) => account.name === 'T. Marsden')!;
+  const bench = await signInAtDesk(browser, product.url, engineer.email!);
+  await bench.goto(`${product.url}/board-types/CB1210`);
+  await bench.getByText('boards', { exact: false }).first().waitFor();
+  await bench.waitForTimeout(3_000);
+  await bench.screenshot({ path: `${folder}/board-type.png` });
+  await bench.goto(`${product.url}/sequences`);
+  await bench.getByRole('link', { name: 'CB1210 cutoff trim', exact: true }).click();
+  await bench.getByRole('link', { name: 'Open the draft' }).first().click();
+  await bench.getByText('Predicted supply').waitFor();
+  await bench.waitForTimeout(3_000);
+  await bench.screenshot({ path: `${folder}/sequence.png` });
 } finally {
   await browser.close();
   await product.stop();

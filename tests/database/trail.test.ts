@@ -112,14 +112,14 @@ describe('the chain of the trail', () => {
   });
 
   test('shows a chain that was cut off, by the head that was kept', async () => {
-    await writeCheckpoints(open.db);
+    await writeCheckpoints(open.db, null);
     await asOwner(sql`delete from trail where chain = 'desk' and place > 4`);
     expect(await firstBreak()).toMatchObject({ chain: 'desk', place: 4 });
     expect((await firstBreak())!.sentence).toContain('entry 6');
   });
 
   test('shows a chain that was written anew, by a head kept outside the database', async () => {
-    const known = (await writeCheckpoints(open.db)).map((head) => ({ ...head, from: 'object storage' }));
+    const known = (await writeCheckpoints(open.db, null)).map((head) => ({ ...head, from: 'object storage' }));
     await asOwner(sql`truncate trail, trail_checkpoints restart identity`);
     for (let n = 1; n <= 6; n++) await insertTrail(open.db, null, desk(n + 1));
     expect(await firstBreak()).toBeNull();

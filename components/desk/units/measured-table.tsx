@@ -24,9 +24,17 @@ const order: UnitMeasurement['quantity'][] = [
 ];
 const phaseWords = { found: 'found', trimmed: 'after trim', verified: 'verified', check: 'check' };
 
-/** The last value of each quantity in the order in which people look for them. */
+/** Measured by as many steps as a sequence has of them: each keeps its own row. */
+const byStep: readonly UnitMeasurement['quantity'][] = ['channel-volts', 'drift-volts'];
+
+/** The last value of each quantity, of channels and drifts that of each step, in the order in which people look for them. */
 export function lastOfEach(measurements: readonly UnitMeasurement[]): UnitMeasurement[] {
-  return order.map((quantity) => measurements.findLast((m) => m.quantity === quantity)).filter((m) => m !== undefined);
+  return order.flatMap((quantity) => {
+    const all = measurements.filter((m) => m.quantity === quantity);
+    const isLast = (m: UnitMeasurement, i: number) =>
+      !all.slice(i + 1).some(({ step }) => !byStep.includes(quantity) || step === m.step);
+    return all.filter(isLast);
+  });
 }
 
 /** U, rounded up, one unit finer than the value where that is a voltage. */
@@ -38,7 +46,8 @@ function uncertaintyText({ quantity, expandedUncertainty }: UnitMeasurement): st
   return `${up(expandedUncertainty * scale, digits + 1)} ${unit}`;
 }
 
-function Name({ quantity }: { quantity: UnitMeasurement['quantity'] }) {
+function Name({ quantity, step }: Pick<UnitMeasurement, 'quantity' | 'step'>) {
+  if (byStep.includes(quantity)) return `${quantityWords[quantity]}, ${step}`;
   const side = quantity === 'trip-volts' ? 'trip' : quantity === 'release-volts' ? 'release' : null;
   if (!side) return quantityWords[quantity];
   return (
@@ -72,7 +81,9 @@ export function MeasuredTable({ run }: { run: UnitRun }) {
     >
       <thead>
         <tr>
-          <Th />
+          <Th>
+            <span className="sr-only">Quantity</span>
+          </Th>
           <Th className="num">
             <span className="font-text">Limits</span>
           </Th>
@@ -86,9 +97,9 @@ export function MeasuredTable({ run }: { run: UnitRun }) {
       </thead>
       <tbody>
         {rows.map((measurement) => (
-          <tr key={measurement.quantity}>
+          <tr key={measurement.n}>
             <Td className="whitespace-nowrap">
-              <Name quantity={measurement.quantity} />
+              <Name {...measurement} />
             </Td>
             <Td number>
               {measurement.quantity === 'operator-check'

@@ -4,6 +4,11 @@ import type { UnitRun } from '@/lib/contracts/unit-page';
 type MadeRun = Awaited<ReturnType<typeof listRunsOfUnit>>[number];
 type Rows<F extends (...args: never[]) => Promise<unknown>> = Awaited<ReturnType<F>>;
 
+/** A step as the sequence's author calls it, else by its number. */
+function stepWords(step: { name?: string } | undefined, index: number): string {
+  return step?.name || `step ${index + 1}`;
+}
+
 /** A run as its page shows it, with those of the measurements and traces that are its own. */
 export function unitRunOf(
   { run, stationCode, fixture, operatorNumber, operatorName }: MadeRun,
@@ -42,7 +47,10 @@ export function unitRunOf(
     adjustments: run.adjustments ?? [],
     measurements: measurements
       .filter((measurement) => measurement.runId === run.id)
-      .map(({ runId: _runId, stepIndex: _stepIndex, ...measurement }) => measurement),
+      .map(({ runId: _runId, stepIndex, ...measurement }) => ({
+        ...measurement,
+        step: stepWords(run.plan.sequence?.steps[stepIndex], stepIndex),
+      })),
     traces: traces
       .filter((trace) => trace.runId === run.id)
       .map(({ kind, atMs, volts, output }) => ({ kind, atMs, volts, output })),
