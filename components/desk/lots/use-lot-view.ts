@@ -1,7 +1,7 @@
 'use client';
 
 import { usePathname, useSearchParams } from 'next/navigation';
-import { useCallback, useMemo } from 'react';
+import { useCallback, useEffect, useMemo, useRef } from 'react';
 import { lotViewQuery, lotViewSchema, type LotView } from '@/lib/contracts/lot-view';
 
 /**
@@ -12,12 +12,26 @@ export function useLotView(): [LotView, (change: Partial<LotView>) => void] {
   const path = usePathname();
   const query = useSearchParams();
   const view = useMemo(() => lotViewSchema.parse(Object.fromEntries(query)), [query]);
+  const shown = lotViewQuery(view);
+  /** Asked for and not drawn yet. Until then the router may still put an older address back, which must not be built on. */
+  const wanted = useRef<LotView | null>(null);
+  useEffect(() => {
+    if (wanted.current && lotViewQuery(wanted.current) === shown) wanted.current = null;
+  }, [shown]);
+  useEffect(() => {
+    const forget = () => {
+      wanted.current = null;
+    };
+    window.addEventListener('popstate', forget);
+    return () => window.removeEventListener('popstate', forget);
+  }, []);
   const change = useCallback(
     (to: Partial<LotView>) => {
-      // The address itself is the newest: two changes may come before the page is drawn again.
-      const now = lotViewSchema.parse(Object.fromEntries(new URLSearchParams(window.location.search)));
-      const next = lotViewQuery({ ...now, ...to });
-      window.history.pushState(null, '', next ? `${path}?${next}` : path);
+      const address = Object.fromEntries(new URLSearchParams(window.location.search));
+      const next = { ...(wanted.current ?? lotViewSchema.parse(address)), ...to };
+      wanted.current = next;
+      const text = lotViewQuery(next);
+      window.history.pushState(null, '', text ? `${path}?${text}` : path);
     },
     [path],
   );
