@@ -3,7 +3,7 @@ import type { Clock } from '../clock/clock';
 import { InstrumentError, type InstrumentErrorCode, type InstrumentName } from '../instruments/instrument-error';
 import type { Binding } from './binding';
 import { LineSplitter } from './line-splitter';
-import type { SyncWords } from './sync-words';
+import type { SyncRequest, SyncWords } from './sync-words';
 
 export interface LinkOptions {
   instrument: InstrumentName;
@@ -29,6 +29,8 @@ const defaultReopenDelaysMs = [200, 300, 500, 1000, 1000, 2000, 2000, 3000];
 const syncAttempts = 3;
 const syncDeadlineMs = 1000;
 const quietMs = 20;
+/** How long after an unanswered request its answer is still expected to come. */
+const lateMs = 10_000;
 
 /**
  * Lines over a serial port, one exchange at a time, each with a deadline. After a missing, broken or unasked answer
@@ -41,6 +43,7 @@ export class SerialLink {
   private queue: Promise<unknown> = Promise.resolve();
   private suspect = true;
   private syncNumber = 0;
+  private unanswered: { request: SyncRequest; untilMs: number } | null = null;
   private current: LinkState = 'closed';
   private readonly lines = new LineSplitter((line) => this.hear(line));
   private readonly watchers = new Set<(state: LinkState) => void>();
@@ -81,7 +84,12 @@ export class SerialLink {
     return this.inTurn(async () => {
       // Half a line means that the rest of something late is still on its way.
       if (this.lines.clear() || this.suspect) await this.synchronise();
-      return this.transfer(message, deadlineMs, () => true);
+      return this.transfer(
+        message,
+        deadlineMs,
+        () => true,
+        (line) => this.isLate(line, message),
+      );
     });
   }
 
@@ -109,7 +117,19 @@ export class SerialLink {
     return turn;
   }
 
-  private async transfer(message: string, deadlineMs: number, isAnswer: (line: string) => boolean): Promise<string> {
+  /** An answer to a request to synchronise that went unanswered may come after a later one was believed. */
+  private isLate(line: string, asked: string): boolean {
+    const { unanswered } = this;
+    if (!unanswered || this.options.clock.now() > unanswered.untilMs) return false;
+    return unanswered.request.couldBeLate?.(line, asked) ?? false;
+  }
+
+  private async transfer(
+    message: string,
+    deadlineMs: number,
+    isAnswer: (line: string) => boolean,
+    isLate: (line: string) => boolean = () => false,
+  ): Promise<string> {
     const { clock } = this.options;
     return new Promise<string>((resolve, reject) => {
       const cancel = clock.after(deadlineMs, () =>
@@ -123,6 +143,8 @@ export class SerialLink {
       this.pending = {
         onLine: (line) => {
           if (line === null) finish(() => reject(this.doubt('instrument-garbled', 'sent bytes that are no text.')));
+          else if (isLate(line))
+            finish(() => reject(this.doubt('instrument-garbled', 'answered an earlier question, late.')));
           else if (isAnswer(line)) finish(() => resolve(line));
         },
         fail: (error) => finish(() => reject(error)),
@@ -152,6 +174,7 @@ export class SerialLink {
         if (!this.suspect && !this.lines.clear()) return;
       } catch (error) {
         failure = error;
+        this.unanswered = { request, untilMs: this.options.clock.now() + lateMs };
         if (this.current !== 'open') break;
       }
     }

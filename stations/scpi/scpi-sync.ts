@@ -15,6 +15,7 @@ export const scpiSync: SyncWords = (n) => {
   return {
     message: `${'*OPC?;'.repeat(ones)}*IDN?`,
     isAnswer: (line) => line.startsWith(start) && isIdentity(line.slice(start.length)),
+    couldBeLate: (line, asked) => line.startsWith('1;') && !asked.includes(';'),
   };
 };
 
@@ -33,6 +34,7 @@ export const scpiSyncByLines: SyncWords = (n) => {
       ones = 0;
       return answered;
     },
+    couldBeLate: (line, asked) => (line === '1' || isIdentity(line)) && !asked.includes('*IDN?'),
   };
 };
 

@@ -23,7 +23,9 @@ async function signIn(badge: string, pin: string): Promise<ScreenInTest> {
   const screen = await live.screen('S2', await live.enrol('S2'));
   await screen.until(({ leads, view }) => leads === true && view?.screen.kind === 'badge', 10_000);
   await screen.scan(`SWB-${badge}`);
-  await screen.command({ kind: 'pin', digits: pin });
+  expect(await screen.command({ kind: 'pin', digits: pin })).toEqual({ ok: true });
+  // The answer may come before the view that shows what it did.
+  await screen.until(({ view }) => view?.operator != null);
   return screen;
 }
 
