@@ -2,14 +2,6 @@ import type { Cancel, Clock } from './clock';
 import { sleepOn } from './sleep-on';
 import { TimerQueue } from './timer-queue';
 
-interface Pace {
-  startWallMs: number;
-  /** Turns without a new timer after which everyone is taken to wait for time. */
-  idleTurns: number;
-  /** Lets everything runnable go first. */
-  nextTurn(turn: () => void): void;
-}
-
 /**
  * Discrete-event time: jumps to the next timer once nothing else is runnable. Promises and `nextTick` (all that streams
  * and the mock binding use) drain before a `setImmediate` turn, so two quiet turns mean that everyone waits for time.
@@ -22,14 +14,14 @@ export class VirtualClock implements Clock {
   private holds = 0;
   private readonly timers = new TimerQueue();
 
-  constructor(private readonly pace: Pace = withStreams) {}
+  constructor(private readonly options: { startWallMs: number; idleTurns: number } = defaults) {}
 
   now(): number {
     return this.nowMs;
   }
 
   wallTimeMs(): number {
-    return this.pace.startWallMs + this.nowMs;
+    return this.options.startWallMs + this.nowMs;
   }
 
   after(ms: number, run: () => void): Cancel {
@@ -58,13 +50,13 @@ export class VirtualClock implements Clock {
   private pump(): void {
     if (this.pumping || this.holds > 0 || this.timers.size === 0) return;
     this.pumping = true;
-    this.pace.nextTurn(this.turn);
+    setImmediate(this.turn);
   }
 
   private readonly turn = (): void => {
     this.pumping = false;
     if (this.holds > 0) return;
-    if (++this.quietTurns >= this.pace.idleTurns) {
+    if (++this.quietTurns >= this.options.idleTurns) {
       const timer = this.timers.pop();
       if (timer) {
         this.nowMs = timer.atMs;
@@ -76,14 +68,4 @@ export class VirtualClock implements Clock {
   };
 }
 
-const startWallMs = Date.UTC(2026, 0, 5, 6);
-const withStreams: Pace = { startWallMs, idleTurns: 2, nextTurn: setImmediate };
-/**
- * Where nothing but promises stands between timers: a tick asked for by a promise runs once all promises have drained.
- * Starves the event loop until no timer is left.
- */
-export const promisesOnly: Pace = {
-  startWallMs,
-  idleTurns: 1,
-  nextTurn: (turn) => queueMicrotask(() => process.nextTick(turn)),
-};
+const defaults = { startWallMs: Date.UTC(2026, 0, 5, 6), idleTurns: 2 };

@@ -1,25 +1,16 @@
 import { scaleLinear } from 'd3-scale';
-import type { Ref } from 'react';
-import type { LotReview } from '@/lib/contracts/lot-review';
 import { boardX, chartBox, shownBoards } from './chart-scale';
 import { quantityLooks, scaleText } from './quantity-look';
 import { dotsPath } from './thin-line';
+import type { SeriesProps } from './series-props';
 import { ValueAxis } from './value-axis';
-
-interface FoundSeriesProps {
-  review: LotReview;
-  width: number;
-  chosen: number | null;
-  label: string;
-  ref?: Ref<SVGSVGElement>;
-}
 
 const height = 124;
 const top = 8;
 const bottom = height - 8;
 
 /** Values as found before trim: what the boards came with. On an axis of their own, since they lie far outside the limits. */
-export function FoundSeries({ review, width, chosen, label, ref }: FoundSeriesProps) {
+export function FoundSeries({ review, width, chosen, label, ref }: SeriesProps) {
   const { points, limits, quantity } = review;
   const box = chartBox(width);
   const shown = shownBoards(points.serials.length, review.size, box.narrow);

@@ -1,27 +1,18 @@
 import { scaleLinear } from 'd3-scale';
-import type { Ref } from 'react';
-import type { LotReview } from '@/lib/contracts/lot-review';
 import { sampleQuantile } from '@/lib/statistics/summary/quantiles';
 import { movingRangeOf } from './moving-range-of';
 import { boardX, chartBox, shownBoards } from './chart-scale';
 import { valueText } from './quantity-look';
 import { boardsAStroke, dotsPath, linePath } from './thin-line';
+import type { SeriesProps } from './series-props';
 import { ValueAxis } from './value-axis';
-
-interface MovingRangeProps {
-  review: LotReview;
-  width: number;
-  chosen: number | null;
-  label: string;
-  ref?: Ref<SVGSVGElement>;
-}
 
 const height = 104;
 const top = 8;
 const bottom = height - 8;
 
 /** Distance of every board to the measured one before, under the individuals and on their x-axis. */
-export function MovingRange({ review, width, chosen, label, ref }: MovingRangeProps) {
+export function MovingRange({ review, width, chosen, label, ref }: SeriesProps) {
   const { points, baseline, quantity } = review;
   const box = chartBox(width);
   const shown = shownBoards(points.serials.length, review.size, box.narrow);
